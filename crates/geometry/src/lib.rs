@@ -1,0 +1,26 @@
+//! Zones, fronts, steps, growing, the shell and its measures.
+//!
+//! Conventions: millimetres, radians, f64; right-handed with z up; panels counter-clockwise seen from outside; dihedral
+//! angles measured inside, from 0 to a full turn. Nothing here reads or writes files, knows colours, formats numbers or starts threads.
+
+pub mod finding;
+pub mod grow;
+pub mod inspect;
+pub mod measure;
+mod record;
+mod shell;
+mod space;
+pub mod start;
+
+pub use finding::{Code, Finding, Level, Place, Unit};
+pub use grow::{grow, grow_until};
+pub use record::{
+    Act, Courses, Direction, Finish, FinishAct, LetterName, Maker, Outside, PanelName, Placement, RoleRule, Shape,
+    Side, Sign, Spurs, Step, StepId, Tolerances, VName, Vs, ZoneRef, ZoneRule, ZoneVector,
+};
+pub use shell::{
+    Course, CrowdedEdge, Edge, FrontLetter, FrontState, Grown, Letter, NONE, OpenV, Panel, Pinch, Rim, Seam, Shell,
+    Tee, Zone, ZoneKind,
+};
+pub use space::{Angle, Point, Vector};
+pub use start::{FirstWord, Role, Start, StartLetter, StartZone};

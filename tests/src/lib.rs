@@ -1,0 +1,1 @@
+//! Whole designs in, every output compared.
