@@ -1,5 +1,7 @@
 //! First words against published and derived figures. "theory N" is the section of the project's collected theory, with its sources.
 
+#![expect(clippy::unwrap_used, reason = "a test that cannot go on fails")]
+
 use std::f64::consts::{PI, TAU};
 
 use zonewright_geometry::start::{
@@ -201,8 +203,8 @@ fn polar_fixtures() {
         close(lowest, -184.698_442_6 * f64::from(course), 1e-6);
     }
     for (form, height, width) in [
-        (polar(9, 38.0, 300.0), 1662.285_983_4, 1361.391_920_5),
-        (polar(8, 45.0, 1000.0), 5656.854_249_5, 3414.213_562_4),
+        (polar(9, 38.0, 300.0), 1_662.285_983_4, 1_361.391_920_5),
+        (polar(8, 45.0, 1000.0), 5_656.854_249_5, 3_414.213_562_4),
     ] {
         close(form.height_mm().unwrap(), height, 1e-6);
         close(form.width_mm().unwrap(), width, 1e-6);
@@ -273,7 +275,7 @@ fn ribbon_points_are_sums_on_a_helicoid() {
     let s = |i, j| p(i) + p(j);
     for ((i, j), expected) in [
         ((0, 9), Vector::new(173.205_080_8, 982.294_825_6, 900.0)),
-        ((6, 13), Vector::new(173.205_080_8, 1323.442_238_3, 1900.0)),
+        ((6, 13), Vector::new(173.205_080_8, 1_323.442_238_3, 1900.0)),
     ] {
         close(s(i, j).distance(expected), 0.0, 1e-6);
     }

@@ -1,5 +1,7 @@
 //! Free paths: links, closing gaps, and edits, each followed by a check of what must hold.
 
+#![expect(clippy::unwrap_used, reason = "a test that cannot go on fails")]
+
 use proptest::prelude::*;
 use zonewright_geometry::start::{DragRule, FreeLetter, FreePath, FreeVector, PathEnd, PolarBy, PolarForm};
 use zonewright_geometry::{Angle, Code, Point, Role, Sign, Start, Vector};
@@ -18,7 +20,7 @@ fn points(count: usize) -> Vec<Point> {
 }
 
 fn same(id: u32, to: u32, sign: Sign) -> FreeLetter {
-    let role = if id % 2 == 0 { Role::Zig } else { Role::Zag };
+    let role = if id.is_multiple_of(2) { Role::Zig } else { Role::Zag };
     FreeLetter {
         id,
         vector: FreeVector::Same(to, sign),

@@ -1,5 +1,7 @@
 //! Stars, star paths and star solids against theory 3 and 4.
 
+#![expect(clippy::unwrap_used, reason = "a test that cannot go on fails")]
+
 use std::collections::BTreeMap;
 
 use zonewright_geometry::start::{AxisClass, Star, StarLength, StarLetter, StarPath, StarSolid};
