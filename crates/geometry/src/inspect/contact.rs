@@ -16,7 +16,7 @@ pub(super) struct Contact {
 }
 
 /// Edges that lie in panels with their own panels on opposite sides, sorted.
-pub(super) fn passages(shell: &Shell, plates: &[Plate], contacts: &[Contact]) -> Vec<Passage> {
+pub(super) fn passages(shell: &Shell, tolerance: f64, contacts: &[Contact]) -> Vec<Passage> {
     if contacts.is_empty() {
         return Vec::new();
     }
@@ -24,14 +24,14 @@ pub(super) fn passages(shell: &Shell, plates: &[Plate], contacts: &[Contact]) ->
     // The edge, the panel that it lies in, and whether what comes there comes from above.
     let mut touches = Vec::new();
     for contact in contacts {
-        let on = &plates[contact.on as usize];
-        let tolerance = on.tolerance.max(plates[contact.panel as usize].tolerance);
+        let [on, of] = [contact.on, contact.panel].map(|p| Plate::new(shell, p, tolerance));
+        let tolerance = on.tolerance.max(of.tolerance);
         for &edge in side_edges(shell, &borders, contact.panel, contact.side) {
             if edge == NONE {
                 continue;
             }
             let ends = shell.edges[edge as usize].ends.map(|v| shell.points[v as usize]);
-            if length_inside(on, ends, tolerance) > tolerance {
+            if length_inside(&on, ends, tolerance) > tolerance {
                 touches.push((edge, contact.on, contact.above));
             }
         }

@@ -95,38 +95,36 @@ impl Inspection {
 /// Everything but the near misses.
 fn meetings(shell: &Shell) -> Inspection {
     let contact = contact_tolerance(shell);
-    let panels = || 0_u32..u32::try_from(shell.panels.len()).unwrap_or(u32::MAX);
-    let plates: Vec<Plate> = panels().map(|p| Plate::new(shell, p, contact)).collect();
-    let whole = panels().filter(|&p| plates[p as usize].is_whole());
-    let tree = Tree::new(whole.map(|p| (p, plates[p as usize].extent())).collect());
+    let panels = 0_u32..u32::try_from(shell.panels.len()).unwrap_or(u32::MAX);
+    let plates = panels.map(|p| Plate::new(shell, p, contact));
+    let whole = plates.filter(Plate::is_whole);
+    let tree = Tree::new(whole.map(|p| (p.panel, p.extent())).collect());
+    // Along the curve, so that panels which are close are also close in memory.
+    let plates: Vec<Plate> = tree.order().map(|p| Plate::new(shell, p, contact)).collect();
 
-    let [mut crossing, mut doubled] = [Vec::new(), Vec::new()];
+    let (mut crossing, mut doubled) = (Vec::new(), Vec::new());
     let mut contacts = Vec::new();
-    tree.pairs(|one, other| {
-        let pair = [one.min(other), one.max(other)];
-        let [a, b] = pair.map(|p| &plates[p as usize]);
+    tree.pairs(|i, j| {
+        let [a, b] = [&plates[i], &plates[j]];
+        let pair = [a.panel.min(b.panel), a.panel.max(b.panel)];
         match pair::meet(a, b) {
             Meeting::Apart => {}
-            Meeting::Crossing => crossing.push(pair),
+            Meeting::Crossing => crossing.push(Crossing {
+                panels: pair,
+                shares_corner: a.shares_place(b),
+            }),
             Meeting::Doubled => doubled.push(pair),
             Meeting::Lies { first, side, above } => {
-                let [panel, on] = if first { pair } else { [pair[1], pair[0]] };
+                let [panel, on] = if first { [a.panel, b.panel] } else { [b.panel, a.panel] };
                 contacts.push(Contact { panel, side, on, above });
             }
         }
     });
     crossing.sort_unstable();
     doubled.sort_unstable();
-    let crossings = crossing.into_iter().map(|panels| {
-        let [a, b] = panels.map(|p| &plates[p as usize]);
-        Crossing {
-            panels,
-            shares_corner: a.shares_place(b),
-        }
-    });
     Inspection {
-        crossings: crossings.collect(),
-        passages: contact::passages(shell, &plates, &contacts),
+        crossings: crossing,
+        passages: contact::passages(shell, contact, &contacts),
         doubled,
         near_misses: Vec::new(),
     }
