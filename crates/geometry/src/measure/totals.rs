@@ -248,11 +248,8 @@ fn sort_key(sine: f64, cosine: f64) -> f64 {
 
 /// The angle that has this key, in radians.
 fn angle_of_key(key: f64) -> f64 {
-    let sine = if key.abs() <= 1.0 {
-        key
-    } else {
-        key.signum() * 2.0 - key
-    };
+    // With its sign also where it is 0: there a panel is folded flat, and the dihedral nothing or a full turn.
+    let sine = key.abs().min(2.0 - key.abs()).copysign(key);
     let cosine = 1.0 - key.abs();
     sine.atan2(cosine)
 }
