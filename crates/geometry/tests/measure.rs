@@ -303,8 +303,8 @@ fn extreme_folds() {
         near(fold(y, z), expected, 1e-6);
     }
     assert_eq!(fold(2.0, 0.0) % 360.0, 0.0);
-    near(fold(3.0, -1e-9), 0.0, 1e-6);
-    near(fold(3.0, 1e-9), 360.0, 1e-6);
+    near(fold(2.0, -1e-9), 0.0, 1e-6);
+    near(fold(2.0, 1e-9), 360.0, 1e-6);
 }
 
 /// Far from the origin the volume and the middle of a panel keep their digits.
