@@ -1,6 +1,8 @@
 //! Depth order against a ray cast: at each pixel's centre a ray is sent at every panel, in f64, by solving for the panel's own
 //! coordinates; what it meets first must be what was painted last. Derived; no figure comes from the painter.
 
+#![expect(clippy::unwrap_used, reason = "a test may")]
+
 mod common;
 
 use common::{crossing, cube, cycle, helicoid, polar, rasterise, shell, waves};
@@ -8,7 +10,7 @@ use proptest::prelude::*;
 use zonewright_geometry::{Angle, NONE, Point, Shell, Vector};
 use zonewright_painter::{Bounds, Camera, Faces, Look, Projection, Scene, Tints, View};
 
-const SIZE: [f32; 2] = [160.0, 120.0];
+const SIZE: [f32; 2] = [120.0, 90.0];
 
 /// Where the ray `from + t along` meets the parallelogram `a + r u + s w`, 0 <= r, s <= 1, by Cramer's rule.
 fn meets(shell: &Shell, panel: u32, from: Point, along: Vector) -> Option<f64> {
@@ -21,7 +23,7 @@ fn meets(shell: &Shell, panel: u32, from: Point, along: Vector) -> Option<f64> {
     (whole != 0.0 && (0.0..=1.0).contains(&r) && (0.0..=1.0).contains(&s)).then_some(t)
 }
 
-/// Picture positions are f32: at 160 pixels they are rounded by up to 8e-6. A centre that near to a border may go either way.
+/// Picture positions are f32: at 120 pixels they are rounded by up to 4e-6, cut ones more. A centre that near to a border may go either way.
 const ROUNDING: f32 = 4e-5;
 
 /// The panel's and the nearest panel's place on the ray through a picture position; none where there is none.
@@ -50,18 +52,17 @@ fn wrong(shell: &Shell, scene: &Scene, camera: &Camera) -> (usize, usize) {
     for (at, &panel) in painted.iter().enumerate() {
         let w = SIZE[0] as usize;
         let centre = [(at % w) as f32 + 0.5, (at / w) as f32 + 0.5];
-        let right = |pos| match cast(shell, camera, pos, panel) {
+        let right = |hits: [Option<f64>; 2]| match hits {
             [None, None] => panel == NONE,
             // Of two panels at the same place either is right.
             [Some(own), Some(nearest)] => own - nearest <= 1e-6 * camera.distance,
             _ => false,
         };
-        covered += usize::from(cast(shell, camera, centre, panel)[1].is_some());
+        let hits = cast(shell, camera, centre, panel);
+        covered += usize::from(hits[1].is_some());
+        let beside = |dx, dy| cast(shell, camera, [centre[0] + dx, centre[1] + dy], panel);
         let off = [-ROUNDING, ROUNDING];
-        let all_right = right(centre)
-            || off
-                .iter()
-                .any(|x| off.iter().any(|y| right([centre[0] + x, centre[1] + y])));
+        let all_right = right(hits) || off.iter().any(|x| off.iter().any(|y| right(beside(x, y))));
         wrong += usize::from(!all_right);
     }
     (wrong, covered)
@@ -121,17 +122,17 @@ fn cyclic_slivers_are_in_order() {
 
 #[test]
 fn helicoid_is_in_order() {
-    from_all_sides("helicoid", &helicoid(40, 6));
+    from_all_sides("helicoid", &helicoid(30, 4));
 }
 
 #[test]
 fn waves_are_in_order() {
-    from_all_sides("waves", &waves(16));
+    from_all_sides("waves", &waves(10));
 }
 
 #[test]
 fn near_and_inside_are_in_order() {
-    for (name, shell) in [("cube", cube()), ("polar", polar(12)), ("helicoid", helicoid(40, 6))] {
+    for (name, shell) in [("cube", cube()), ("polar", polar(12)), ("helicoid", helicoid(30, 4))] {
         let bounds = Bounds::of(&shell).unwrap();
         for share in [0.6, 0.3, 0.1, 0.02] {
             let mut camera = Camera::view(View::Fit, Projection::Perspective, &bounds, SIZE);
@@ -174,11 +175,11 @@ fn degenerate_panels_are_left_out() {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig { cases: 24, ..ProptestConfig::default() })]
+    #![proptest_config(ProptestConfig { cases: 16, ..ProptestConfig::default() })]
     /// Any heap of parallelograms, long and thin ones among them, from anywhere.
     #[test]
     fn heaps_are_in_order(
-        panels in prop::collection::vec(prop::array::uniform9(-100.0..100.0_f64), 2..30),
+        panels in prop::collection::vec(prop::array::uniform9(-100.0..100.0_f64), 2..20),
         azimuth in -180.0..180.0_f64,
         elevation in -90.0..90.0_f64,
         distance in 20.0..600.0_f64,

@@ -151,6 +151,17 @@ pub(crate) fn waves(n: usize) -> Shell {
     shell(&panels)
 }
 
+/// The waves, turned so that nothing in them is parallel to an axis.
+pub(crate) fn turned_waves(n: usize) -> Shell {
+    let mut shell = waves(n);
+    let (s, c) = 0.5_f64.sin_cos();
+    for p in &mut shell.points {
+        let q = p.0;
+        *p = Point::new(q.x * c - q.y * s, q.x * s + q.y * c, q.z + 0.3 * q.x);
+    }
+    shell
+}
+
 /// Whether a point is in a polygon, by crossings of a ray to the right; points on the border belong to one side only.
 fn inside(polygon: &[[f32; 2]], x: f64, y: f64) -> bool {
     let mut odd = false;
