@@ -133,6 +133,14 @@ impl Camera {
 
     /// Moves nearer or away, and sideways, so that a box fills the picture; the direction stays.
     pub fn fit(&mut self, bounds: &Bounds) {
+        self.fit_points(&bounds.corners());
+    }
+
+    /// The same for points, closer than for the box around them. Without a finite point nothing changes.
+    pub fn fit_points(&mut self, points: &[Point]) {
+        let Some(bounds) = Bounds::of_points(points.iter().copied()) else {
+            return;
+        };
         self.target = bounds.centre();
         let lens = self.lens();
         let tangents = [
@@ -143,7 +151,7 @@ impl Camera {
         // x - t z and of -x - t z over the corners give the shift and the least distance. Parallel: without z.
         let mut most = [[f64::MIN; 2]; 2];
         let mut nearest = 0.0_f64;
-        for corner in bounds.corners() {
+        for &corner in points.iter().filter(|point| point.is_finite()) {
             let from = corner - self.target;
             let z = from.dot(lens.forward);
             nearest = nearest.max(-z);

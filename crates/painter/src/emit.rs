@@ -225,7 +225,7 @@ impl<'a> Emitter<'a> {
             None if rim => self.look.palette.rim,
             None => self.look.palette.edge,
         };
-        let wide = if self.edge_colours.is_some() { 2.0 } else { 1.0 };
+        let wide = if self.edge_colours.is_some() && !rim { 1.6 } else { 1.0 };
         let paint = Paint::Stroke {
             // Dashes over what is drawn already stay within its width: where an edge is visible they do not show.
             width: width * if dashed { 0.8 } else { 1.0 } * wide,

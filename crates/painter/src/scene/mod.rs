@@ -32,8 +32,8 @@ pub(crate) struct Segment {
 
 /// The depth order of a shell, built once and good for every camera.
 ///
-/// [`Scene::exact`] divides panels where no order of whole panels would be right: a tree of axis-aligned planes first, then in
-/// each small cell a binary space partition on the panels' own planes (Fuchs, Kedem and Naylor, 1980). Walking the tree back
+/// [`Scene::exact`] divides panels where no order of whole panels would be right: walls that part the panels into
+/// small cells while dividing few of them, then in each cell a binary space partition on the panels' own planes (Fuchs, Kedem and Naylor, 1980). Walking the tree back
 /// to front takes time in proportion to the pieces. [`Scene::quick`] sorts whole panels by their middles: faster to build, for
 /// while something is dragged, and wrong where panels are long or cross.
 #[derive(Clone, Debug)]

@@ -1,4 +1,6 @@
 //! Growing the tree of planes.
+//!
+//! Every plane may stand in the tree; what differs is how many pieces it divides and how evenly it parts them.
 
 use std::collections::BTreeMap;
 
@@ -13,6 +15,8 @@ use crate::picture::index;
 /// Cells with at most so many pieces are ordered by panel planes. Smaller cells divide more panels along the cells' walls,
 /// greater ones take longer; around here the pieces to draw and the time to build are both low.
 const CELL: usize = 16;
+/// A divided piece counts as much as so many pieces by which the two sides differ.
+const DIVIDED: usize = 4;
 /// So many panels are tried for the plane that divides fewest others.
 const TRIED: usize = 32;
 
@@ -32,7 +36,7 @@ struct Task {
     pieces: Vec<u32>,
     /// The parent and which child of it; none for the root.
     under: Option<(u32, usize)>,
-    /// Whether axis-aligned planes are worth a try.
+    /// Whether walls are worth a try.
     cells: bool,
 }
 
@@ -127,36 +131,53 @@ impl Grower {
         }
     }
 
-    /// The axis-aligned plane that parts pieces most evenly while dividing few; none when none does well.
+    /// The plane that parts pieces most evenly while dividing few; none when none does well.
+    ///
+    /// Tried are axis-aligned planes, and planes upright on a panel along one of its sides: where a surface bends gently these
+    /// run between two rows of panels for a long way.
     fn wall(&self, pieces: &[u32]) -> Option<(Vector, f64)> {
         let count = pieces.len();
-        let ranges: Vec<[Vector; 2]> = pieces
+        let middles: Vec<Vector> = pieces
             .iter()
             .map(|&piece| {
-                let mut range = [Vector::MAX, Vector::MIN];
-                for point in self.pieces.points_of(piece) {
-                    range = [range[0].min(point), range[1].max(point)];
-                }
-                range
+                let corners = self.pieces.corners_of(piece);
+                let [a, b] = [corners[0], corners[corners.len() / 2]].map(|v| self.pieces.points[v as usize]);
+                (a + b) * 0.5
             })
             .collect();
-        let mut best: Option<(usize, Vector, f64)> = None;
-        let mut ends = Vec::with_capacity(count);
+        let mut tried = Vec::with_capacity(16);
+        let mut order: Vec<usize> = (0..count).collect();
         for (axis, normal) in [Vector::X, Vector::Y, Vector::Z].into_iter().enumerate() {
-            ends.clear();
-            ends.extend(ranges.iter().map(|range| range[1][axis]));
-            for part in [42, 50, 58] {
-                // A plane at the end of a piece, not through its middle: in regular shells whole rows end there.
-                let (_, &mut offset, _) = ends.select_nth_unstable_by(count * part / 100, f64::total_cmp);
-                let slack = self.pieces.slack;
-                let before = ranges.iter().filter(|range| range[1][axis] > offset + slack).count();
-                let behind = ranges.iter().filter(|range| range[0][axis] < offset - slack).count();
-                let divided = (before + behind).saturating_sub(count);
-                let most = before.max(behind);
-                let cost = most - before.min(behind) + 3 * divided;
-                if most * 10 <= count * 8 && best.is_none_or(|(least, ..)| cost < least) {
-                    best = Some((cost, normal, offset));
+            let by_place = |a: &usize, b: &usize| middles[*a][axis].total_cmp(&middles[*b][axis]).then(a.cmp(b));
+            let (_, &mut middle, _) = order.select_nth_unstable_by(count / 2, by_place);
+            let piece = pieces[middle];
+            let corners = self.pieces.corners_of(piece);
+            let upright = self.planes[self.pieces.all[piece as usize].panel as usize].normal;
+            for (k, &from) in corners.iter().enumerate() {
+                let to = corners[(k + 1) % corners.len()];
+                let [from, to] = [from, to].map(|v| self.pieces.points[v as usize]);
+                let across = upright.cross(to - from).normalize_or_zero();
+                if across != Vector::ZERO {
+                    tried.push((across, across.dot(from)));
                 }
+                // At a corner, not through the middle: in regular shells whole rows end there.
+                tried.push((normal, from[axis]));
+            }
+        }
+        let slack = self.pieces.slack;
+        let mut best: Option<(usize, Vector, f64)> = None;
+        for (normal, offset) in tried {
+            let (mut before, mut behind) = (0, 0);
+            for &piece in pieces {
+                let [least, most] = self.pieces.heights(piece, normal, offset);
+                before += usize::from(most > slack);
+                behind += usize::from(least < -slack);
+            }
+            let divided = (before + behind).saturating_sub(count);
+            let most = before.max(behind);
+            let cost = most - before.min(behind) + DIVIDED * divided;
+            if most * 10 <= count * 8 && best.is_none_or(|(least, ..)| cost < least) {
+                best = Some((cost, normal, offset));
             }
         }
         best.map(|(_, normal, offset)| (normal, offset))
@@ -179,7 +200,7 @@ impl Grower {
                 }
             }
             let divided = (before + behind).saturating_sub(pieces.len() - 1);
-            let cost = divided * 8 + before.abs_diff(behind);
+            let cost = divided * 2 * DIVIDED + before.abs_diff(behind);
             if best.is_none_or(|(least, _)| cost < least) {
                 best = Some((cost, panel));
                 if cost <= 1 {
