@@ -5,7 +5,6 @@ use std::process::ExitCode;
 use zonewright::{
     command_line::{Asked, fail, run},
     document::read_design,
-
 };
 
 fn main() -> ExitCode {

@@ -1,5 +1,7 @@
 //! `docs/format.md` and the whole files beside it: every field is named there, and every file is read and grown.
 
+#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
+
 mod designs;
 
 use std::{collections::BTreeSet, fs, path::Path};
@@ -14,7 +16,10 @@ fn docs() -> std::path::PathBuf {
 }
 
 fn examples() -> Vec<(String, Design)> {
-    let mut files: Vec<_> = fs::read_dir(docs().join("examples")).unwrap().map(|f| f.unwrap().path()).collect();
+    let mut files: Vec<_> = fs::read_dir(docs().join("examples"))
+        .unwrap()
+        .map(|f| f.unwrap().path())
+        .collect();
     files.sort();
     let read = |p: &std::path::PathBuf| {
         let design = read_design(p).unwrap_or_else(|error| panic!("{error}"));
@@ -30,7 +35,10 @@ fn every_example_grows() {
         assert!(!shell.panels.is_empty(), "{name}");
         let bad = findings.iter().find(|f| {
             f.level() == Level::Stop
-                || matches!(f.code, Code::StepFoundNothing | Code::VChanged | Code::NameLost | Code::RimNotBalanced)
+                || matches!(
+                    f.code,
+                    Code::StepFoundNothing | Code::VChanged | Code::NameLost | Code::RimNotBalanced
+                )
         });
         assert!(bad.is_none(), "{name}: {bad:?}");
     }
@@ -70,7 +78,13 @@ fn every_field_and_word_of_the_file_is_documented() {
     for _ in 0..400 {
         let mut design = designs::any_design().new_tree(&mut runner).unwrap().current();
         design.name = "n".to_owned();
-        for name in design.shape.steps.iter_mut().map(|s| &mut s.name).chain(design.shape.finish.iter_mut().map(|f| &mut f.name)) {
+        for name in design
+            .shape
+            .steps
+            .iter_mut()
+            .map(|s| &mut s.name)
+            .chain(design.shape.finish.iter_mut().map(|f| &mut f.name))
+        {
             *name = name.as_ref().map(|_| "n".to_owned());
         }
         let text = to_text(&design);

@@ -1,5 +1,7 @@
 //! What the command line refuses: with status 2, one line on standard error, and no file touched.
 
+#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
+
 mod designs;
 mod program;
 
@@ -11,7 +13,10 @@ use program::{done, errors, printed, run, status, zonewright};
 fn assert_refused(output: &std::process::Output, line: &str) {
     let said = errors(output);
     assert_eq!(status(output), 2, "{line}: {said}");
-    assert!(said.starts_with("zonewright: ") && said.trim_end().lines().count() == 1, "{line}: {said}");
+    assert!(
+        said.starts_with("zonewright: ") && said.trim_end().lines().count() == 1,
+        "{line}: {said}"
+    );
     assert!(printed(output).is_empty(), "{line}");
 }
 
@@ -65,9 +70,18 @@ fn starts_that_cannot_be_used_make_no_file() {
 #[test]
 fn the_limit_is_named() {
     let folder = tempfile::tempdir().unwrap();
-    let said = errors(&run(folder.path(), "start polar --ribs 2 --pitch 40 --edge 600 -o x.ron"));
-    assert!(said.contains("ribs") && said.contains('2') && said.contains('3'), "{said}");
-    let said = errors(&run(folder.path(), "start polar --ribs 9 --pitch 40 --edge -5 -o x.ron"));
+    let said = errors(&run(
+        folder.path(),
+        "start polar --ribs 2 --pitch 40 --edge 600 -o x.ron",
+    ));
+    assert!(
+        said.contains("ribs") && said.contains('2') && said.contains('3'),
+        "{said}"
+    );
+    let said = errors(&run(
+        folder.path(),
+        "start polar --ribs 9 --pitch 40 --edge -5 -o x.ron",
+    ));
     assert!(said.contains("edge") && said.contains("-5"), "{said}");
 }
 
@@ -94,8 +108,16 @@ fn files_that_cannot_be_read_stay_as_they_are() {
     let cut = &designs::POLAR[..designs::POLAR.len() - 12];
     let files = [
         ("truncated", cut.to_owned(), "line "),
-        ("newer", designs::POLAR.replace("format: 1", "format: 7"), "newer version: format 7"),
-        ("unknown", designs::POLAR.replace("ribs: 9", "ribs: 9, rips: 9"), "`rips`"),
+        (
+            "newer",
+            designs::POLAR.replace("format: 1", "format: 7"),
+            "newer version: format 7",
+        ),
+        (
+            "unknown",
+            designs::POLAR.replace("ribs: 9", "ribs: 9, rips: 9"),
+            "`rips`",
+        ),
         ("empty", String::new(), "line 1"),
         ("binary", "\u{0}\u{1}".to_owned(), "line 1"),
         ("mine.csv", "0,0,0\n".to_owned(), "line 1"),
@@ -157,7 +179,11 @@ fn a_hostile_file_is_answered_in_time() {
         let output = run(folder.path(), &format!("check {name} --json"));
         assert!(status(&output) <= 2, "{name}");
     }
-    fs::write(folder.path().join("deep"), format!("(format: 1, shape: {}", "[".repeat(5_000_000))).unwrap();
+    fs::write(
+        folder.path().join("deep"),
+        format!("(format: 1, shape: {}", "[".repeat(5_000_000)),
+    )
+    .unwrap();
     assert_refused(&run(folder.path(), "report deep"), "deep");
     assert!(begun.elapsed().as_secs() < 20);
 }
@@ -176,7 +202,14 @@ fn without_a_display_one_sentence_names_the_command_line() {
 #[test]
 fn help_is_no_error() {
     let folder = tempfile::tempdir().unwrap();
-    for line in ["--help", "--version", "start --help", "start polar --help", "start star-solid --help", "help export"] {
+    for line in [
+        "--help",
+        "--version",
+        "start --help",
+        "start polar --help",
+        "start star-solid --help",
+        "help export",
+    ] {
         assert!(!done(folder.path(), line).is_empty(), "{line}");
     }
     let help = done(folder.path(), "start star-solid --help");

@@ -15,13 +15,21 @@ fn read(file: &Path) -> Result<Design, String> {
 /// Prints the readouts.
 pub(super) fn report(file: &Path, json: bool) -> Result<(), String> {
     let report = work_out(&read(file)?);
-    say(&if json { report.to_json() + "\n" } else { report.to_text() })
+    say(&if json {
+        report.to_json() + "\n"
+    } else {
+        report.to_text()
+    })
 }
 
 /// Prints the findings; whether one of them says stop.
 pub(super) fn check(file: &Path, json: bool) -> Result<bool, String> {
     let report: Report = work_out(&read(file)?);
-    say(&if json { findings_to_json(&report) + "\n" } else { findings_to_text(&report) })?;
+    say(&if json {
+        findings_to_json(&report) + "\n"
+    } else {
+        findings_to_text(&report)
+    })?;
     Ok(any_stop(&report))
 }
 
@@ -29,12 +37,16 @@ pub(super) fn check(file: &Path, json: bool) -> Result<bool, String> {
 pub(super) fn export(file: &Path, to: &Path, only: &[String]) -> Result<(), String> {
     let report = work_out(&read(file)?);
     if report.shell.panels.is_empty() {
-        return Err(format!("cannot export {}: it has no panels; lay a course", file.display()));
+        return Err(format!(
+            "cannot export {}: it has no panels; lay a course",
+            file.display()
+        ));
     }
     let only: Vec<&str> = only.iter().map(String::as_str).collect();
     let files = zonewright_shop::export(&report.shell, &report.parts, &only)
         .map_err(|error| uncapitalised(&error.to_string()))?;
-    let unwritten = |path: &Path, cause: std::io::Error| format!("cannot write {}: {cause}; choose another place", path.display());
+    let unwritten =
+        |path: &Path, cause: std::io::Error| format!("cannot write {}: {cause}; choose another place", path.display());
     fs::create_dir_all(to).map_err(|cause| unwritten(to, cause))?;
     for (name, bytes) in files {
         let path = to.join(name);

@@ -35,9 +35,8 @@ pub(super) fn write(file: &Path, output: &Path, view: &str, size: [u32; 2]) -> R
     };
     let picture = Scene::exact(&shell).picture(&shell, &camera, &look, &Tints::default(), &[]);
     let png = raster::png(&picture, font().as_deref()).map_err(|error| error.to_string())?;
-    write_whole(output, &png).map_err(|cause| {
-        format!("cannot write {}: {cause}; choose another place", output.display())
-    })
+    write_whole(output, &png)
+        .map_err(|cause| format!("cannot write {}: {cause}; choose another place", output.display()))
 }
 
 /// The window's own text font, so that pictures and window look alike.

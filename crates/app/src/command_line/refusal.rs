@@ -23,7 +23,11 @@ pub(super) fn sentence(finding: &Finding) -> String {
     let text = FindingWriter::new(&Shell::default(), &parts).write(finding).text;
     let remedy = finding.code.text().remedy;
     let what = text.strip_suffix(remedy).unwrap_or(&text).trim_end_matches(['.', ' ']);
-    format!("{}; {}", uncapitalised(what), uncapitalised(remedy.trim_end_matches('.')))
+    format!(
+        "{}; {}",
+        uncapitalised(what),
+        uncapitalised(remedy.trim_end_matches('.'))
+    )
 }
 
 /// The text with its first letter small, to stand inside a sentence.

@@ -105,7 +105,10 @@ impl Report {
             size_mm: totals.size.to_array(),
             closing_gap_mm: shell.closing_gap,
             courses: courses.collect(),
-            panel_list: (0..).zip(&self.parts.panels).map(|(at, part)| self.panel(at, part)).collect(),
+            panel_list: (0..)
+                .zip(&self.parts.panels)
+                .map(|(at, part)| self.panel(at, part))
+                .collect(),
         };
         // Writing plain numbers and texts to a string cannot fail.
         serde_json::to_string(&readouts).unwrap_or_default()

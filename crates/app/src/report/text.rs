@@ -36,7 +36,11 @@ impl Report {
         line(out, "Distinct bevels", &count(self.parts.distinct_bevels));
         line(out, "Zones", &count(totals.zones));
         line(out, "Vertices", &count(totals.vertices));
-        line(out, "Edges", &format!("{} ({} open)", count(totals.edges), count(totals.open_edges)));
+        line(
+            out,
+            "Edges",
+            &format!("{} ({} open)", count(totals.edges), count(totals.open_edges)),
+        );
         line(out, "Rims", &count(totals.rims));
         line(out, "V - E + F", &totals.euler.to_string());
         let some = [
@@ -88,7 +92,12 @@ impl Report {
             let acute = pattern.acute_deg.map_or_else(|| "-".to_owned(), |a| degrees(a, 2));
             let sides: Vec<String> = sides(pattern.sides_mm().collect(), self.units);
             let mark = family.mark.as_str();
-            let _ = writeln!(out, "{mark:<6}  {:>6}  {acute:<7}  {}", family.panels.len(), sides.join(", "));
+            let _ = writeln!(
+                out,
+                "{mark:<6}  {:>6}  {acute:<7}  {}",
+                family.panels.len(),
+                sides.join(", ")
+            );
         }
         let more = self.parts.families.len().saturating_sub(FAMILIES);
         if more > 0 {
@@ -114,6 +123,10 @@ fn line(out: &mut String, name: &str, value: &str) {
 fn range(out: &mut String, name: &str, range: Option<Range>, shown: impl Fn(f64) -> String) {
     let Some(range) = range else { return };
     let (least, most) = (shown(range.least), shown(range.most));
-    let value = if least == most { least } else { format!("{least} to {most}") };
+    let value = if least == most {
+        least
+    } else {
+        format!("{least} to {most}")
+    };
     line(out, name, &value);
 }
