@@ -9,20 +9,23 @@ use core::f64::consts::FRAC_PI_4;
 pub(super) fn part_of_turn(k: i64, n: u32) -> (f64, f64) {
     let n = i64::from(n);
     let eighths = k.rem_euclid(n) * 8;
+    let (octant, over) = (eighths / n, eighths % n);
     #[expect(clippy::cast_precision_loss, reason = "n is at most the largest u32, exact in f64")]
-    eighth(eighths / n, (eighths % n) as f64 / n as f64)
+    eighth(octant, over as f64 / n as f64, (n - over) as f64 / n as f64)
 }
 
 /// Cosine and sine of an angle in degrees; finite.
 pub(super) fn degrees(angle: f64) -> (f64, f64) {
     let eighths = angle.rem_euclid(360.0) / 45.0;
+    let part = eighths - eighths.floor();
     #[expect(clippy::cast_possible_truncation, reason = "between 0 and 8")]
-    eighth(eighths.floor() as i64, eighths - eighths.floor())
+    eighth(eighths.floor() as i64, part, 1.0 - part)
 }
 
-/// Cosine and sine of `octant` eighths of a turn and a part of the next, from 0 to below 1.
-fn eighth(octant: i64, part: f64) -> (f64, f64) {
-    let within = if octant % 2 == 0 { part } else { 1.0 - part };
+/// Cosine and sine of `octant` eighths of a turn and `part` of the next, where `rest` is left of it. Both are given, so that
+/// mirrored directions are computed from the same bits.
+fn eighth(octant: i64, part: f64, rest: f64) -> (f64, f64) {
+    let within = if octant % 2 == 0 { part } else { rest };
     let (small, large) = (within * FRAC_PI_4).sin_cos();
     match octant.rem_euclid(8) {
         0 => (large, small),
