@@ -45,7 +45,7 @@ fn polar_nine() {
         .collect();
     let angles = [31.2708826975, 60.8650824886, 86.0687990795, 180.0 - 101.7986722703];
     assert!(acute.iter().zip(angles).all(|(a, b)| (a - b).abs() < 1e-9), "{acute:?}");
-    let areas = [46_717.6333, 78_612.8108, 89_788.2383, 88_098.4915];
+    let areas = [46717.6333, 78612.8108, 89788.2383, 88098.4915];
     for (family, area) in parts.families.iter().zip(areas) {
         assert!((parts.panels[family.panels[0] as usize].area_mm2 - area).abs() < 1e-3);
     }
