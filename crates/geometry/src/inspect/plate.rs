@@ -7,6 +7,7 @@ use crate::{Point, Shell, Vector};
 
 /// A panel with what every question about it needs.
 pub(super) struct Plate {
+    pub(super) panel: u32,
     pub(super) vertices: [u32; 4],
     pub(super) corners: [Point; 4],
     /// Cross product of the sides at corner 0.
@@ -35,6 +36,7 @@ impl Plate {
         // Zero on a grown panel. Joining rims moves corners, and what is bent by so much cannot be told apart by less.
         let bend = ((c - b) - v).length();
         Self {
+            panel,
             vertices: shell.panels[panel as usize].corners,
             corners,
             normal,
