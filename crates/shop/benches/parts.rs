@@ -3,7 +3,9 @@
 //! Goal (design figures): within a 60 Hz frame of 16.7 ms together with growing and drawing, on one core.
 
 use divan::{Bencher, black_box};
-use zonewright_geometry::{Edge, Letter, Maker, NONE, Panel, Point, Role, Shell, Sign, Vector, Zone, ZoneKind, ZoneRef};
+use zonewright_geometry::{
+    Edge, Letter, Maker, NONE, Panel, Point, Role, Shell, Sign, Vector, Zone, ZoneKind, ZoneRef,
+};
 use zonewright_shop::{FamilyTolerance, Parts, lists};
 
 fn main() {
@@ -28,7 +30,10 @@ fn patch(n: u32, uneven: f64) -> Shell {
     let across: Vec<Vector> = path(Vector::X).collect();
     let along: Vec<Vector> = path(Vector::new(0.2, 1.0, 0.0)).collect();
     let mut shell = Shell::default();
-    shell.points = along.iter().flat_map(|&q| across.iter().map(move |&p| Point(p + q))).collect();
+    shell.points = along
+        .iter()
+        .flat_map(|&q| across.iter().map(move |&p| Point(p + q)))
+        .collect();
     let vertex = |i: u32, j: u32| j * (n + 1) + i;
     let panel = |i: u32, j: u32| if i < n && j < n { j * n + i } else { NONE };
     for j in 0..n {
@@ -44,11 +49,15 @@ fn patch(n: u32, uneven: f64) -> Shell {
         for i in 0..=n {
             if i < n {
                 let below = j.checked_sub(1).map_or(NONE, |j| panel(i, j));
-                shell.edges.push(edge([vertex(i, j), vertex(i + 1, j)], [panel(i, j), below]));
+                shell
+                    .edges
+                    .push(edge([vertex(i, j), vertex(i + 1, j)], [panel(i, j), below]));
             }
             if j < n {
                 let before = i.checked_sub(1).map_or(NONE, |i| panel(i, j));
-                shell.edges.push(edge([vertex(i, j + 1), vertex(i, j)], [panel(i, j), before]));
+                shell
+                    .edges
+                    .push(edge([vertex(i, j + 1), vertex(i, j)], [panel(i, j), before]));
             }
         }
     }

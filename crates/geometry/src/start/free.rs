@@ -143,7 +143,7 @@ impl FreePath {
         let mut vectors: Vec<_> = points.windows(2).map(|pair| pair[1] - pair[0]).collect();
         if let Some(&last) = points.last()
             && closed
-            && last != origin
+            && last.distance(origin) >= limits::MIN_LENGTH_MM
         {
             vectors.push(origin - last);
         }
