@@ -9,7 +9,7 @@ use std::{collections::BTreeSet, fs, path::Path};
 use proptest::{strategy::Strategy, strategy::ValueTree, test_runner::TestRunner};
 use zonewright::document::{Design, bundled, parse_design, read_design, to_text};
 use zonewright::report::report;
-use zonewright_geometry::{Act, Code, Level, grow};
+use zonewright_geometry::{Act, Code, Level, Outside, grow};
 
 fn docs() -> std::path::PathBuf {
     Path::new(env!("CARGO_MANIFEST_DIR")).join("../../docs")
@@ -96,6 +96,23 @@ fn every_field_and_word_of_the_file_is_documented() {
     let named: BTreeSet<&str> = format.split(|c: char| !(c.is_ascii_alphabetic() || c == '_')).collect();
     let missing: Vec<_> = words.iter().filter(|w| !named.contains(w.as_str())).collect();
     assert!(missing.is_empty(), "{missing:?}");
+}
+
+#[test]
+fn the_outside_is_the_one_that_a_new_design_would_have() {
+    let bundled = bundled()
+        .iter()
+        .map(|(name, text)| ((*name).to_owned(), parse_design(text).unwrap()));
+    // One example shows the other side on purpose.
+    let all = examples()
+        .into_iter()
+        .chain(bundled)
+        .filter(|(name, _)| name != "zones-and-placement.ron");
+    let wrong: Vec<_> = all
+        .filter(|(_, d)| d.shape.outside != Outside::by_rule(&d.shape))
+        .map(|(name, _)| name)
+        .collect();
+    assert!(wrong.is_empty(), "{wrong:?}");
 }
 
 #[test]

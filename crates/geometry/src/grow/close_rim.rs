@@ -12,7 +12,7 @@ use super::{
     front::Front,
     lay::Laid,
 };
-use crate::{Point, Vector, inspect};
+use crate::{Point, Side, Vector, inspect};
 
 /// Surfaces looked at before the best so far is taken. A rim of six letters has 2, of eight 8, of ten 62 (OEIS A006245).
 const MOST_SURFACES: usize = 64;
@@ -86,7 +86,7 @@ pub(super) fn fill_on_hull(front: &mut Front, growing: &mut Growing<'_>) -> Laid
             pair.sort_unstable();
             let prev = growing.mesh.points[front.nodes[at] as usize].0 - centre;
             let vectors = letters.map(|l| growing.alphabet.vector(l));
-            if met.contains(&pair) || !on_hull(prev, vectors, &zones) {
+            if met.contains(&pair) || !on_hull(prev, vectors, &zones, front.side) {
                 at += 1;
                 continue;
             }
@@ -101,11 +101,16 @@ pub(super) fn fill_on_hull(front: &mut Front, growing: &mut Growing<'_>) -> Laid
     }
 }
 
-/// Whether the panel at `prev` (from the centre) with sides a and b supports the sum of segments +-zone/2.
-fn on_hull(prev: Vector, [a, b]: [Vector; 2], zones: &[Vector]) -> bool {
+/// Whether the panel at `prev` (from the centre) with sides a and b supports the sum of segments +-zone/2: with `a x b` outwards on
+/// the fore side, inwards on the aft side, so that each front fills its own half of the hull.
+fn on_hull(prev: Vector, [a, b]: [Vector; 2], zones: &[Vector], side: Side) -> bool {
     let normal = a.cross(b).normalize_or_zero();
     let reach: f64 = zones.iter().map(|z| z.dot(normal).abs()).sum::<f64>() / 2.0;
-    normal != Vector::ZERO && (prev.dot(normal).abs() - reach).abs() <= super::PARALLEL_SINE * 10.0 * reach
+    let height = match side {
+        Side::Fore => prev.dot(normal),
+        Side::Aft => -prev.dot(normal),
+    };
+    normal != Vector::ZERO && (height - reach).abs() <= super::PARALLEL_SINE * 10.0 * reach
 }
 
 /// Whether the signed count of letters is zero in every zone.
