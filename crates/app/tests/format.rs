@@ -99,6 +99,64 @@ fn every_field_and_word_of_the_file_is_documented() {
 }
 
 #[test]
+fn every_exported_file_word_and_column_is_documented() {
+    let format = fs::read_to_string(docs().join("format.md")).unwrap();
+    let named = |word: &str| assert!(format.contains(&format!("`{word}`")), "{word}");
+    let report = report(&parse_design(designs::POLAR).unwrap());
+    for file in zonewright_shop::FILES {
+        named(file.name);
+        named(file.word);
+        let (_, bytes) = zonewright_shop::export(&report.shell, &report.parts, &[file.word])
+            .unwrap()
+            .remove(0);
+        if file.name.ends_with(".csv") {
+            let text = String::from_utf8(bytes).unwrap();
+            for column in text.lines().next().unwrap().split(',') {
+                // Columns of the edges b, c, d are documented by those of edge a.
+                let of_edge = ["b_", "c_", "d_"].iter().find_map(|letter| column.strip_prefix(letter));
+                named(&of_edge.map_or_else(|| column.to_owned(), |rest| format!("a_{rest}")));
+            }
+        }
+    }
+}
+
+#[test]
+fn every_code_is_documented_with_its_level() {
+    let format = fs::read_to_string(docs().join("format.md")).unwrap();
+    let codes = [
+        Code::ParameterLimit,
+        Code::NotFinite,
+        Code::ZeroVector,
+        Code::BrokenLink,
+        Code::TooManyPanels,
+        Code::EmptyWord,
+        Code::ClosingGap,
+        Code::StepFoundNothing,
+        Code::VChanged,
+        Code::NameLost,
+        Code::NeverStill,
+        Code::RimNotBalanced,
+        Code::RimClosedCrossing,
+        Code::Pinch,
+        Code::DoubledPanel,
+        Code::CrowdedEdge,
+        Code::Crossing,
+        Code::NearMiss,
+        Code::InsideOut,
+        Code::SidesDisagree,
+        Code::NoPanels,
+    ];
+    for code in codes {
+        let row = format!(
+            "| `{}` | {} |",
+            code.text().key,
+            zonewright_shop::level_word(code.level())
+        );
+        assert!(format.contains(&row), "{row}");
+    }
+}
+
+#[test]
 fn the_outside_is_the_one_that_a_new_design_would_have() {
     let bundled = bundled()
         .iter()
