@@ -260,25 +260,36 @@ fn two_blocks() {
     assert_eq!(shifted([1.0, 1.0, 1.0]).crossings.len(), 6);
 }
 
+/// Derived: a needle a thousandth of a millimetre wide, where plain rounding is larger than the heights that decide.
+#[test]
+fn a_needle_needs_exact_heights() {
+    let needle = quad([0.0; 3], [1000.0, 0.0, 0.0], [1000.0, 1e-3, 0.0]);
+    for (low, crosses) in [
+        (-5e-5, true),
+        (0.0, false),
+        (-1e-4, false),
+        (-2e-4, false),
+        (-2e-5, true),
+    ] {
+        let strip = quad([900.0, 4e-4, low], [0.0, 200.0, 0.0], [0.0, 0.0, 1e-4]);
+        for quads in [[needle, strip], [strip, needle]] {
+            assert_eq!(!crossing_pairs(&quads).is_empty(), crosses, "{low}");
+        }
+    }
+}
+
 /// Joining rims may bend panels a little; flat bent neighbours are not taken for crossing ones.
 #[test]
 fn bent_panels_only_touch() {
-    let mut sheet = Vec::new();
-    for x in 0..6 {
-        for y in 0..6 {
-            sheet.push(quad(
-                [f64::from(x), f64::from(y), 0.0],
-                [1.0, 0.0, 0.0],
-                [0.0, 1.0, 0.0],
-            ));
-        }
-    }
-    let mut shell = joined(&sheet);
-    for (k, point) in shell.points.iter_mut().enumerate() {
-        let lift = 1e-4 * ((k * 7919 % 13) as f64 - 6.0);
-        *point += Vector::new(0.3 * lift, -0.2 * lift, lift);
-    }
-    assert!(look(&shell).crossings.is_empty());
+    let floor = quad([0.0; 3], [4.0, 0.0, 0.0], [0.0, 4.0, 0.0]);
+    let mut beside = quad([4.0, 1.0, 0.0], [4.0, 0.0, 0.0], [0.0, 2.0, 0.0]);
+    beside[0] += Vector::new(-1e-4, 0.0, -1e-4);
+    beside[3] += Vector::new(-1e-4, 0.0, 1e-4);
+    assert!(look(&loose(&[floor, beside])).crossings.is_empty());
+    // As deep, and not bent.
+    let mut shifted = quad([4.0, 1.0, 0.0], [4.0, 0.0, 0.0], [0.0, 2.0, 2e-4]);
+    shifted.iter_mut().for_each(|p| *p += Vector::new(-1e-4, 0.0, -1e-4));
+    assert_eq!(look(&loose(&[floor, shifted])).crossings.len(), 1);
 }
 
 /// Bad places and panels without area are passed over.

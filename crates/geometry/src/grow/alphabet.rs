@@ -142,7 +142,7 @@ impl Alphabet {
         self.vectors
             .push(self.zones[letter.zone as usize].vector * letter.sign.factor());
         self.by_key
-            .entry((letter.maker, letter.index, letter.sign, letter.at))
+            .entry(key_of(letter.maker, letter.index, letter.sign, letter.at))
             .or_insert(index);
         self.letters.push(letter);
         index
@@ -162,7 +162,7 @@ impl Alphabet {
             Some(at) => self.find(at)?,
             None => NONE,
         };
-        self.by_key.get(&(name.maker, name.index, name.sign, at)).copied()
+        self.by_key.get(&key_of(name.maker, name.index, name.sign, at)).copied()
     }
 
     /// A letter's zone as it counts, and its sign along that zone.
@@ -203,6 +203,14 @@ impl Alphabet {
         }
         let steps = (to + start_zones - from) % start_zones;
         (1..steps).map(|k| (from + k) % start_zones).collect()
+    }
+}
+
+/// A letter of the first word is told by its index alone: an edit may turn its vector round, and with it the sign.
+const fn key_of(maker: Maker, index: u32, sign: Sign, at: u32) -> (Maker, u32, Sign, u32) {
+    match maker {
+        Maker::Start => (maker, index, Sign::Plus, at),
+        Maker::Step(_) => (maker, index, sign, at),
     }
 }
 

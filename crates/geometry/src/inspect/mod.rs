@@ -10,12 +10,14 @@
 
 mod contact;
 mod near;
+mod newcomers;
 mod pair;
 mod plate;
 mod report;
 mod tree;
 
 use contact::Contact;
+pub use newcomers::crossings_of_new;
 use pair::Meeting;
 use plate::Plate;
 pub use report::LISTED;

@@ -99,7 +99,7 @@ impl Plate {
     }
 }
 
-/// The triple product (b - a) x (c - a) . (d - a), with its sign exact (Shewchuk's adaptive predicate).
+/// The triple product (b - a) x (c - a) . (d - a), with its sign exact (adaptive predicate of J. R. Shewchuk, Discrete Comput. Geom. 18 (1997) 305-363; from memory).
 pub(super) fn triple(a: Point, b: Point, c: Point, d: Point) -> f64 {
     let coord = |p: Point| {
         let [x, y, z] = p.to_array();

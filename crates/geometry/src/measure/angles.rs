@@ -96,9 +96,7 @@ pub fn angle_deficits(shell: &Shell) -> Vec<f64> {
             corner(vertex, angle_between(next, previous));
         }
     }
-    for vertex in shell.tees.iter().flat_map(|t| &t.vertices) {
-        corner(*vertex, PI);
-    }
+    // A vertex inside a side has one corner more there, of half a turn: the two cancel.
     for vertex in shell.edges.iter().flat_map(|e| e.ends) {
         edges_beyond[vertex as usize] += 1;
     }

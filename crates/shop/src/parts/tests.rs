@@ -217,3 +217,30 @@ fn faults_are_found() {
 fn nothing_gives_nothing() {
     assert_eq!(parts(&Shell::default()), Parts::default());
 }
+
+/// The same two panels seen from the other side: the ridge is a valley of the same size.
+#[test]
+fn the_other_side_of_a_ridge_is_a_valley() {
+    let ridge = mirror_pair();
+    let mut valley = ridge.clone();
+    for panel in &mut valley.panels {
+        panel.corners.reverse();
+    }
+    for edge in &mut valley.edges {
+        edge.ends.reverse();
+    }
+    let shared = |shell: &Shell| {
+        let parts = parts(shell);
+        let edges = parts.panels[0].edges.iter();
+        edges
+            .filter(|e| !e.mates.is_empty())
+            .map(|e| (e.kind, e.bevel_deg, e.dihedral_deg))
+            .next()
+            .unwrap()
+    };
+    let ((kind, bevel, _), (other, negative, dihedral)) = (shared(&ridge), shared(&valley));
+    assert_eq!((kind, other), (Ridge, crate::EdgeKind::Valley));
+    // Both panels slope down with a cosine of 0.9: the fold is twice that angle.
+    assert!((bevel - 0.9_f64.acos().to_degrees()).abs() < 1e-9);
+    assert!((negative + bevel).abs() < 1e-9 && dihedral.unwrap() > 180.0);
+}
