@@ -1,1 +1,19 @@
-fn main() {}
+//! The zonewright program: the command line.
+
+use std::process::ExitCode;
+
+use zonewright::{
+    command_line::{Asked, fail, run},
+    document::read_design,
+};
+
+fn main() -> ExitCode {
+    let file = match run(std::env::args_os()) {
+        Asked::Leave(status) => return status,
+        Asked::Window(file) => file,
+    };
+    if let Some(Err(error)) = file.as_deref().map(read_design) {
+        return fail(&error.to_string());
+    }
+    fail("no window can be opened by this build; everything also works without one: see zonewright --help")
+}
