@@ -1,0 +1,114 @@
+//! The picture of the shell in the middle of the window.
+
+mod bar;
+mod hit;
+mod input;
+mod marks;
+
+use egui::{Role, Sense, Ui, WidgetInfo};
+use zonewright_geometry::{Point, Side};
+use zonewright_painter::{Bounds, Camera, Look, Palette, Projection, Tints, View, with_egui};
+
+use super::{command::Command, panels::Cx, view::ViewState, widgets::Widgets};
+
+/// The accessible name of the picture.
+pub const NAME: &str = "Picture of the shell";
+
+/// What a picture was put together from: an equal key means an equal picture.
+#[derive(Clone, PartialEq, Debug)]
+pub struct Key {
+    revision: u64,
+    scene: u64,
+    camera: Camera,
+    view: ViewState,
+    over: Option<(Side, usize)>,
+}
+
+/// The camera before there is anything to look at.
+#[must_use]
+pub fn first_camera(projection: Projection) -> Camera {
+    let bounds = Bounds {
+        min: Point::new(-1000.0, -1000.0, -1000.0),
+        max: Point::new(1000.0, 1000.0, 1000.0),
+    };
+    Camera::view(View::Fit, projection, &bounds, [1.0, 1.0])
+}
+
+/// Colours of the picture.
+#[must_use]
+pub fn palette(dark: bool) -> Palette {
+    if dark { Palette::dark() } else { Palette::light() }
+}
+
+/// Draws the bar above the picture, and the picture.
+pub fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
+    bar::bar_ui(cx, ui);
+    let size = ui.available_size().max(egui::vec2(50.0, 50.0));
+    let (rect, response) = ui.allocate_exact_size(size, Sense::click_and_drag());
+    if cx.state.camera.size != [size.x, size.y] {
+        cx.tx.send(Command::Resize(size));
+    }
+    let panels = cx.state.derived.totals.panels;
+    response.widget_info(|| WidgetInfo::labeled(Role::Canvas, true, NAME));
+    ui.ctx().accesskit_node_builder(response.id, |node| node.set_value(format!("{panels} panels")));
+    input::handle(cx, ui, rect, &response, widgets);
+    put_together(cx, widgets);
+    let painter = ui.painter_at(rect);
+    painter.rect_filled(rect, 0.0, cx.state.colours().picture());
+    with_egui::paint(&widgets.cache.picture, &painter, rect);
+    if cx.state.derived.shell.panels.is_empty() {
+        empty_ui(cx, ui, rect);
+    }
+}
+
+fn put_together(cx: Cx<'_>, widgets: &mut Widgets) {
+    let state = cx.state;
+    let key = Key {
+        revision: state.derived.revision,
+        scene: state.derived.scene_revision,
+        camera: state.camera.clone(),
+        view: state.view.clone(),
+        over: widgets.over,
+    };
+    if widgets.cache.key.as_ref() == Some(&key) {
+        return;
+    }
+    let derived = &state.derived;
+    let uncrossed = derived.inspection.as_ref().is_some_and(|i| i.crossings.is_empty());
+    let look = Look {
+        faces: state.view.faces,
+        hidden_edges: state.view.hidden_edges,
+        colour: state.view.colour,
+        palette: palette(state.view.dark),
+        cull: uncrossed,
+        ..Look::default()
+    };
+    let tints = Tints {
+        family: Some(&derived.families),
+        finding: Some(&derived.levels),
+        ..Tints::default()
+    };
+    let marks = marks::marks(state, widgets.over);
+    widgets.cache.picture = derived.scene.picture(&derived.shell, &state.camera, &look, &tints, &marks);
+    widgets.cache.key = Some(key);
+    widgets.pictures += 1;
+}
+
+/// What an empty picture says.
+fn empty_ui(cx: Cx<'_>, ui: &mut Ui, rect: egui::Rect) {
+    let lines = [
+        "Nothing has grown yet.",
+        "Choose a start on the left and give its parameters.",
+        "Add a course to fill every open V at once.",
+        "Click an open V in the strip below to splice there.",
+        "The findings on the right say what stands in the way.",
+    ];
+    let step = cx.state.theme.sizes.text * 1.8;
+    let top = rect.center().y - step * 2.0;
+    for (at, line) in lines.into_iter().enumerate() {
+        let pos = egui::pos2(rect.center().x, top + step * at as f32);
+        let font = egui::TextStyle::Body.resolve(ui.style());
+        let colour = if at == 0 { cx.state.colours().text() } else { cx.state.colours().text_weak() };
+        ui.painter().text(pos, egui::Align2::CENTER_CENTER, line, font, colour);
+    }
+}
