@@ -1,1 +1,6 @@
-//! app
+//! The program: the document and its files, the command line, imports, reports and the window.
+
+//pub mod command_line;
+pub mod document;
+pub mod import;
+//pub mod report;
