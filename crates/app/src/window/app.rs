@@ -117,7 +117,7 @@ impl App {
     }
 
     fn system_events(&mut self, ctx: &egui::Context) {
-        let dropped = ctx.input(|i| i.raw.dropped_files.iter().find_map(|f| f.path.clone()));
+        let dropped = ctx.input(|i| i.raw.dropped_files.iter().map(|f| f.path().to_path_buf()).find(|p| !p.as_os_str().is_empty()));
         if let Some(path) = dropped {
             self.sender.send(Command::OpenPath(path));
         }
@@ -138,7 +138,11 @@ impl App {
         }
         if self.dark != Some(self.state.view.dark) {
             self.dark = Some(self.state.view.dark);
-            ctx.set_theme(if self.state.view.dark { egui::Theme::Dark } else { egui::Theme::Light });
+            ctx.set_theme(if self.state.view.dark {
+                egui::Theme::Dark
+            } else {
+                egui::Theme::Light
+            });
         }
         if self.state.closing {
             ctx.send_viewport_cmd(ViewportCommand::Close);
@@ -184,7 +188,9 @@ impl eframe::App for App {
         let bar = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(sizes.margin, 4));
         let side = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::same(sizes.margin));
         Panel::top("menu").frame(bar).show(ui, |ui| menu::menu_ui(cx, ui));
-        Panel::bottom("status").frame(bar).show(ui, |ui| prompts::status_ui(cx, ui));
+        Panel::bottom("status")
+            .frame(bar)
+            .show(ui, |ui| prompts::status_ui(cx, ui));
         Panel::left("start and steps")
             .frame(side)
             .default_size(sizes.left)

@@ -5,7 +5,7 @@
 use std::path::PathBuf;
 
 use egui::{Key, KeyboardShortcut, Modifiers};
-use zonewright_geometry::{Outside, Placement, Role, Side, Start, Step, VName, start::DragRule};
+use zonewright_geometry::{Outside, Placement, Side, Start, Step, VName, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
@@ -105,8 +105,6 @@ pub enum Command {
     ShowFinding(Option<usize>),
     /// Picks a point of the path; none picks nothing.
     SelectPoint(Option<usize>),
-    /// The role that the next added point's edge gets.
-    SetNextRole(Role),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -200,7 +198,10 @@ impl Command {
             Self::SetStep(..) => ("Change a step", "Changes what a step does."),
             Self::MoveStep(..) => ("Move a step", "Moves a step up or down in the record."),
             Self::DeleteStep(_) => ("Delete a step", "Takes a step out of the record."),
-            Self::ToggleSplice(..) => ("Splice here", "Splices the directions in hand at an open V, or takes them out."),
+            Self::ToggleSplice(..) => (
+                "Splice here",
+                "Splices the directions in hand at an open V, or takes them out.",
+            ),
             Self::SetHand(_) => ("Directions in hand", "Chooses what the next splice inserts."),
             Self::SetKind(_) => ("Kind of start", "Changes where the first word comes from."),
             Self::SetStart(..) => ("Change the start", "Changes a parameter of the start."),
@@ -208,7 +209,10 @@ impl Command {
                 "Turn into free points",
                 "Keeps the path as it is and lets every point be moved.",
             ),
-            Self::ShareGap => ("Share out the closing gap", "Spreads the closing gap over the edges of the path."),
+            Self::ShareGap => (
+                "Share out the closing gap",
+                "Spreads the closing gap over the edges of the path.",
+            ),
             Self::Path(edit) => (edit.label(), "Edits the points of the path."),
             Self::SetPlacement(_) => ("Place the shell", "Moves, turns, scales or mirrors the shell."),
             Self::SetOutside(_) | Self::FlipOutside => ("Flip the outside", "Turns the shell inside out in the lists."),
@@ -224,12 +228,14 @@ impl Command {
             Self::SetFaces(Faces::ShadedWithEdges) => ("Faces and edges", "Draws shaded faces with their edges."),
             Self::HiddenEdges => ("Hidden edges", "Shows or leaves out the edges behind faces."),
             Self::SetColour(_) => ("Colour by", "Chooses what the colours of the panels say."),
-            Self::SetDragRule(_) => ("What follows a drag", "Chooses whether the rest of the path comes along."),
+            Self::SetDragRule(_) => (
+                "What follows a drag",
+                "Chooses whether the rest of the path comes along.",
+            ),
             Self::SetUnits(_) | Self::SwapUnits => ("Millimetres or inches", "Changes the unit of all lengths."),
             Self::SetSide(_) | Self::SwapSide => ("The other front", "Works on the other of the two fronts."),
             Self::ShowFinding(_) => ("Show a finding", "Marks where a finding is."),
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
-            Self::SetNextRole(_) => ("Role of the next edge", "Chooses zig or zag for the next added edge."),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

@@ -177,7 +177,9 @@ impl Default for Derived {
 fn levels(findings: &[Finding], panels: usize) -> Vec<Option<Level>> {
     let mut levels = vec![None; panels];
     for finding in findings {
-        let Place::Panels(places) = &finding.place else { continue };
+        let Place::Panels(places) = &finding.place else {
+            continue;
+        };
         for panel in places {
             if let Some(level) = levels.get_mut(*panel as usize) {
                 let _ = level.get_or_insert_with(|| finding.level());

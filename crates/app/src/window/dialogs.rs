@@ -95,7 +95,10 @@ pub struct Dialogs {
 impl Dialogs {
     /// Asks; the answer comes as a command from [`Dialogs::poll`] or from the box.
     pub fn ask(&mut self, asked: Asked, file: Option<&Path>, name: &str) {
-        let folder = file.and_then(Path::parent).map(Path::to_path_buf).filter(|f| f.is_dir());
+        let folder = file
+            .and_then(Path::parent)
+            .map(Path::to_path_buf)
+            .filter(|f| f.is_dir());
         let folder = folder.or_else(|| std::env::current_dir().ok()).unwrap_or_default();
         let stem = name.strip_suffix(&format!(".{ENDING}")).unwrap_or(name);
         let name = match asked {

@@ -4,7 +4,7 @@ use zonewright_geometry::{
     Angle, Point, Role, Sign, Start, Vector,
     start::{
         AxisClass, ColumnForm, Curve, CurveShape, FreeLetter, FreePath, FreeVector, HelicalForm, LoopForm, PolarBy,
-        PolarForm, RibbonForm, RibbonFrom, Star, StarLetter, StarLength, StarPath, StarSolid, TranslationForm,
+        PolarForm, RibbonForm, RibbonFrom, Star, StarLength, StarLetter, StarPath, StarSolid, TranslationForm,
     },
 };
 

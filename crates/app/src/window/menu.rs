@@ -29,15 +29,31 @@ pub fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             items(cx, ui, [Command::FreePoints, Command::ShareGap, Command::FlipOutside]);
         });
         ui.menu_button("Growth", |ui| {
-            items(cx, ui, [Command::AddCourse, Command::RemoveCourse, Command::LayUntilStill]);
+            items(
+                cx,
+                ui,
+                [Command::AddCourse, Command::RemoveCourse, Command::LayUntilStill],
+            );
             ui.separator();
             items(cx, ui, [Command::SwapSide]);
         });
         ui.menu_button("View", |ui| {
-            items(cx, ui, [View::Plan, View::Front, View::Side, View::Iso, View::Fit].map(Command::Look));
+            items(
+                cx,
+                ui,
+                [View::Plan, View::Front, View::Side, View::Iso, View::Fit].map(Command::Look),
+            );
             ui.separator();
-            items(cx, ui, [Projection::Perspective, Projection::Parallel].map(Command::SetProjection));
-            items(cx, ui, [Faces::ShadedWithEdges, Faces::Shaded, Faces::Wireframe].map(Command::SetFaces));
+            items(
+                cx,
+                ui,
+                [Projection::Perspective, Projection::Parallel].map(Command::SetProjection),
+            );
+            items(
+                cx,
+                ui,
+                [Faces::ShadedWithEdges, Faces::Shaded, Faces::Wireframe].map(Command::SetFaces),
+            );
             items(cx, ui, [Command::HiddenEdges]);
             ui.separator();
             items(cx, ui, [Command::SwapTheme]);
@@ -70,7 +86,11 @@ fn items<const N: usize>(cx: Cx<'_>, ui: &mut Ui, commands: [Command; N]) {
 }
 
 fn named(cx: Cx<'_>, ui: &mut Ui, name: &str, command: Command) {
-    if ui.add(button(ui, name, &command)).on_hover_text(command.words().hint).clicked() {
+    if ui
+        .add(button(ui, name, &command))
+        .on_hover_text(command.words().hint)
+        .clicked()
+    {
         cx.tx.send(command);
     }
 }
@@ -78,7 +98,11 @@ fn named(cx: Cx<'_>, ui: &mut Ui, name: &str, command: Command) {
 fn undo(cx: Cx<'_>, ui: &mut Ui, name: &str, label: Option<&str>, command: Command) {
     let text = label.map_or_else(|| name.to_owned(), |label| format!("{name}: {label}"));
     let button = button(ui, &text, &command);
-    if ui.add_enabled(label.is_some(), button).on_hover_text(command.words().hint).clicked() {
+    if ui
+        .add_enabled(label.is_some(), button)
+        .on_hover_text(command.words().hint)
+        .clicked()
+    {
         cx.tx.send(command);
     }
 }

@@ -58,8 +58,6 @@ pub fn run(file: Option<&Path>) -> Result<(), String> {
             .with_inner_size([1280.0, 800.0])
             .with_min_inner_size([900.0, 560.0])
             .with_drag_and_drop(true),
-        // Software OpenGL is enough: the picture is drawn with egui's own triangles.
-        hardware_acceleration: eframe::HardwareAcceleration::Preferred,
         ..eframe::NativeOptions::default()
     };
     let create: eframe::AppCreator<'_> = Box::new(|cc| {

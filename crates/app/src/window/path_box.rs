@@ -22,7 +22,7 @@ pub fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
     if fresh {
         begin(&mut widgets.path, own);
     }
-    let modal = Modal::new(egui::Id::new("path box")).show(ui.ctx(), |ui| {
+    let modal = Modal::new(egui::Id::unique("path box")).show(ui.ctx(), |ui| {
         ui.set_width(480.0);
         ui.heading(own.asked.heading());
         let field = TextEdit::singleline(&mut widgets.path.text).desired_width(f32::INFINITY);
@@ -37,7 +37,11 @@ pub fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
         let entered = field.lost_focus() && ui.input(|i| i.key_pressed(Key::Enter));
         ui.horizontal(|ui| {
             let replaces = own.asked == Asked::Save && widgets.path.exists;
-            let text = if replaces { "Replace the file" } else { own.asked.action() };
+            let text = if replaces {
+                "Replace the file"
+            } else {
+                own.asked.action()
+            };
             let ready = !widgets.path.text.trim().is_empty();
             let pressed = ui.add_enabled(ready, egui::Button::new(text)).clicked();
             // Enter never replaces a file: that takes a click.
@@ -70,7 +74,11 @@ fn begin(path: &mut PathText, own: &OwnBox) {
 fn look_up(path: &mut PathText, asked: Asked) {
     let typed = Path::new(path.text.trim());
     path.exists = typed.is_file() || typed.with_extension(ENDING).is_file() && typed.extension().is_none();
-    let folder = if typed.is_dir() { typed } else { typed.parent().unwrap_or(Path::new("")) };
+    let folder = if typed.is_dir() {
+        typed
+    } else {
+        typed.parent().unwrap_or(Path::new(""))
+    };
     if folder == path.folder {
         return;
     }
@@ -93,23 +101,34 @@ fn look_up(path: &mut PathText, asked: Asked) {
 
 fn entries_ui(ui: &mut Ui, path: &mut PathText, asked: Asked) {
     let mut chosen: Option<PathBuf> = None;
-    ScrollArea::vertical().max_height(220.0).auto_shrink([false, false]).show(ui, |ui| {
-        if let Some(up) = path.folder.parent()
-            && ui.selectable_label(false, "↑ folder above").clicked()
-        {
-            chosen = Some(up.to_path_buf());
-        }
-        for (name, is_folder) in &path.entries {
-            let shown = if *is_folder { format!("{name}{}", std::path::MAIN_SEPARATOR) } else { name.clone() };
-            if ui.selectable_label(false, shown).clicked() {
-                chosen = Some(path.folder.join(name));
+    ScrollArea::vertical()
+        .max_height(220.0)
+        .auto_shrink([false, false])
+        .show(ui, |ui| {
+            if let Some(up) = path.folder.parent()
+                && ui.selectable_label(false, "↑ folder above").clicked()
+            {
+                chosen = Some(up.to_path_buf());
             }
-        }
-    });
+            for (name, is_folder) in &path.entries {
+                let shown = if *is_folder {
+                    format!("{name}{}", std::path::MAIN_SEPARATOR)
+                } else {
+                    name.clone()
+                };
+                if ui.selectable_label(false, shown).clicked() {
+                    chosen = Some(path.folder.join(name));
+                }
+            }
+        });
     if let Some(chosen) = chosen {
         // A folder that was clicked keeps the name that was typed.
-        let name = Path::new(&path.text).file_name().filter(|_| asked == Asked::Save && chosen.is_dir());
-        let full = name.filter(|n| Path::new(n).extension().is_some()).map_or_else(|| chosen.clone(), |n| chosen.join(n));
+        let name = Path::new(&path.text)
+            .file_name()
+            .filter(|_| asked == Asked::Save && chosen.is_dir());
+        let full = name
+            .filter(|n| Path::new(n).extension().is_some())
+            .map_or_else(|| chosen.clone(), |n| chosen.join(n));
         path.text = full.to_string_lossy().into_owned();
         if full.is_dir() && !path.text.ends_with(std::path::MAIN_SEPARATOR) {
             path.text.push(std::path::MAIN_SEPARATOR);

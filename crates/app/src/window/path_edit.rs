@@ -1,9 +1,6 @@
 //! Edits of a free path.
 
-use zonewright_geometry::{
-    Finding, Point, Role,
-    start::{DragRule, FreePath},
-};
+use zonewright_geometry::{Point, Role, start::DragRule};
 
 /// An edit of a free path. Points are counted along the path from 0, edges by the point where they begin.
 #[derive(Clone, Copy, PartialEq, Debug)]
@@ -23,8 +20,8 @@ pub enum PathEdit {
     Split(usize),
     /// Deletes a point.
     Delete(usize),
-    /// Adds a point at the end of an open path.
-    Add(Role),
+    /// Adds a point behind the last one.
+    Add,
     /// Gives an edge a role.
     Role(usize, Role),
     /// Says whether the last point leads back to the first.
@@ -40,7 +37,7 @@ impl PathEdit {
             Self::Insert(_) => "Insert a point",
             Self::Split(_) => "Split an edge",
             Self::Delete(_) => "Delete a point",
-            Self::Add(_) => "Add a point",
+            Self::Add => "Add a point",
             Self::Role(..) => "Change a role",
             Self::Close(true) => "Close the path",
             Self::Close(false) => "Open the path",

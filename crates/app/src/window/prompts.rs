@@ -12,7 +12,7 @@ pub fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
     if cx.state.waiting.is_none() {
         return;
     }
-    let modal = Modal::new(egui::Id::new("unsaved")).show(ui.ctx(), |ui| {
+    let modal = Modal::new(egui::Id::unique("unsaved")).show(ui.ctx(), |ui| {
         ui.set_width(380.0);
         ui.heading("Unsaved changes");
         ui.label(format!("{} has changes that no file holds.", cx.state.file_name()));
@@ -38,23 +38,37 @@ pub fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
 pub fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
     let colours = cx.state.colours();
     if let Some(message) = &cx.state.message {
-        let frame = Frame::new().fill(colours.field()).stroke((1.5, colours.stop())).corner_radius(4).inner_margin(8);
+        let frame = Frame::new()
+            .fill(colours.field())
+            .stroke((1.5, colours.stop()))
+            .corner_radius(4)
+            .inner_margin(8);
         frame.show(ui, |ui| {
             ui.with_layout(egui::Layout::right_to_left(egui::Align::Center), |ui| {
                 if ui.button("Close").accessible_name("Close the message").clicked() {
                     cx.tx.send(Command::Dismiss);
                 }
-                ui.with_layout(egui::Layout::left_to_right(egui::Align::Center).with_main_wrap(true), |ui| {
-                    ui.label(&message.text);
-                });
+                ui.with_layout(
+                    egui::Layout::left_to_right(egui::Align::Center).with_main_wrap(true),
+                    |ui| {
+                        ui.label(&message.text);
+                    },
+                );
             });
         });
     }
     if let Some(asked) = cx.state.dialogs.waiting_for() {
-        let frame = Frame::new().fill(colours.field()).stroke((1.0, colours.accent())).corner_radius(4).inner_margin(8);
+        let frame = Frame::new()
+            .fill(colours.field())
+            .stroke((1.0, colours.accent()))
+            .corner_radius(4)
+            .inner_margin(8);
         frame.show(ui, |ui| {
             ui.horizontal_wrapped(|ui| {
-                ui.label(format!("{}: waiting for the system's dialog, or type a path.", asked.heading()));
+                ui.label(format!(
+                    "{}: waiting for the system's dialog, or type a path.",
+                    asked.heading()
+                ));
                 if ui.button("Type a path").clicked() {
                     cx.tx.send(Command::TypePath);
                 }

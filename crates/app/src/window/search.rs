@@ -10,20 +10,25 @@ pub fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
         widgets.search.clear();
         return;
     }
-    let modal = Modal::new(egui::Id::new("search")).show(ui.ctx(), |ui| {
+    let modal = Modal::new(egui::Id::unique("search")).show(ui.ctx(), |ui| {
         ui.set_width(420.0);
-        let field = TextEdit::singleline(&mut widgets.search).hint_text("Name of a command").desired_width(f32::INFINITY);
+        let field = TextEdit::singleline(&mut widgets.search)
+            .hint_text("Name of a command")
+            .desired_width(f32::INFINITY);
         let field = ui.add(field).accessible_name("Name of a command");
         field.request_focus();
         let found = found(&widgets.search);
-        ScrollArea::vertical().max_height(340.0).auto_shrink([false, true]).show(ui, |ui| {
-            for command in &found {
-                row(cx, ui, command);
-            }
-            if found.is_empty() {
-                ui.weak("No command has that in its name.");
-            }
-        });
+        ScrollArea::vertical()
+            .max_height(340.0)
+            .auto_shrink([false, true])
+            .show(ui, |ui| {
+                for command in &found {
+                    row(cx, ui, command);
+                }
+                if found.is_empty() {
+                    ui.weak("No command has that in its name.");
+                }
+            });
         if ui.input(|i| i.key_pressed(Key::Enter))
             && let Some(first) = found.into_iter().next()
         {
@@ -53,7 +58,9 @@ fn found(typed: &str) -> Vec<Command> {
     let typed = typed.to_lowercase();
     let has_all = |name: &str| typed.split_whitespace().all(|word| name.contains(word));
     let commands = Command::listed().into_iter();
-    commands.filter(|c| !matches!(c, Command::Find) && has_all(&c.words().name.to_lowercase())).collect()
+    commands
+        .filter(|c| !matches!(c, Command::Find) && has_all(&c.words().name.to_lowercase()))
+        .collect()
 }
 
 #[cfg(test)]

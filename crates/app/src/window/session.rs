@@ -63,7 +63,9 @@ pub fn last(file: &Path) -> Option<PathBuf> {
 /// # Errors
 /// A sentence, when it cannot be read.
 pub fn sample() -> Result<Design, String> {
-    let (name, text) = document::bundled().first().ok_or("No sample comes with this program.")?;
+    let (name, text) = document::bundled()
+        .first()
+        .ok_or("No sample comes with this program.")?;
     document::parse_design(text).map_err(|error| format!("The sample {name} cannot be read: {error}."))
 }
 

@@ -40,7 +40,12 @@ impl Zigzag {
         let height = (free / (most - least).max(1) as f32).min(TALLEST);
         let used = height * (most - least) as f32;
         let top = MARGIN + (free - used) / 2.0 - height * least as f32;
-        Self { depths, width, height, top }
+        Self {
+            depths,
+            width,
+            height,
+            top,
+        }
     }
 
     /// The width of the whole strip.

@@ -190,7 +190,11 @@ mod tests {
         let luminance = |(r, g, b): Rgb| {
             let part = |v: u8| {
                 let v = f64::from(v) / 255.0;
-                if v <= 0.04045 { v / 12.92 } else { ((v + 0.055) / 1.055).powf(2.4) }
+                if v <= 0.04045 {
+                    v / 12.92
+                } else {
+                    ((v + 0.055) / 1.055).powf(2.4)
+                }
             };
             0.2126 * part(r) + 0.7152 * part(g) + 0.0722 * part(b)
         };
@@ -205,8 +209,17 @@ mod tests {
             for ground in [c.panel, c.window, c.field, c.control, c.picture, c.accent_weak] {
                 assert!(contrast(c.text, ground) >= 7.0, "{:?} on {ground:?}", c.text);
             }
-            for (ink, ground) in [(c.text_weak, c.panel), (c.stop, c.panel), (c.look, c.panel), (c.note, c.panel)] {
-                assert!(contrast(ink, ground) >= 4.5, "{ink:?} on {ground:?}: {}", contrast(ink, ground));
+            for (ink, ground) in [
+                (c.text_weak, c.panel),
+                (c.stop, c.panel),
+                (c.look, c.panel),
+                (c.note, c.panel),
+            ] {
+                assert!(
+                    contrast(ink, ground) >= 4.5,
+                    "{ink:?} on {ground:?}: {}",
+                    contrast(ink, ground)
+                );
             }
         }
     }

@@ -1,6 +1,6 @@
 //! What is not part of the design: where one looks from, what is picked, what is in hand.
 
-use zonewright_geometry::{Direction, Role, Side, Vector, start::DragRule};
+use zonewright_geometry::{Direction, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 
 use super::command::Words;
@@ -40,8 +40,6 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// What follows a dragged point.
     pub rule: DragRule,
-    /// The role of the next added edge.
-    pub next_role: Role,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
     /// Whether the look is dark.
@@ -59,7 +57,6 @@ impl Default for ViewState {
             hand: Hand::default(),
             point: None,
             rule: DragRule::Neighbours,
-            next_role: Role::Zag,
             finding: None,
             dark: false,
         }

@@ -47,8 +47,6 @@ pub struct PictureCache {
     pub key: Option<super::picture::Key>,
     /// The picture.
     pub picture: Picture,
-    /// The same as egui draws it.
-    pub shapes: Vec<egui::Shape>,
 }
 
 /// State of the widgets.

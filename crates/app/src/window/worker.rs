@@ -5,7 +5,10 @@ use std::{
     thread,
 };
 
-use zonewright_geometry::{Shell, Tolerances, inspect::{Inspection, inspect}};
+use zonewright_geometry::{
+    Shell, Tolerances,
+    inspect::{Inspection, inspect},
+};
 use zonewright_painter::Scene;
 
 /// What to work out.

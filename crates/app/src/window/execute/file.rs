@@ -37,7 +37,9 @@ pub(super) fn run(state: &mut State, command: Command) {
 fn run_saved(state: &mut State, command: Command) {
     match command {
         Command::New(kind) => make_new(state, kind),
-        Command::Open => state.dialogs.ask(Asked::Open, state.path.as_deref(), &state.file_name()),
+        Command::Open => state
+            .dialogs
+            .ask(Asked::Open, state.path.as_deref(), &state.file_name()),
         Command::OpenPath(path) => open(state, &path),
         Command::OpenSample => match session::sample() {
             Ok(design) => show(state, design, None),
@@ -47,9 +49,13 @@ fn run_saved(state: &mut State, command: Command) {
             Some(path) => save(state, &path),
             None => state.dialogs.ask(Asked::Save, None, &state.file_name()),
         },
-        Command::SaveAs => state.dialogs.ask(Asked::Save, state.path.as_deref(), &state.file_name()),
+        Command::SaveAs => state
+            .dialogs
+            .ask(Asked::Save, state.path.as_deref(), &state.file_name()),
         Command::SaveTo(path) => save(state, &with_ending(path)),
-        Command::Export => state.dialogs.ask(Asked::Export, state.path.as_deref(), &state.file_name()),
+        Command::Export => state
+            .dialogs
+            .ask(Asked::Export, state.path.as_deref(), &state.file_name()),
         Command::ExportTo(folder) => export(state, &folder),
         Command::Quit => state.closing = true,
         Command::Unsaved(answer) => answered(state, answer),
@@ -122,7 +128,9 @@ fn save(state: &mut State, path: &Path) {
 }
 
 fn remember(state: &mut State) {
-    let (Some(session), Some(path)) = (&state.session, &state.path) else { return };
+    let (Some(session), Some(path)) = (&state.session, &state.path) else {
+        return;
+    };
     if let Err(error) = session::remember(session, path) {
         let text = format!("{error}; the program will not find this design by itself next time");
         state.say(text);
@@ -138,5 +146,9 @@ fn export(state: &mut State, folder: &Path) {
 
 /// System dialogs may give a name without an ending.
 fn with_ending(path: PathBuf) -> PathBuf {
-    if path.extension().is_some() { path } else { path.with_extension(ENDING) }
+    if path.extension().is_some() {
+        path
+    } else {
+        path.with_extension(ENDING)
+    }
 }

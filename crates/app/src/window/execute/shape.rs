@@ -1,8 +1,13 @@
 //! The start, the placement, the outside, the unit.
 
-use zonewright_geometry::{Outside, Placement, Shape, Start, Vector};
+use std::collections::BTreeMap;
+
+use zonewright_geometry::{
+    Act, Direction, Outside, Placement, Shape, Start, Vector, ZoneRef, ZoneVector, start::FreePath,
+};
 use zonewright_shop::text::Units;
 
+use super::path::refusal;
 use crate::window::{kinds, path_place, state::State};
 
 /// Changes the kind of start. The steps stay: they say so themselves when they find nothing.
@@ -11,7 +16,15 @@ pub(super) fn set_kind(state: &mut State, word: &'static str) {
         return;
     }
     let kind = kinds::kind(word);
-    let start = if word == "zigzag" { state.shape().start.to_free().map_or_else(|_| kind.usual(), Start::Zigzag) } else { kind.usual() };
+    let start = if word == "zigzag" {
+        state
+            .shape()
+            .start
+            .to_free()
+            .map_or_else(|_| kind.usual(), Start::Zigzag)
+    } else {
+        kind.usual()
+    };
     state.change(&format!("{} as the start", kind.name), None, |design| {
         design.shape.start = start;
         design.shape.outside = Outside::by_rule(&design.shape);
@@ -44,18 +57,49 @@ pub(super) fn free_points(state: &mut State) {
 }
 
 /// The same shape with free points. A kind that is lifted to the ground keeps its place: the lift goes into the origin.
+/// Zones are called by other numbers afterwards; splices and rules of zones follow.
 pub(super) fn freed(shape: &Shape) -> Result<Shape, String> {
-    let refused = "The start cannot be turned into free points: a parameter is outside its limits. Correct it first.";
-    let mut path = shape.start.to_free().map_err(|_| refused.to_owned())?;
+    let word = shape.start.first_word();
+    let word = word.map_err(|finding| refusal("The start cannot be turned into free points", &finding))?;
+    let mut path = FreePath::from_word(&word);
     let (shell, _) = zonewright_geometry::grow(shape);
     let lift = path_place::lift(shape, &shell);
     if lift != Vector::ZERO {
         path.origin += path_place::own_movement(&shape.placement, lift);
     }
-    Ok(Shape {
+    let mut freed = Shape {
         start: Start::Zigzag(path),
         ..shape.clone()
-    })
+    };
+    let ids: BTreeMap<u32, u32> = word.free_zone_ids().into_iter().collect();
+    rename_zones(&mut freed, &ids);
+    Ok(freed)
+}
+
+fn rename_zones(shape: &mut Shape, ids: &BTreeMap<u32, u32>) {
+    let rename = |zone: &mut ZoneRef| {
+        if let ZoneRef::Start(id) = zone
+            && let Some(new) = ids.get(id)
+        {
+            *id = *new;
+        }
+    };
+    for rule in &mut shape.zones {
+        rename(&mut rule.zone);
+        if let ZoneVector::Linked(zone, _) = &mut rule.vector {
+            rename(zone);
+        }
+    }
+    for step in &mut shape.steps {
+        let Act::Splice { directions, .. } = &mut step.act else {
+            continue;
+        };
+        for direction in directions {
+            if let Direction::Zone(zone) | Direction::Against(zone) = direction {
+                rename(zone);
+            }
+        }
+    }
 }
 
 /// Moves, turns, scales or mirrors the shell.

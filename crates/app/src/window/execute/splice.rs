@@ -16,7 +16,13 @@ pub(super) fn toggle(state: &mut State, side: Side, v: VName) {
         return;
     }
     let same = |step: &Step| {
-        let Act::Splice { at: Vs::Picked(_), directions: d } = &step.act else { return false };
+        let Act::Splice {
+            at: Vs::Picked(_),
+            directions: d,
+        } = &step.act
+        else {
+            return false;
+        };
         step.on && step.side == side && *d == directions
     };
     let id = state.shape().next_step_id();
@@ -25,10 +31,21 @@ pub(super) fn toggle(state: &mut State, side: Side, v: VName) {
     state.change("Splice at a V", None, |design| {
         let steps = &mut design.shape.steps;
         match steps.last_mut().map(|s| &mut s.act) {
-            Some(Act::Splice { at: Vs::Picked(names), .. }) if joined => names.push(v),
+            Some(Act::Splice {
+                at: Vs::Picked(names), ..
+            }) if joined => names.push(v),
             _ => {
-                let act = Act::Splice { at: Vs::Picked(vec![v]), directions };
-                steps.push(Step { id, name: None, on: true, side, act });
+                let act = Act::Splice {
+                    at: Vs::Picked(vec![v]),
+                    directions,
+                };
+                steps.push(Step {
+                    id,
+                    name: None,
+                    on: true,
+                    side,
+                    act,
+                });
             }
         }
     });
@@ -36,13 +53,21 @@ pub(super) fn toggle(state: &mut State, side: Side, v: VName) {
 }
 
 fn made_by_step(v: &VName, step: Option<StepId>) -> bool {
-    [&v.zig, &v.zag].into_iter().any(|l| Some(l.maker) == step.map(Maker::Step))
+    [&v.zig, &v.zag]
+        .into_iter()
+        .any(|l| Some(l.maker) == step.map(Maker::Step))
 }
 
 /// The splice that made one of a V's letters, when no step of that front comes after it but other splices: its place in
 /// the record, and the zig letter of the V that was spliced.
 pub(crate) fn fresh_splice(shape: &Shape, side: Side, v: &VName) -> Option<(usize, LetterName)> {
-    for (at, step) in shape.steps.iter().enumerate().rev().filter(|(_, s)| s.on && s.side == side) {
+    for (at, step) in shape
+        .steps
+        .iter()
+        .enumerate()
+        .rev()
+        .filter(|(_, s)| s.on && s.side == side)
+    {
         let Act::Splice { .. } = step.act else { return None };
         let letter = [&v.zig, &v.zag].into_iter().find(|l| l.maker == Maker::Step(step.id));
         if let Some(spliced) = letter.and_then(|l| l.at.as_deref()) {
@@ -54,7 +79,9 @@ pub(crate) fn fresh_splice(shape: &Shape, side: Side, v: &VName) -> Option<(usiz
 
 fn take_away(state: &mut State, side: Side, at: usize, spliced: &LetterName) {
     let shape = state.shape();
-    let Act::Splice { at: vs, .. } = &shape.steps[at].act else { return };
+    let Act::Splice { at: vs, .. } = &shape.steps[at].act else {
+        return;
+    };
     let names = match vs {
         Vs::Picked(names) => names.clone(),
         // A rule becomes a list of the Vs that it found, so that one of them can be left out.

@@ -14,7 +14,13 @@ fn courses_on(state: &State, side: Side, steps: usize) -> u32 {
 /// The last step of the live front, when it lays courses and nothing was done to that front after it.
 fn last_lay(state: &State) -> Option<(usize, Courses)> {
     let side = state.view.side;
-    let (at, step) = state.shape().steps.iter().enumerate().rev().find(|(_, s)| s.side == side && s.on)?;
+    let (at, step) = state
+        .shape()
+        .steps
+        .iter()
+        .enumerate()
+        .rev()
+        .find(|(_, s)| s.side == side && s.on)?;
     match step.act {
         Act::Lay { courses, .. } => Some((at, courses)),
         _ => None,
@@ -38,7 +44,10 @@ pub(super) fn add_course(state: &mut State) {
         Some((_, Courses::UntilStill)) => state.say("The front is laid until it is still: there is no V left to fill"),
         None => {
             let spurs = Spurs::default();
-            let act = Act::Lay { courses: Courses::Count(1), spurs };
+            let act = Act::Lay {
+                courses: Courses::Count(1),
+                spurs,
+            };
             let step = new_step(state, act);
             state.change("Add a course", None, |design| design.shape.steps.push(step));
             state.say("A course was added");

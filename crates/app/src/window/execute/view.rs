@@ -34,7 +34,6 @@ pub(super) fn run(state: &mut State, command: Command) {
         }
         Command::ShowFinding(finding) => view.finding = finding,
         Command::SelectPoint(point) => view.point = point,
-        Command::SetNextRole(role) => view.next_role = role,
         Command::SwapTheme => view.dark = !view.dark,
         Command::Find => state.search = Some(String::new()),
         Command::Dismiss => dismiss(state),

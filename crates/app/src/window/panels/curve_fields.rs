@@ -18,7 +18,9 @@ fn span(shape: &CurveShape) -> (f64, f64) {
         CurveShape::Line { run_mm, rise_mm } => (*run_mm, *rise_mm),
         CurveShape::Arc { span_mm, rise_mm } | CurveShape::Catenary { span_mm, rise_mm } => (*span_mm, *rise_mm),
         CurveShape::Sine {
-            length_mm, amplitude_mm, ..
+            length_mm,
+            amplitude_mm,
+            ..
         } => (*length_mm, *amplitude_mm),
         CurveShape::Helix { radius_mm, rise_mm, .. } => (2.0 * radius_mm, *rise_mm),
         CurveShape::Free(points) => match (points.first(), points.last()) {
@@ -31,7 +33,10 @@ fn span(shape: &CurveShape) -> (f64, f64) {
 fn of_kind(kind: usize, old: &Curve) -> CurveShape {
     let (span_mm, rise_mm) = span(&old.shape);
     match kind {
-        0 => CurveShape::Line { run_mm: span_mm, rise_mm },
+        0 => CurveShape::Line {
+            run_mm: span_mm,
+            rise_mm,
+        },
         1 => CurveShape::Arc { span_mm, rise_mm },
         2 => CurveShape::Catenary { span_mm, rise_mm },
         3 => CurveShape::Sine {

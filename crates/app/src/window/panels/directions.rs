@@ -41,7 +41,9 @@ pub(super) fn list(cx: Cx<'_>, ui: &mut Ui, of: &str, directions: &mut Vec<Direc
         directions.remove(at);
         changed = true;
     }
-    let add = ui.button("Add a direction").accessible_name(format!("Add a direction {of}"));
+    let add = ui
+        .button("Add a direction")
+        .accessible_name(format!("Add a direction {of}"));
     if add.clicked() {
         let last = directions.last().cloned();
         directions.push(last.unwrap_or(Direction::Own(Vector::new(0.0, 0.0, 400.0))));
@@ -58,7 +60,9 @@ fn kind(cx: Cx<'_>, ui: &mut Ui, name: &str, direction: &mut Direction) -> bool 
         Direction::Between => 3,
     };
     let kinds = ["Own vector", "Along a zone", "Against a zone", "All between"];
-    let Some(chosen) = bare_choice(ui, &format!("Kind of {}", lower(name)), now, &kinds) else { return false };
+    let Some(chosen) = bare_choice(ui, &format!("Kind of {}", lower(name)), now, &kinds) else {
+        return false;
+    };
     let zones = &cx.state.derived.shell.zones;
     let zone = match direction {
         Direction::Zone(zone) | Direction::Against(zone) => *zone,
@@ -79,7 +83,9 @@ fn lower(name: &str) -> String {
 }
 
 fn zone(cx: Cx<'_>, ui: &mut Ui, name: &str, direction: &mut Direction) -> bool {
-    let (Direction::Zone(zone) | Direction::Against(zone)) = direction else { return false };
+    let (Direction::Zone(zone) | Direction::Against(zone)) = direction else {
+        return false;
+    };
     let zones = &cx.state.derived.shell.zones;
     let names: Vec<String> = zones.iter().map(|z| zone_name(z.name)).collect();
     let shown: Vec<&str> = names.iter().map(String::as_str).collect();

@@ -2,7 +2,6 @@
 
 use egui::{RichText, Ui};
 use zonewright_geometry::{Finding, Level, Place};
-use zonewright_shop::finding_text;
 
 use super::Cx;
 use crate::window::command::Command;
@@ -35,7 +34,7 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, finding: &Finding) {
         Level::Note => ("Note", colours.note()),
     };
     let shown = cx.state.view.finding == Some(at);
-    let said = finding_text(finding, &cx.state.derived.shell, cx.state.units());
+    let said = finding.code.text().what;
     ui.horizontal_wrapped(|ui| {
         ui.label(RichText::new(word).color(colour).strong());
         if has_place(&finding.place) {
@@ -44,7 +43,7 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, finding: &Finding) {
                 cx.tx.send(Command::ShowFinding((!shown).then_some(at)));
             }
         }
-        ui.label(said.text);
+        ui.label(said);
     });
     ui.weak(finding.code.text().remedy);
 }

@@ -27,21 +27,27 @@ pub struct Cx<'a> {
 
 /// The left panel: the start, its path, the steps, where the shell stands.
 pub fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
-    ScrollArea::vertical().auto_shrink(false).id_salt("left").show(ui, |ui| {
-        section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
-        section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
-        section(ui, "Steps", true, |ui| steps_panel::steps_ui(cx, ui));
-        section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
-        section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
-    });
+    ScrollArea::vertical()
+        .auto_shrink(false)
+        .id_salt("left")
+        .show(ui, |ui| {
+            section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
+            section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
+            section(ui, "Steps", true, |ui| steps_panel::steps_ui(cx, ui));
+            section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
+            section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
+        });
 }
 
 /// The right panel: readouts and findings.
 pub fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
-    ScrollArea::vertical().auto_shrink(false).id_salt("right").show(ui, |ui| {
-        section(ui, "Readouts", true, |ui| readouts::readouts_ui(cx, ui));
-        section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
-    });
+    ScrollArea::vertical()
+        .auto_shrink(false)
+        .id_salt("right")
+        .show(ui, |ui| {
+            section(ui, "Readouts", true, |ui| readouts::readouts_ui(cx, ui));
+            section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
+        });
 }
 
 /// A section that can be folded away.

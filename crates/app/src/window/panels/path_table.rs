@@ -20,7 +20,9 @@ pub(super) fn path_ui(cx: Cx<'_>, ui: &mut Ui) {
         free_ui(cx, ui, path);
     } else {
         let count = path.own.len();
-        ui.weak(format!("{count} points follow from the parameters. Dragging one in the picture frees them."));
+        ui.weak(format!(
+            "{count} points follow from the parameters. Dragging one in the picture frees them."
+        ));
     }
     if !path.free && button(ui, "Turn into free points", &Command::FreePoints) {
         cx.tx.send(Command::FreePoints);
@@ -34,34 +36,50 @@ fn button(ui: &mut Ui, text: &str, command: &Command) -> bool {
 fn free_ui(cx: Cx<'_>, ui: &mut Ui, path: &PlacedPath) {
     table(cx, ui, path);
     ui.horizontal_wrapped(|ui| {
-        if ui.add_enabled(!path.closed, egui::Button::new("Add a point")).clicked() {
-            cx.tx.send(Command::Path(PathEdit::Add(cx.state.view.next_role)));
+        if ui.button("Add a point").clicked() {
+            cx.tx.send(Command::Path(PathEdit::Add));
         }
         let picked = cx.state.view.point;
         let edge = picked.filter(|p| *p < path.roles.len());
-        if ui.add_enabled(edge.is_some(), egui::Button::new("Insert")).on_hover_text("A point in the middle of the picked point's edge; both halves become edges of their own.").clicked()
+        if ui
+            .add_enabled(edge.is_some(), egui::Button::new("Insert"))
+            .on_hover_text("A point in the middle of the picked point's edge; both halves become edges of their own.")
+            .clicked()
             && let Some(at) = edge
         {
             cx.tx.send(Command::Path(PathEdit::Insert(at)));
         }
-        if ui.add_enabled(edge.is_some(), egui::Button::new("Split")).on_hover_text("Two equal halves that stay one zone.").clicked()
+        if ui
+            .add_enabled(edge.is_some(), egui::Button::new("Split"))
+            .on_hover_text("Two equal halves that stay one zone.")
+            .clicked()
             && let Some(at) = edge
         {
             cx.tx.send(Command::Path(PathEdit::Split(at)));
         }
-        if ui.add_enabled(picked.is_some() && path.own.len() > 2, egui::Button::new("Delete")).clicked()
+        if ui
+            .add_enabled(picked.is_some() && path.own.len() > 2, egui::Button::new("Delete"))
+            .clicked()
             && let Some(at) = picked
         {
             cx.tx.send(Command::Path(PathEdit::Delete(at)));
         }
     });
     let mut closed = path.closed;
-    if ui.checkbox(&mut closed, "Closed").on_hover_text("The last edge leads back to the first point.").changed() {
+    if ui
+        .checkbox(&mut closed, "Closed")
+        .on_hover_text("The last edge leads back to the first point.")
+        .changed()
+    {
         cx.tx.send(Command::Path(PathEdit::Close(closed)));
     }
     let tail = usize::from(cx.state.view.rule == DragRule::Tail);
     if let Some(chosen) = fields::choice(ui, "A drag moves", tail, &["The point", "Its tail too"]) {
-        let rule = if chosen == 0 { DragRule::Neighbours } else { DragRule::Tail };
+        let rule = if chosen == 0 {
+            DragRule::Neighbours
+        } else {
+            DragRule::Tail
+        };
         cx.tx.send(Command::SetDragRule(rule));
     }
     let gap = cx.state.derived.shell.closing_gap.unwrap_or(0.0);

@@ -17,7 +17,10 @@ pub(super) fn placement_ui(cx: Cx<'_>, ui: &mut Ui) {
     for (name, part) in ["Move x", "Move y", "Move z"].into_iter().zip(placement.shift.as_mut()) {
         changed |= length(ui, name, part, units);
     }
-    for (name, part) in ["Turn about x", "Turn about y", "Turn about z"].into_iter().zip(&mut placement.turn) {
+    for (name, part) in ["Turn about x", "Turn about y", "Turn about z"]
+        .into_iter()
+        .zip(&mut placement.turn)
+    {
         changed |= angle(ui, name, part);
     }
     changed |= number(ui, "Scale", &mut placement.scale, 0.01);

@@ -57,7 +57,10 @@ pub(super) fn star(ui: &mut Ui, star: &mut Star) -> bool {
 pub(super) fn star_path(ui: &mut Ui, path: &mut StarPath, units: Units) -> Option<&'static str> {
     let mut changed = star(ui, &mut path.star).then_some("the star");
     changed = changed.or(length(ui, "Unit length", &mut path.unit_mm, units).then_some("the unit length"));
-    changed = changed.or(ui.checkbox(&mut path.closed, "Closed").changed().then_some("the closing"));
+    changed = changed.or(ui
+        .checkbox(&mut path.closed, "Closed")
+        .changed()
+        .then_some("the closing"));
     let axes = path.star.directions().map_or(1, |d| d.len());
     let (mut delete, mut insert) = (None, None);
     for (at, letter) in path.letters.iter_mut().enumerate() {
@@ -103,13 +106,21 @@ fn letter_fields(ui: &mut Ui, at: usize, letter: &mut StarLetter, axes: usize, u
         changed = true;
     }
     let last = u32::try_from(axes.saturating_sub(1)).unwrap_or(u32::MAX);
-    let axis = egui::DragValue::new(&mut letter.axis).range(0..=last).clamp_existing_to_range(false);
-    let axis = ui.add(axis.update_while_editing(false)).accessible_name(format!("Axis of letter {number}"));
+    let axis = egui::DragValue::new(&mut letter.axis)
+        .range(0..=last)
+        .clamp_existing_to_range(false);
+    let axis = ui
+        .add(axis.update_while_editing(false))
+        .accessible_name(format!("Axis of letter {number}"));
     changed |= axis.changed();
     let golden = matches!(letter.length, StarLength::Golden(_));
     let name = format!("Length of letter {number} by");
     if let Some(chosen) = bare_choice(ui, &name, usize::from(!golden), &["φ steps", "Length"]) {
-        letter.length = if chosen == 0 { StarLength::Golden(0) } else { StarLength::Mm(400.0) };
+        letter.length = if chosen == 0 {
+            StarLength::Golden(0)
+        } else {
+            StarLength::Mm(400.0)
+        };
         changed = true;
     }
     let name = format!("Length of letter {number}");

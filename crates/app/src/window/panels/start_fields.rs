@@ -3,7 +3,7 @@
 use egui::Ui;
 use zonewright_geometry::{
     Start, Vector,
-    start::{ColumnForm, HelicalForm, LoopForm, PolarBy, PolarForm, RibbonForm, RibbonFrom},
+    start::{ColumnForm, HelicalForm, LoopForm, PolarBy, PolarForm, PolarPair, RibbonForm, RibbonFrom},
 };
 use zonewright_shop::text::Units;
 
@@ -55,18 +55,10 @@ fn polar(ui: &mut Ui, form: &mut PolarForm, units: Units) -> Option<&'static str
         PolarBy::WidthHeight { .. } => 5,
     };
     if let Some(chosen) = choice(ui, "Given by", now, &POLAR_BY)
-        && let Ok((pitch, edge_mm)) = form.pitch_and_edge()
-    {
         // The form stays as it is: only what is typed changes.
-        let (width_mm, height_mm) = (form.width_mm().unwrap_or(0.0), form.height_mm().unwrap_or(0.0));
-        form.by = match chosen {
-            0 => PolarBy::PitchEdge { pitch, edge_mm },
-            1 => PolarBy::PitchWidth { pitch, width_mm },
-            2 => PolarBy::PitchHeight { pitch, height_mm },
-            3 => PolarBy::EdgeWidth { edge_mm, width_mm },
-            4 => PolarBy::EdgeHeight { edge_mm, height_mm },
-            _ => PolarBy::WidthHeight { width_mm, height_mm },
-        };
+        && let Ok(same) = form.by_pair(PolarPair::ALL[chosen])
+    {
+        *form = same;
         changed = Some("the measures");
     }
     let measure = match &mut form.by {
@@ -127,7 +119,11 @@ fn ribbon(ui: &mut Ui, form: &mut RibbonForm, units: Units) -> Option<&'static s
     changed = changed.or(length(ui, "Edge", &mut form.edge_mm, units).then_some("the edge"));
     let now = usize::from(form.from == RibbonFrom::Across);
     if let Some(chosen) = choice(ui, "Grown from", now, &["Its edge", "Across it"]) {
-        form.from = if chosen == 0 { RibbonFrom::Edge } else { RibbonFrom::Across };
+        form.from = if chosen == 0 {
+            RibbonFrom::Edge
+        } else {
+            RibbonFrom::Across
+        };
         changed = Some("where it grows from");
     }
     changed

@@ -39,7 +39,11 @@ fn lay(ui: &mut Ui, number: usize, courses: &mut Courses, spurs: &mut Spurs) -> 
     let mut changed = false;
     let still = usize::from(*courses == Courses::UntilStill);
     if let Some(chosen) = choice(ui, &format!("Lay of step {number}"), still, &["Courses", "Until still"]) {
-        *courses = if chosen == 0 { Courses::Count(1) } else { Courses::UntilStill };
+        *courses = if chosen == 0 {
+            Courses::Count(1)
+        } else {
+            Courses::UntilStill
+        };
         changed = true;
     }
     if let Courses::Count(how_many) = courses {
@@ -50,7 +54,12 @@ fn lay(ui: &mut Ui, number: usize, courses: &mut Courses, spurs: &mut Spurs) -> 
         Spurs::Hold => 1,
         Spurs::Cross => 2,
     };
-    if let Some(chosen) = choice(ui, &format!("Spurs of step {number}"), now, &["Retract", "Hold", "Cross"]) {
+    if let Some(chosen) = choice(
+        ui,
+        &format!("Spurs of step {number}"),
+        now,
+        &["Retract", "Hold", "Cross"],
+    ) {
         *spurs = [Spurs::Retract, Spurs::Hold, Spurs::Cross][chosen];
         changed = true;
     }
@@ -64,7 +73,12 @@ fn which(cx: Cx<'_>, ui: &mut Ui, number: usize, at: &mut Vs) -> bool {
         Vs::Picked(_) => 1,
         Vs::EveryKth { .. } => 2,
     };
-    if let Some(chosen) = choice(ui, &format!("Vs of step {number}"), now, &["All open", "Picked", "Every k-th"]) {
+    if let Some(chosen) = choice(
+        ui,
+        &format!("Vs of step {number}"),
+        now,
+        &["All open", "Picked", "Every k-th"],
+    ) {
         let first = first_zig(cx, at);
         match (chosen, first) {
             (0, _) => *at = Vs::All,

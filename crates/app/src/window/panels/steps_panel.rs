@@ -17,7 +17,8 @@ pub(super) fn steps_ui(cx: Cx<'_>, ui: &mut Ui) {
     }
     let side = usize::from(cx.state.view.side == Side::Aft);
     if let Some(chosen) = fields::choice(ui, "Live front", side, &["Fore", "Aft"]) {
-        cx.tx.send(Command::SetSide(if chosen == 0 { Side::Fore } else { Side::Aft }));
+        cx.tx
+            .send(Command::SetSide(if chosen == 0 { Side::Fore } else { Side::Aft }));
     }
     ui.horizontal_wrapped(|ui| {
         for (text, command) in [
@@ -38,12 +39,20 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, step: &Step, count: usize) {
     let mut changed = false;
     let number = at + 1;
     ui.horizontal(|ui| {
-        let on = ui.checkbox(&mut edited.on, "").on_hover_text("A step switched off is kept and skipped.");
+        let on = ui
+            .checkbox(&mut edited.on, "")
+            .on_hover_text("A step switched off is kept and skipped.");
         changed |= on.accessible_name(format!("Step {number} on")).changed();
         let mut name = step.name.clone().unwrap_or_default();
         let hint = format!("{number}  {}", title(step));
-        let field = egui::TextEdit::singleline(&mut name).hint_text(hint).desired_width(ui.available_width() - 84.0);
-        if ui.add(field).accessible_name(format!("Name of step {number}")).changed() {
+        let field = egui::TextEdit::singleline(&mut name)
+            .hint_text(hint)
+            .desired_width(ui.available_width() - 84.0);
+        if ui
+            .add(field)
+            .accessible_name(format!("Name of step {number}"))
+            .changed()
+        {
             edited.name = (!name.is_empty()).then_some(name);
             changed = true;
         }

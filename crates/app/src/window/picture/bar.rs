@@ -32,8 +32,18 @@ pub(super) fn bar_ui(cx: Cx<'_>, ui: &mut Ui) {
             }
         }
         ui.separator();
-        let projections = [(Projection::Perspective, "Perspective"), (Projection::Parallel, "Parallel")];
-        pick(cx, ui, "Projection", view.projection, &projections, Command::SetProjection);
+        let projections = [
+            (Projection::Perspective, "Perspective"),
+            (Projection::Parallel, "Parallel"),
+        ];
+        pick(
+            cx,
+            ui,
+            "Projection",
+            view.projection,
+            &projections,
+            Command::SetProjection,
+        );
         pick(cx, ui, "Faces", view.faces, &FACES, Command::SetFaces);
         ui.weak("Colour by");
         pick(cx, ui, "Colour by", view.colour, &COLOURS, Command::SetColour);

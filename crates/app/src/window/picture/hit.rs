@@ -22,7 +22,9 @@ pub(super) fn at(state: &State, pos: egui::Vec2) -> Option<Hit> {
     let points = path.map_or(&[][..], |p| &p.placed);
     let point = nearest(state, pos, points.iter().copied());
     let vs = state.derived.open_on(state.view.side);
-    point.map(Hit::Point).or_else(|| nearest(state, pos, vs.iter().map(middle)).map(Hit::V))
+    point
+        .map(Hit::Point)
+        .or_else(|| nearest(state, pos, vs.iter().map(middle)).map(Hit::V))
 }
 
 /// The middle of the panel that an open V would make: where its dot is.

@@ -22,7 +22,9 @@ const KEY_STEP: f32 = 24.0;
 /// Turns what pointer and keys do on the picture into commands.
 pub(super) fn handle(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response, widgets: &mut Widgets) {
     let hovered = response.hover_pos().map(|pos| pos - rect.min);
-    let hit = hovered.filter(|_| widgets.drag.is_none()).and_then(|pos| hit::at(cx.state, pos));
+    let hit = hovered
+        .filter(|_| widgets.drag.is_none())
+        .and_then(|pos| hit::at(cx.state, pos));
     if let Some(Hit::V(index)) = hit {
         widgets.over_next = Some((cx.state.view.side, index));
     }
@@ -51,7 +53,9 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response, widge
 }
 
 fn clicked(cx: Cx<'_>, response: &Response, rect: Rect) {
-    let Some(pos) = response.interact_pointer_pos() else { return };
+    let Some(pos) = response.interact_pointer_pos() else {
+        return;
+    };
     match hit::at(cx.state, pos - rect.min) {
         Some(Hit::Point(point)) => {
             let picked = cx.state.view.point == Some(point);
@@ -75,8 +79,12 @@ fn begin(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) -> Option<Drag> {
         return None;
     }
     // Where the button went down: the pointer has moved on before it counts as a drag.
-    let from = ui.input(|i| i.pointer.press_origin()).or_else(|| response.interact_pointer_pos())?;
-    let Some(Hit::Point(point)) = hit::at(cx.state, from - rect.min) else { return Some(Drag::Orbit) };
+    let from = ui
+        .input(|i| i.pointer.press_origin())
+        .or_else(|| response.interact_pointer_pos())?;
+    let Some(Hit::Point(point)) = hit::at(cx.state, from - rect.min) else {
+        return Some(Drag::Orbit);
+    };
     let path = cx.state.derived.path.as_ref()?;
     cx.tx.send(Command::SelectPoint(Some(point)));
     Some(Drag::Point {
@@ -92,8 +100,15 @@ fn drag_on(cx: Cx<'_>, ui: &Ui, response: &Response, drag: Drag) {
     match drag {
         Drag::Orbit if by != Vec2::ZERO => cx.tx.send(Command::Orbit(by)),
         Drag::Pan if by != Vec2::ZERO => cx.tx.send(Command::Pan(by)),
-        Drag::Point { point, own, placed, from } if by != Vec2::ZERO => {
-            let (Some(pos), Some(path)) = (response.interact_pointer_pos(), &cx.state.derived.path) else { return };
+        Drag::Point {
+            point,
+            own,
+            placed,
+            from,
+        } if by != Vec2::ZERO => {
+            let (Some(pos), Some(path)) = (response.interact_pointer_pos(), &cx.state.derived.path) else {
+                return;
+            };
             let to = own + moved(cx, ui, path, placed, pos - from);
             let rule = cx.state.view.rule;
             cx.tx.send(Command::Path(PathEdit::Move { point, to, rule }));
@@ -132,7 +147,13 @@ fn keys(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) {
         m.set_focus_lock_filter(response.id, filter);
     });
     let (by, zoom, shift) = ui.input(|i| {
-        let pressed = |key| if i.modifiers.command { 0.0 } else { i.num_presses(key) as f32 };
+        let pressed = |key| {
+            if i.modifiers.command {
+                0.0
+            } else {
+                i.num_presses(key) as f32
+            }
+        };
         let x = pressed(Key::ArrowRight) - pressed(Key::ArrowLeft);
         let y = pressed(Key::ArrowDown) - pressed(Key::ArrowUp);
         let zoom = pressed(Key::Plus) + pressed(Key::Equals) - pressed(Key::Minus);

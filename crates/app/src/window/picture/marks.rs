@@ -23,7 +23,12 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
         marks.push(line(outline, 1.5, Tone::Preview));
     }
     if let Some(finding) = state.view.finding.and_then(|at| state.derived.findings.get(at)) {
-        finding_marks(&state.derived.shell, &finding.place, Tone::Finding(finding.level()), &mut marks);
+        finding_marks(
+            &state.derived.shell,
+            &finding.place,
+            Tone::Finding(finding.level()),
+            &mut marks,
+        );
     }
     marks
 }
@@ -46,7 +51,10 @@ fn path_marks(state: &State, marks: &mut Vec<Mark>) {
     marks.push(line(outline, 1.5, Tone::Mark));
     marks.push(mark(points, MarkKind::Dot { radius: 4.0 }, Tone::Mark));
     if let Some(picked) = state.view.point.and_then(|at| path.placed.get(at)) {
-        let ring = MarkKind::Ring { radius: 7.5, width: 2.0 };
+        let ring = MarkKind::Ring {
+            radius: 7.5,
+            width: 2.0,
+        };
         marks.push(mark(vec![*picked], ring, Tone::Selection));
     }
 }
@@ -57,29 +65,54 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     let mut open = Vec::new();
     let mut fresh = Vec::new();
     for (index, v) in vs.iter().enumerate().take(MOST_MARKS) {
-        let dots = if spliced.contains(&index) { &mut fresh } else { &mut open };
+        let dots = if spliced.contains(&index) {
+            &mut fresh
+        } else {
+            &mut open
+        };
         dots.push(hit::middle(v));
     }
-    marks.push(mark(open, MarkKind::Ring { radius: 3.5, width: 1.3 }, Tone::Preview));
+    marks.push(mark(
+        open,
+        MarkKind::Ring {
+            radius: 3.5,
+            width: 1.3,
+        },
+        Tone::Preview,
+    ));
     marks.push(mark(fresh, MarkKind::Dot { radius: 4.0 }, Tone::Preview));
 }
 
 fn finding_marks(shell: &Shell, place: &Place, tone: Tone, marks: &mut Vec<Mark>) {
     let points = |of: &[u32]| -> Vec<Point> {
-        of.iter().take(MOST_MARKS).filter_map(|v| shell.points.get(*v as usize).copied()).collect()
+        of.iter()
+            .take(MOST_MARKS)
+            .filter_map(|v| shell.points.get(*v as usize).copied())
+            .collect()
     };
     match place {
         Place::Vertices(vertices) => {
-            let ring = MarkKind::Ring { radius: 9.0, width: 2.5 };
+            let ring = MarkKind::Ring {
+                radius: 9.0,
+                width: 2.5,
+            };
             marks.push(mark(points(vertices), ring, tone));
         }
         Place::Edges(edges) => {
-            for edge in edges.iter().take(MOST_MARKS).filter_map(|e| shell.edges.get(*e as usize)) {
+            for edge in edges
+                .iter()
+                .take(MOST_MARKS)
+                .filter_map(|e| shell.edges.get(*e as usize))
+            {
                 marks.push(line(points(&edge.ends), 3.5, tone));
             }
         }
         Place::Panels(panels) => {
-            for panel in panels.iter().take(MOST_MARKS).filter_map(|p| shell.panels.get(*p as usize)) {
+            for panel in panels
+                .iter()
+                .take(MOST_MARKS)
+                .filter_map(|p| shell.panels.get(*p as usize))
+            {
                 let corners = points(&panel.corners);
                 let outline = [&corners[..], &corners[..1.min(corners.len())]].concat();
                 marks.push(mark(corners, MarkKind::Polygon, tone));

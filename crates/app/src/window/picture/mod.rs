@@ -50,7 +50,8 @@ pub fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     }
     let panels = cx.state.derived.totals.panels;
     response.widget_info(|| WidgetInfo::labeled(Role::Canvas, true, NAME));
-    ui.ctx().accesskit_node_builder(response.id, |node| node.set_value(format!("{panels} panels")));
+    ui.ctx()
+        .accesskit_node_builder(response.id, |node| node.set_value(format!("{panels} panels")));
     input::handle(cx, ui, rect, &response, widgets);
     put_together(cx, widgets);
     let painter = ui.painter_at(rect);
@@ -89,7 +90,9 @@ fn put_together(cx: Cx<'_>, widgets: &mut Widgets) {
         ..Tints::default()
     };
     let marks = marks::marks(state, widgets.over);
-    widgets.cache.picture = derived.scene.picture(&derived.shell, &state.camera, &look, &tints, &marks);
+    widgets.cache.picture = derived
+        .scene
+        .picture(&derived.shell, &state.camera, &look, &tints, &marks);
     widgets.cache.key = Some(key);
     widgets.pictures += 1;
 }
@@ -108,7 +111,11 @@ fn empty_ui(cx: Cx<'_>, ui: &mut Ui, rect: egui::Rect) {
     for (at, line) in lines.into_iter().enumerate() {
         let pos = egui::pos2(rect.center().x, top + step * at as f32);
         let font = egui::TextStyle::Body.resolve(ui.style());
-        let colour = if at == 0 { cx.state.colours().text() } else { cx.state.colours().text_weak() };
+        let colour = if at == 0 {
+            cx.state.colours().text()
+        } else {
+            cx.state.colours().text_weak()
+        };
         ui.painter().text(pos, egui::Align2::CENTER_CENTER, line, font, colour);
     }
 }
