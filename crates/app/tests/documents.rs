@@ -1,5 +1,7 @@
 //! Design files: what is written is read again, and what cannot be read is refused with its place and left alone.
 
+#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
+
 mod designs;
 
 use std::fs;

@@ -1,10 +1,12 @@
 //! Imported paths: planted coordinates come out, and bad files are refused without a panic.
 
+#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
+
 use std::{fs, path::PathBuf};
 
 use proptest::prelude::*;
-use zonewright::import::{ImportedPath, free_path, import};
-use zonewright_geometry::{Point, start::FreeVector};
+use zonewright::import::{ImportedPath, import};
+use zonewright_geometry::Point;
 
 fn file(name: &str, content: impl AsRef<[u8]>) -> (tempfile::TempDir, PathBuf) {
     let folder = tempfile::tempdir().unwrap();
@@ -58,12 +60,6 @@ fn csv_with_and_without_a_header() {
 fn a_path_that_comes_back_to_its_beginning_is_closed() {
     let path = read("a.csv", "0,0\n1,0\n1,1\n0,0\n", 0.1);
     assert!(path.closed && path.points.len() == 3);
-    let free = free_path(&path.points, path.closed);
-    assert_eq!(free.letters.len(), 3);
-    let FreeVector::Own(last) = free.letters[2].vector else {
-        panic!()
-    };
-    assert_eq!(last.to_array(), [-1.0, -1.0, 0.0]);
 }
 
 #[test]
@@ -248,7 +244,7 @@ fn a_tolerance_that_cannot_be_used_is_refused() {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(400))]
+    #![proptest_config(ProptestConfig::with_cases(150))]
 
     #[test]
     fn spoilt_files_never_panic(at in any::<prop::sample::Index>(), by in "[ -~\n]{0,6}", cut in 0_usize..4) {

@@ -9,6 +9,7 @@ pub mod inspect;
 pub mod measure;
 mod record;
 mod shell;
+mod shell_check;
 mod space;
 pub mod start;
 
@@ -22,5 +23,6 @@ pub use shell::{
     Course, CrowdedEdge, Edge, FrontLetter, FrontState, Grown, Letter, NONE, OpenV, Panel, Pinch, Rim, Seam, Shell,
     Tee, Zone, ZoneKind,
 };
+pub use shell_check::Broken;
 pub use space::{Angle, Point, Vector};
 pub use start::{FirstWord, Role, Start, StartLetter, StartZone};

@@ -35,6 +35,7 @@ impl Edge {
     #[must_use]
     pub const fn rim_panel(&self) -> Option<u32> {
         match self.panels {
+            [NONE, NONE] => None,
             [panel, NONE] | [NONE, panel] => Some(panel),
             _ => None,
         }
@@ -61,7 +62,8 @@ pub struct CrowdedEdge {
     pub more: Vec<u32>,
 }
 
-/// A closed walk along the border of the shell, with the shell on its left seen from outside.
+/// A closed walk along the border of the shell, with the shell on its left seen from outside. Where it comes to an edge of three panels, the walk
+/// may end.
 #[derive(Clone, PartialEq, Eq, Debug)]
 pub struct Rim {
     /// The vertices in order.

@@ -2,7 +2,23 @@
 //!
 //! Pure: everything comes out as text or bytes; nothing here opens a file or a window.
 
+#![cfg_attr(test, expect(clippy::unwrap_used, reason = "a test may stop where it stands"))]
+
 pub mod bevel;
+pub mod export;
 pub mod family;
+mod finding_text;
+pub mod lists;
 pub mod marks;
+pub mod models;
+pub mod parts;
+#[cfg(test)]
+mod test_shells;
 pub mod text;
+
+pub use bevel::EdgeKind;
+pub use export::{ExportFile, FILES, UnknownWord, export};
+pub use family::{FamilyTolerance, Hand};
+pub use finding_text::{FindingText, FindingWriter, level_word};
+pub use marks::Mark;
+pub use parts::{Family, Mate, Mates, PartEdge, PartPanel, Parts};

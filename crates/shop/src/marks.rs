@@ -126,6 +126,15 @@ pub fn edge_mark(edge: u32, edges: usize) -> Mark {
     })
 }
 
+/// The mark of a zone: `Z1` for the first.
+#[must_use]
+pub fn zone_mark(zone: u32) -> Mark {
+    Mark::build(&mut String::new(), |text| {
+        text.push('Z');
+        push_count(text, u64::from(zone) + 1, 1);
+    })
+}
+
 /// The letters of edges, without i and o.
 const LETTERS: &[u8; 24] = b"abcdefghjklmnpqrstuvwxyz";
 
@@ -190,6 +199,7 @@ mod tests {
         assert_eq!(part_mark(3, Hand::Left), "P3L");
         assert_eq!(part_mark(3, Hand::Right), "P3R");
         assert_eq!(part_mark(u32::MAX, Hand::None), "P4294967295");
+        assert_eq!(zone_mark(0), "Z1");
         assert_eq!(edge_mark(41, 1200), "E0042");
         assert_eq!(edge_mark(u32::MAX, usize::MAX).len(), 21);
         let letters: Vec<_> = (0..60).map(edge_letter).collect();

@@ -46,7 +46,11 @@ pub(super) fn curve(text: &str) -> Result<Curve, String> {
             turn: take(&mut given, "turn", angle)?,
             rise_mm: take(&mut given, "rise", length)?,
         },
-        other => return Err(format!("there is no curve `{other}`; write line, arc, catenary, sine, helix or free")),
+        other => {
+            return Err(format!(
+                "there is no curve `{other}`; write line, arc, catenary, sine, helix or free"
+            ));
+        }
     };
     let curve = Curve {
         shape,
@@ -54,7 +58,9 @@ pub(super) fn curve(text: &str) -> Result<Curve, String> {
         azimuth: take_or(&mut given, "azimuth", Angle::default(), angle)?,
     };
     match given.first() {
-        Some((key, _)) => Err(format!("the curve `{word}` has no measure `{key}`, or it is given twice; see --help")),
+        Some((key, _)) => Err(format!(
+            "the curve `{word}` has no measure `{key}`, or it is given twice; see --help"
+        )),
         None => Ok(curve),
     }
 }
@@ -85,7 +91,11 @@ fn take<T>(given: &mut Vec<(String, String)>, key: &str, read: Read<T>) -> Resul
 }
 
 fn take_or<T>(given: &mut Vec<(String, String)>, key: &str, otherwise: T, read: Read<T>) -> Result<T, String> {
-    if given.iter().any(|(k, _)| k == key) { take(given, key, read) } else { Ok(otherwise) }
+    if given.iter().any(|(k, _)| k == key) {
+        take(given, key, read)
+    } else {
+        Ok(otherwise)
+    }
 }
 
 #[cfg(test)]
@@ -99,7 +109,14 @@ mod tests {
             span_mm: 3000.0,
             rise_mm: 11.75 * 25.4,
         };
-        assert_eq!(read, Curve { shape, parts: 8, azimuth: Angle::from_degrees(90.0) });
+        assert_eq!(
+            read,
+            Curve {
+                shape,
+                parts: 8,
+                azimuth: Angle::from_degrees(90.0)
+            }
+        );
         assert!(matches!(curve("free 0,0,0 1,2,3").unwrap().shape, CurveShape::Free(p) if p.len() == 2));
     }
 

@@ -8,12 +8,7 @@ mod star_words;
 mod start;
 mod values;
 
-use std::{
-    ffi::OsString,
-    io::Write,
-    path::PathBuf,
-    process::ExitCode,
-};
+use std::{ffi::OsString, io::Write, path::PathBuf, process::ExitCode};
 
 use clap::{Parser, Subcommand, error::ErrorKind};
 
@@ -28,10 +23,17 @@ const UNUSABLE: u8 = 2;
 
 /// Designs shells of flat parallelogram panels, and hands the bench its lists.
 #[derive(Parser, Debug)]
-#[command(name = "zonewright", version, args_conflicts_with_subcommands = true, max_term_width = 110)]
-#[command(after_help = "Without a command the window opens: on FILE, else on the last design, else on the bundled demo.\n\
+#[command(
+    name = "zonewright",
+    version,
+    args_conflicts_with_subcommands = true,
+    max_term_width = 110
+)]
+#[command(
+    after_help = "Without a command the window opens: on FILE, else on the last design, else on the bundled demo.\n\
     Angles are in degrees; lengths in mm unless a unit is written (300mm, 0.3m, 11 3/4in).\n\
-    Exit status: 0 done; 1 only from check, when a finding says stop; 2 bad arguments or an input that cannot be used.")]
+    Exit status: 0 done; 1 only from check, when a finding says stop; 2 bad arguments or an input that cannot be used."
+)]
 struct Cli {
     #[command(subcommand)]
     command: Option<Command>,
@@ -108,9 +110,12 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),
-        Some(Command::Picture { file, output, view, size }) => {
-            picture::write(&file, &output, &view, size).map(|()| DONE)
-        }
+        Some(Command::Picture {
+            file,
+            output,
+            view,
+            size,
+        }) => picture::write(&file, &output, &view, size).map(|()| DONE),
     };
     Asked::Leave(ExitCode::from(done.unwrap_or_else(|what| {
         complain(&what);

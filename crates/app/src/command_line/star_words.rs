@@ -43,7 +43,11 @@ pub(super) fn star(text: &str) -> Result<Star, String> {
     if found.len() < before {
         return Err(format!("the star `{text}` names axes twice; name each once"));
     }
-    Ok(if cube { Star::Cubic(found) } else { Star::Icosahedral(found) })
+    Ok(if cube {
+        Star::Cubic(found)
+    } else {
+        Star::Icosahedral(found)
+    })
 }
 
 fn unknown(text: &str) -> String {
@@ -52,13 +56,24 @@ fn unknown(text: &str) -> String {
 
 /// Reads the letters of a star path: `+0 -3^1 +5=250mm`.
 pub(super) fn letters(text: &str) -> Result<Vec<StarLetter>, String> {
-    let words = if text.contains(';') { text.split(';').collect::<Vec<_>>() } else { text.split_whitespace().collect() };
-    words.into_iter().map(str::trim).filter(|w| !w.is_empty()).map(letter).collect()
+    let words = if text.contains(';') {
+        text.split(';').collect::<Vec<_>>()
+    } else {
+        text.split_whitespace().collect()
+    };
+    words
+        .into_iter()
+        .map(str::trim)
+        .filter(|w| !w.is_empty())
+        .map(letter)
+        .collect()
 }
 
 fn letter(word: &str) -> Result<StarLetter, String> {
     let wrong = || {
-        format!("`{word}` is no letter; write a sign and an axis, then ^ and a golden step or = and a length, as in +0, -3^1, +5=250mm")
+        format!(
+            "`{word}` is no letter; write a sign and an axis, then ^ and a golden step or = and a length, as in +0, -3^1, +5=250mm"
+        )
     };
     let (sign, rest) = match word.split_at_checked(1) {
         Some(("+", rest)) => (Sign::Plus, rest),
@@ -86,8 +101,14 @@ mod tests {
         assert_eq!(star("6"), Ok(Star::Icosahedral(vec![AxisClass::FiveFold])));
         assert_eq!(star("c6"), Ok(Star::Cubic(vec![AxisClass::TwoFold])));
         assert_eq!(star("3"), star("c3"));
-        assert_eq!(star("c3+6"), Ok(Star::Cubic(vec![AxisClass::FourFold, AxisClass::TwoFold])));
-        assert_eq!(star("15+6"), Ok(Star::Icosahedral(vec![AxisClass::FiveFold, AxisClass::TwoFold])));
+        assert_eq!(
+            star("c3+6"),
+            Ok(Star::Cubic(vec![AxisClass::FourFold, AxisClass::TwoFold]))
+        );
+        assert_eq!(
+            star("15+6"),
+            Ok(Star::Icosahedral(vec![AxisClass::FiveFold, AxisClass::TwoFold]))
+        );
         assert_eq!(star("p7"), Ok(Star::Prismatic(7)));
         for wrong in ["", "7", "6+6", "31+6", "c10", "3+6", "p", "p-1", "6+"] {
             assert!(star(wrong).is_err(), "{wrong}");
@@ -99,11 +120,10 @@ mod tests {
         let read = letters("+0 -3^-1 +12=1in").unwrap();
         let lengths = [StarLength::Golden(0), StarLength::Golden(-1), StarLength::Mm(25.4)];
         assert_eq!(read.iter().map(|l| l.length).collect::<Vec<_>>(), lengths);
-        assert_eq!(read.iter().map(|l| (l.axis, l.sign)).collect::<Vec<_>>(), [
-            (0, Sign::Plus),
-            (3, Sign::Minus),
-            (12, Sign::Plus)
-        ]);
+        assert_eq!(
+            read.iter().map(|l| (l.axis, l.sign)).collect::<Vec<_>>(),
+            [(0, Sign::Plus), (3, Sign::Minus), (12, Sign::Plus)]
+        );
         for wrong in ["0", "+", "+x", "+1^", "+1^1.5", "+1=", "+1*2", "é1"] {
             assert!(letters(wrong).is_err(), "{wrong}");
         }

@@ -4,8 +4,7 @@ use std::path::{Path, PathBuf};
 
 use clap::{Args, Subcommand, ValueEnum};
 use zonewright_geometry::{
-    Angle, Point, Spurs, Vector,
-    grow,
+    Angle, Finding, Point, Spurs, Vector, grow,
     start::{
         ColumnForm, Curve, FreePath, HelicalForm, LoopForm, PolarBy, PolarForm, RibbonForm, RibbonFrom, Star,
         StarLetter, StarPath, StarSolid, Start, TranslationForm,
@@ -15,7 +14,7 @@ use zonewright_geometry::{
 use super::{curve_words, refusal, star_words, values};
 use crate::{
     document::{new_design, write_design},
-    import::{free_path, import},
+    import::import,
 };
 
 /// The kinds of start.
@@ -270,12 +269,11 @@ impl Kind {
             SpurWord::Hold => Spurs::Hold,
             SpurWord::Cross => Spurs::Cross,
         };
-        let refused = |finding| format!("no design was made: {}", refusal::sentence(&finding));
-        let mut design = new_design(start, common.courses, spurs).map_err(refused)?;
+        let mut design = new_design(start, common.courses, spurs).map_err(|finding| refused(&finding))?;
         design.name = common.name.clone().unwrap_or_else(|| stem(path));
         let (_, findings) = grow(&design.shape);
         if let Some(finding) = findings.into_iter().find(|f| refusal::not_grown(f.code)) {
-            return Err(refused(finding));
+            return Err(refused(&finding));
         }
         write_design(path, &design).map_err(|error| error.to_string())
     }
@@ -284,7 +282,7 @@ impl Kind {
         Ok(match self {
             Self::Zigzag(o) => {
                 let path = match (o.points, o.from) {
-                    (Some(Points(points)), _) => free_path(&points, o.closed),
+                    (Some(Points(points)), _) => free_path(&points, o.closed)?,
                     (None, Some(file)) => imported(&file, o.tolerance, o.closed)?,
                     (None, None) => return Err("give --points or --from".to_owned()),
                 };
@@ -363,7 +361,16 @@ impl Kind {
 
 fn imported(file: &Path, tolerance: f64, closed: bool) -> Result<FreePath, String> {
     let path = import(file, tolerance).map_err(|error| error.to_string())?;
-    Ok(free_path(&path.points, closed || path.closed))
+    free_path(&path.points, closed || path.closed)
+}
+
+/// Free points: zig, zag, zig, zag ...; each edge is a zone of its own.
+fn free_path(points: &[Point], closed: bool) -> Result<FreePath, String> {
+    FreePath::from_points(points, closed).map_err(|finding| refused(&finding))
+}
+
+fn refused(finding: &Finding) -> String {
+    format!("no design was made: {}", refusal::sentence(finding))
 }
 
 fn polar_by(o: &Polar) -> Result<PolarBy, String> {
@@ -374,10 +381,17 @@ fn polar_by(o: &Polar) -> Result<PolarBy, String> {
         (None, Some(edge_mm), Some(width_mm), None) => PolarBy::EdgeWidth { edge_mm, width_mm },
         (None, Some(edge_mm), None, Some(height_mm)) => PolarBy::EdgeHeight { edge_mm, height_mm },
         (None, None, Some(width_mm), Some(height_mm)) => PolarBy::WidthHeight { width_mm, height_mm },
-        _ => return Err("a polar form is fixed by two measures; give exactly two of --pitch, --edge, --width, --height".to_owned()),
+        _ => {
+            return Err(
+                "a polar form is fixed by two measures; give exactly two of --pitch, --edge, --width, --height"
+                    .to_owned(),
+            );
+        }
     })
 }
 
 fn stem(path: &Path) -> String {
-    path.file_stem().map(|s| s.to_string_lossy().into_owned()).unwrap_or_default()
+    path.file_stem()
+        .map(|s| s.to_string_lossy().into_owned())
+        .unwrap_or_default()
 }

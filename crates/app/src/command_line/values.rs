@@ -1,16 +1,24 @@
 //! Values of the command line's options.
 
 use zonewright_geometry::{Angle, Point};
-use zonewright_shop::text::{Units, parse_angle, parse_length};
+use zonewright_shop::text::{ParseError, Units, parse_angle, parse_length};
+
+use super::refusal::uncapitalised;
 
 /// A length in millimetres; another unit may be written.
 pub(super) fn length(text: &str) -> Result<f64, String> {
-    parse_length(text, Units::Mm).map_err(|error| error.to_string())
+    parse_length(text, Units::Mm).map_err(|error| explained(&error))
 }
 
 /// An angle in degrees.
 pub(super) fn angle(text: &str) -> Result<Angle, String> {
-    parse_angle(text).map_err(|error| error.to_string())
+    parse_angle(text).map_err(|error| explained(&error))
+}
+
+/// A parser's error as the rest of a sentence.
+fn explained(error: &ParseError) -> String {
+    let remedy = uncapitalised(error.remedy.trim_end_matches('.'));
+    format!("{} at column {}; {remedy}", uncapitalised(&error.what), error.at + 1)
 }
 
 /// How many of something. Numbers far beyond every limit are let through, so that the limit can be named.
@@ -30,7 +38,11 @@ pub(super) fn count(text: &str) -> Result<u32, String> {
 /// A plain number, such as how many waves.
 pub(super) fn number(text: &str) -> Result<f64, String> {
     let value: f64 = text.trim().parse().map_err(|_| format!("`{text}` is no number"))?;
-    if value.is_finite() { Ok(value) } else { Err(format!("`{text}` is not finite")) }
+    if value.is_finite() {
+        Ok(value)
+    } else {
+        Err(format!("`{text}` is not finite"))
+    }
 }
 
 /// Points: `0,0,0 300,0,200 ...`. Where lengths are written with spaces in them, `;` separates the points.

@@ -7,10 +7,7 @@ mod svg_paths;
 
 use std::{fs::File, io::Read, path::Path};
 
-use zonewright_geometry::{
-    Point,
-    start::{FreeLetter, FreePath, FreeVector, Role},
-};
+use zonewright_geometry::Point;
 
 /// The most bytes that an imported file may have.
 pub const MAX_IMPORT_BYTES: u64 = 64 << 20;
@@ -107,23 +104,5 @@ fn tidy(mut path: ImportedPath) -> Result<ImportedPath, String> {
             "its path has {n} points, and at most {MAX_IMPORT_POINTS} are read; give a larger tolerance or a shorter path"
         )),
         _ => Ok(path),
-    }
-}
-
-/// Free points: zig, zag, zig, zag ... Each edge is a zone of its own.
-#[must_use]
-pub fn free_path(points: &[Point], closed: bool) -> FreePath {
-    let ends = points.iter().skip(1).chain(points.first().filter(|_| closed));
-    let letters = (0_u32..)
-        .zip(points.iter().zip(ends))
-        .map(|(id, (&from, &to))| FreeLetter {
-            id,
-            vector: FreeVector::Own(to - from),
-            role: if id % 2 == 0 { Role::Zig } else { Role::Zag },
-        });
-    FreePath {
-        origin: points.first().copied().unwrap_or(Point::ORIGIN),
-        closed,
-        letters: letters.collect(),
     }
 }

@@ -1,6 +1,6 @@
 //! Edges that lie in panels.
 
-use super::{pair::length_inside, plate::Plate};
+use super::{Passage, pair::length_inside, plate::Plate};
 use crate::{NONE, Shell, measure::Borders};
 
 /// A side of a panel that lies in the inside of another.
@@ -15,34 +15,37 @@ pub(super) struct Contact {
     pub(super) above: bool,
 }
 
-/// Pairs of panels that cross because an edge lies in a panel and the edge's panels are on opposite sides of it.
-pub(super) fn passing_through(shell: &Shell, plates: &[Plate], contacts: &[Contact]) -> Vec<[u32; 2]> {
+/// Edges that lie in panels with their own panels on opposite sides, sorted.
+pub(super) fn passages(shell: &Shell, tolerance: f64, contacts: &[Contact]) -> Vec<Passage> {
     if contacts.is_empty() {
         return Vec::new();
     }
     let borders = Borders::new(shell);
-    // The edge, the panel that it lies in, and what comes there.
+    // The edge, the panel that it lies in, and whether what comes there comes from above.
     let mut touches = Vec::new();
     for contact in contacts {
-        let on = &plates[contact.on as usize];
-        let tolerance = on.tolerance.max(plates[contact.panel as usize].tolerance);
+        let [on, of] = [contact.on, contact.panel].map(|p| Plate::new(shell, p, tolerance));
+        let tolerance = on.tolerance.max(of.tolerance);
         for &edge in side_edges(shell, &borders, contact.panel, contact.side) {
             if edge == NONE {
                 continue;
             }
             let ends = shell.edges[edge as usize].ends.map(|v| shell.points[v as usize]);
-            if length_inside(on, ends, tolerance) > tolerance {
-                touches.push((edge, contact.on, contact.panel, contact.above));
+            if length_inside(&on, ends, tolerance) > tolerance {
+                touches.push((edge, contact.on, contact.above));
             }
         }
     }
     touches.sort_unstable();
-    let same_place = |one: &(u32, u32, u32, bool), other: &(u32, u32, u32, bool)| (one.0, one.1) == (other.0, other.1);
-    let through = |group: &&[(u32, u32, u32, bool)]| group.iter().any(|t| t.3) && group.iter().any(|t| !t.3);
-    let groups = touches.chunk_by(same_place).filter(through);
-    groups
-        .flatten()
-        .map(|&(_, on, panel, _)| [on.min(panel), on.max(panel)])
+    touches.dedup();
+    // What is left twice comes from both sides.
+    let both = |two: &[(u32, u32, bool)]| (two[0].0, two[0].1) == (two[1].0, two[1].1);
+    let passages = touches.windows(2).filter(|two| both(two));
+    passages
+        .map(|two| Passage {
+            edge: two[0].0,
+            panel: two[0].1,
+        })
         .collect()
 }
 

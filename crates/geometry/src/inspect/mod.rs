@@ -4,17 +4,20 @@
 //!
 //! Two panels cross when their insides meet: when they would have to be moved by more than the contact tolerance to part
 //! them. A corner on a face, an edge on an edge, an edge on a face from one side is contact, not a crossing. Panels that
-//! share an edge cross only when one is folded flat onto the other. Where an edge lies in a panel and the edge's two panels
-//! are on opposite sides of it, the sheet passes through the panel, and both are reported to cross it.
+//! share an edge cross only when one is folded flat onto the other. Where an edge lies in the inside of a panel and the edge's
+//! own panels are on opposite sides of it, no two insides meet, and yet the sheet passes through: that is a [`Passage`],
+//! kept apart so that crossings count what their definition says.
 
 mod contact;
 mod near;
+mod newcomers;
 mod pair;
 mod plate;
 mod report;
 mod tree;
 
 use contact::Contact;
+pub use newcomers::crossings_of_new;
 use pair::Meeting;
 use plate::Plate;
 pub use report::LISTED;
@@ -31,6 +34,15 @@ pub struct Crossing {
     pub shares_corner: bool,
 }
 
+/// An edge that lies in the inside of a panel, with its own panels on opposite sides of that panel.
+#[derive(Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Debug)]
+pub struct Passage {
+    /// The edge.
+    pub edge: u32,
+    /// The panel that it lies in.
+    pub panel: u32,
+}
+
 /// Two rim edges, or rim vertices, that nearly meet.
 #[derive(Clone, Copy, PartialEq, Debug)]
 pub struct NearMiss {
@@ -45,6 +57,8 @@ pub struct NearMiss {
 pub struct Inspection {
     /// Panels that pass through each other, sorted.
     pub crossings: Vec<Crossing>,
+    /// Edges along which a sheet passes through a panel without any crossing there, sorted.
+    pub passages: Vec<Passage>,
     /// Panels that lie on the same place, in pairs, sorted. They are not counted as crossings.
     pub doubled: Vec<[u32; 2]>,
     /// Rims that nearly meet, sorted.
@@ -66,49 +80,56 @@ const PLACE_ROUNDING: f64 = 64.0 * f64::EPSILON;
 /// threads.
 #[must_use]
 pub fn inspect(shell: &Shell, tolerances: &Tolerances) -> Inspection {
-    let (crossings, doubled) = crossings(shell);
     Inspection {
-        crossings,
-        doubled,
         near_misses: near::near_misses(shell, tolerances),
+        ..meetings(shell)
     }
 }
 
-/// Pairs of panels that cross, and pairs that are doubled, each sorted.
-fn crossings(shell: &Shell) -> (Vec<Crossing>, Vec<[u32; 2]>) {
-    let contact = contact_tolerance(shell);
-    let panels = || 0_u32..u32::try_from(shell.panels.len()).unwrap_or(u32::MAX);
-    let plates: Vec<Plate> = panels().map(|p| Plate::new(shell, p, contact)).collect();
-    let whole = panels().filter(|&p| plates[p as usize].is_whole());
-    let tree = Tree::new(whole.map(|p| (p, plates[p as usize].extent())).collect());
+impl Inspection {
+    /// Whether the shell passes through itself or lies on itself anywhere, so that what it encloses is no volume.
+    #[must_use]
+    pub fn crosses_itself(&self) -> bool {
+        !self.crossings.is_empty() || !self.passages.is_empty() || !self.doubled.is_empty()
+    }
+}
 
-    let [mut crossing, mut doubled] = [Vec::new(), Vec::new()];
+/// Everything but the near misses.
+fn meetings(shell: &Shell) -> Inspection {
+    let contact = contact_tolerance(shell);
+    let panels = 0_u32..u32::try_from(shell.panels.len()).unwrap_or(u32::MAX);
+    let plates = panels.map(|p| Plate::new(shell, p, contact));
+    let whole = plates.filter(Plate::is_whole);
+    let tree = Tree::new(whole.map(|p| (p.panel, p.extent())).collect());
+    // Along the curve, so that panels which are close are also close in memory.
+    let plates: Vec<Plate> = tree.order().map(|p| Plate::new(shell, p, contact)).collect();
+
+    let (mut crossing, mut doubled) = (Vec::new(), Vec::new());
     let mut contacts = Vec::new();
-    tree.pairs(|one, other| {
-        let pair = [one.min(other), one.max(other)];
-        let [a, b] = pair.map(|p| &plates[p as usize]);
+    tree.pairs(|i, j| {
+        let [a, b] = [&plates[i], &plates[j]];
+        let pair = [a.panel.min(b.panel), a.panel.max(b.panel)];
         match pair::meet(a, b) {
             Meeting::Apart => {}
-            Meeting::Crossing => crossing.push(pair),
+            Meeting::Crossing => crossing.push(Crossing {
+                panels: pair,
+                shares_corner: a.shares_place(b),
+            }),
             Meeting::Doubled => doubled.push(pair),
             Meeting::Lies { first, side, above } => {
-                let [panel, on] = if first { pair } else { [pair[1], pair[0]] };
+                let [panel, on] = if first { [a.panel, b.panel] } else { [b.panel, a.panel] };
                 contacts.push(Contact { panel, side, on, above });
             }
         }
     });
-    crossing.extend(contact::passing_through(shell, &plates, &contacts));
     crossing.sort_unstable();
-    crossing.dedup();
     doubled.sort_unstable();
-    let crossings = crossing.into_iter().map(|panels| {
-        let [a, b] = panels.map(|p| &plates[p as usize]);
-        Crossing {
-            panels,
-            shares_corner: a.shares_place(b),
-        }
-    });
-    (crossings.collect(), doubled)
+    Inspection {
+        crossings: crossing,
+        passages: contact::passages(shell, contact, &contacts),
+        doubled,
+        near_misses: Vec::new(),
+    }
 }
 
 /// The depth up to which panels are in contact, in millimetres.

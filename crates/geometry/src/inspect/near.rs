@@ -40,8 +40,10 @@ pub(super) fn near_misses(shell: &Shell, tolerances: &Tolerances) -> Vec<NearMis
         return Vec::new();
     }
     let mut found: Vec<NearMiss> = Vec::new();
-    Tree::new(items).pairs(|i, j| {
-        let [one, other] = [&edges[i as usize], &edges[j as usize]];
+    let tree = Tree::new(items);
+    let order: Vec<u32> = tree.order().collect();
+    tree.pairs(|i, j| {
+        let [one, other] = [i, j].map(|k| &edges[order[k] as usize]);
         if one.panel == other.panel {
             return;
         }

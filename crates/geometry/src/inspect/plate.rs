@@ -7,6 +7,7 @@ use crate::{Point, Shell, Vector};
 
 /// A panel with what every question about it needs.
 pub(super) struct Plate {
+    pub(super) panel: u32,
     pub(super) vertices: [u32; 4],
     pub(super) corners: [Point; 4],
     /// Cross product of the sides at corner 0.
@@ -35,6 +36,7 @@ impl Plate {
         // Zero on a grown panel. Joining rims moves corners, and what is bent by so much cannot be told apart by less.
         let bend = ((c - b) - v).length();
         Self {
+            panel,
             vertices: shell.panels[panel as usize].corners,
             corners,
             normal,
@@ -97,7 +99,7 @@ impl Plate {
     }
 }
 
-/// The triple product (b - a) x (c - a) . (d - a), with its sign exact (Shewchuk's adaptive predicate).
+/// The triple product (b - a) x (c - a) . (d - a), with its sign exact (adaptive predicate of J. R. Shewchuk, Discrete Comput. Geom. 18 (1997) 305-363; from memory).
 pub(super) fn triple(a: Point, b: Point, c: Point, d: Point) -> f64 {
     let coord = |p: Point| {
         let [x, y, z] = p.to_array();

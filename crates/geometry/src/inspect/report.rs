@@ -10,7 +10,8 @@ impl Inspection {
     /// The findings of this inspection.
     ///
     /// Each pair has a finding of its own, up to [`LISTED`] of a kind. When there are more, one further finding has the places
-    /// of all the others, and the count of all pairs as its figure. A near miss has its gap as figure, and the
+    /// of all the others, and the count of all pairs as its figure. Passages are one finding of code crossing, with their edges as
+    /// place and their count as figure. A near miss has its gap as figure, and the
     /// near tolerance as limit.
     #[must_use]
     pub fn findings(&self, tolerances: &Tolerances) -> Vec<Finding> {
@@ -23,6 +24,13 @@ impl Inspection {
         );
         let crossings = self.crossings.iter().map(|c| c.panels);
         listed(&mut findings, Code::Crossing, crossings, Place::Panels);
+
+        if !self.passages.is_empty() {
+            let mut edges: Vec<u32> = self.passages.iter().map(|p| p.edge).collect();
+            edges.dedup();
+            let all = Finding::new(Code::Crossing, Place::Edges(edges));
+            findings.push(all.with(figure(self.passages.len()), None, Unit::Count));
+        }
 
         let from = findings.len();
         let misses = self.near_misses.iter().map(|m| m.vertices);
@@ -56,8 +64,11 @@ fn listed(
     if !rest.is_empty() {
         rest.sort_unstable();
         rest.dedup();
-        #[expect(clippy::cast_precision_loss, reason = "a count of pairs in memory is far below 2^53")]
-        let figure = count as f64;
-        findings.push(Finding::new(code, place(rest)).with(figure, None, Unit::Count));
+        findings.push(Finding::new(code, place(rest)).with(figure(count), None, Unit::Count));
     }
+}
+
+#[expect(clippy::cast_precision_loss, reason = "a count of pairs in memory is far below 2^53")]
+const fn figure(count: usize) -> f64 {
+    count as f64
 }

@@ -40,13 +40,14 @@ impl Extent {
         }
     }
 
+    /// All six comparisons without a branch between them: most pairs that are asked for are a toss-up.
     fn overlaps(&self, other: &Self) -> bool {
-        self.least.x <= other.most.x
-            && other.least.x <= self.most.x
-            && self.least.y <= other.most.y
-            && other.least.y <= self.most.y
-            && self.least.z <= other.most.z
-            && other.least.z <= self.most.z
+        (self.least.x <= other.most.x)
+            & (other.least.x <= self.most.x)
+            & (self.least.y <= other.most.y)
+            & (other.least.y <= self.most.y)
+            & (self.least.z <= other.most.z)
+            & (other.least.z <= self.most.z)
     }
 }
 
@@ -89,8 +90,14 @@ impl Tree {
         Self { items, levels }
     }
 
-    /// Calls for every two items whose boxes overlap, once each, in an order that depends only on the boxes.
-    pub(super) fn pairs(&self, mut visit: impl FnMut(u32, u32)) {
+    /// The items along the curve.
+    pub(super) fn order(&self) -> impl Iterator<Item = u32> {
+        self.items.iter().map(|item| item.0)
+    }
+
+    /// Calls for every two items whose boxes overlap, once each, with their positions in [`Tree::order`]. The order of the calls
+    /// depends only on the boxes.
+    pub(super) fn pairs(&self, mut visit: impl FnMut(usize, usize)) {
         let mut stack = vec![(self.levels.len() - 1, 0, 0)];
         while let Some((level, i, j)) = stack.pop() {
             let boxes = &self.levels[level];
@@ -116,12 +123,19 @@ impl Tree {
         }
     }
 
-    fn pairs_of_runs(&self, i: usize, j: usize, visit: &mut impl FnMut(u32, u32)) {
-        let run = |k: usize| &self.items[k * RUN..self.items.len().min(k * RUN + RUN)];
-        for (at, one) in run(i).iter().enumerate() {
-            let others = if i == j { &run(j)[at + 1..] } else { run(j) };
-            for other in others.iter().filter(|o| one.1.overlaps(&o.1)) {
-                visit(one.0, other.0);
+    fn pairs_of_runs(&self, i: usize, j: usize, visit: &mut impl FnMut(usize, usize)) {
+        let run = |k: usize| k * RUN..self.items.len().min(k * RUN + RUN);
+        let whole = self.levels[0][j];
+        for one in run(i) {
+            let extent = self.items[one].1;
+            if !extent.overlaps(&whole) {
+                continue;
+            }
+            let others = if i == j { one + 1..run(j).end } else { run(j) };
+            for other in others {
+                if extent.overlaps(&self.items[other].1) {
+                    visit(one, other);
+                }
             }
         }
     }

@@ -13,24 +13,22 @@ pub fn dihedral(shell: &Shell, edge: u32) -> Option<f64> {
     if shell.crowded.binary_search_by_key(&edge, |c| c.edge).is_ok() {
         return None;
     }
-    let [sine, cosine] = fold_parts(shell, &shell.edges[edge as usize])?;
+    let edge = &shell.edges[edge as usize];
+    if edge.panels.contains(&NONE) {
+        return None;
+    }
+    let normals = edge.panels.map(|p| shell.area_vector(p));
+    let [a, b] = edge.ends.map(|v| shell.points[v as usize]);
+    let along = (b - a).normalize_or_zero();
+    let [sine, cosine] = fold_parts(normals, along, sides_agree(shell, edge));
     Some(PI - sine.atan2(cosine))
 }
 
 /// Sine and cosine of the fold (half a turn less the dihedral), both times the same positive factor.
-pub(super) fn fold_parts(shell: &Shell, edge: &Edge) -> Option<[f64; 2]> {
-    let [one, other] = edge.panels;
-    if one == NONE || other == NONE {
-        return None;
-    }
-    let normal = shell.area_vector(one);
-    let mut against = shell.area_vector(other);
-    if !sides_agree(shell, edge) {
-        against = -against;
-    }
-    let [a, b] = edge.ends.map(|v| shell.points[v as usize]);
-    let along = (b - a).normalize_or_zero();
-    Some([normal.cross(against).dot(along), normal.dot(against)])
+pub(super) fn fold_parts(normals: [Vector; 2], along: Vector, sides_agree: bool) -> [f64; 2] {
+    let [normal, other] = normals;
+    let against = if sides_agree { other } else { -other };
+    [normal.cross(against).dot(along), normal.dot(against)]
 }
 
 /// Whether the second panel of an edge runs against it, as it does where both panels have the same side out.
@@ -42,34 +40,27 @@ pub fn sides_agree(shell: &Shell, edge: &Edge) -> bool {
     if edge.panels[0] == NONE || second == NONE {
         return true;
     }
-    let runs = |outline: &[u32], from: u32, to: u32| {
-        let next = outline.iter().cycle().skip(1);
-        outline.iter().zip(next).any(|(&p, &q)| p == from && q == to)
-    };
     let [a, b] = edge.ends;
-    let corners = shell.panels[second as usize].corners;
-    if runs(&corners, b, a) {
+    let [p, q, r, s] = shell.panels[second as usize].corners;
+    let runs = |from: u32, to: u32| [[p, q], [q, r], [r, s], [s, p]].contains(&[from, to]);
+    if runs(b, a) {
         return true;
     }
-    if runs(&corners, a, b) {
+    if runs(a, b) {
         return false;
     }
     // The edge is a part of a split side.
-    runs(&shell.outline(second), b, a)
+    let outline = shell.outline(second);
+    let next = outline.iter().cycle().skip(1);
+    outline.iter().zip(next).any(|(&from, &to)| [from, to] == [b, a])
 }
 
 /// The angle at which a panel's sides meet in the acute corners, in radians, up to a right angle.
 #[must_use]
 pub fn acute_angle(shell: &Shell, panel: u32) -> f64 {
-    let [sine, cosine] = acute_parts(shell, panel);
-    sine.atan2(cosine)
-}
-
-/// Sine and cosine of the acute angle, both times the product of the sides.
-pub(super) fn acute_parts(shell: &Shell, panel: u32) -> [f64; 2] {
     let [a, b, _, d] = shell.corner_points(panel);
     let [u, v] = [b - a, d - a];
-    [u.cross(v).length(), u.dot(v).abs()]
+    u.cross(v).length().atan2(u.dot(v).abs())
 }
 
 /// The slope of a panel: the angle of its outward normal from the vertical, in radians from 0 to half a turn.
@@ -105,9 +96,7 @@ pub fn angle_deficits(shell: &Shell) -> Vec<f64> {
             corner(vertex, angle_between(next, previous));
         }
     }
-    for vertex in shell.tees.iter().flat_map(|t| &t.vertices) {
-        corner(*vertex, PI);
-    }
+    // A vertex inside a side has one corner more there, of half a turn: the two cancel.
     for vertex in shell.edges.iter().flat_map(|e| e.ends) {
         edges_beyond[vertex as usize] += 1;
     }

@@ -2,8 +2,8 @@
 
 use core::f64::consts::PI;
 
-use super::{Sum, angles, edge_length};
-use crate::{Point, Shell, Vector};
+use super::{Sum, angles};
+use crate::{NONE, Point, Shell, Vector};
 
 /// A smallest and a largest value, and where they are.
 #[derive(Clone, Copy, PartialEq, Debug)]
@@ -28,8 +28,15 @@ impl Range {
     /// Values that are not numbers are passed over.
     #[must_use]
     pub fn of(values: &[(u32, f64)]) -> Option<Self> {
-        let least = values.iter().map(|v| v.1).fold(f64::INFINITY, f64::min);
-        let most = values.iter().map(|v| v.1).fold(f64::NEG_INFINITY, f64::max);
+        let [mut least, mut most] = [f64::INFINITY, f64::NEG_INFINITY];
+        for &(_, value) in values {
+            if value < least {
+                least = value;
+            }
+            if value > most {
+                most = value;
+            }
+        }
         let first = |of: f64| {
             let slack = of.abs() * SAME_VALUE;
             values.iter().find(|v| (v.1 - of).abs() <= slack).map(|v| v.0)
@@ -87,6 +94,8 @@ pub struct Totals {
 #[must_use]
 pub fn totals(shell: &Shell) -> Totals {
     let corners = Corners::of(shell);
+    let faces = Faces::of(shell);
+    let sides = Sides::of(shell, &faces.normals);
     let count = |n: usize| i64::try_from(n).unwrap_or(i64::MAX);
     Totals {
         panels: shell.panels.len(),
@@ -96,12 +105,12 @@ pub fn totals(shell: &Shell) -> Totals {
         rims: shell.rims.len(),
         euler: count(corners.vertices) - count(shell.edges.len()) + count(shell.panels.len()),
         zones: count_zones(shell),
-        area_mm2: area(shell),
-        volume_mm3: volume(shell),
+        area_mm2: faces.area,
+        volume_mm3: volume(shell, sides.agree),
         size: corners.size,
-        lengths: Range::of(&over(shell.edges.len(), |e| Some(edge_length(shell, e)))),
-        acute_angles: acute_angles(shell),
-        dihedrals: dihedrals(shell),
+        lengths: Range::of(&sides.lengths),
+        acute_angles: Range::of(&faces.acute).map(|range| range.map(angle_of_key)),
+        dihedrals: Range::of(&sides.folds).map(|range| range.map(|key| PI + angle_of_key(key - 2.0))),
     }
 }
 
@@ -138,18 +147,76 @@ fn count_zones(shell: &Shell) -> usize {
     has_panel.iter().filter(|has| **has).count()
 }
 
-fn area(shell: &Shell) -> f64 {
-    let mut sum = Sum::default();
-    for [a, b, _, d] in corner_points(shell) {
-        sum.add((b - a).cross(d - a).length());
+/// What is measured panel by panel.
+struct Faces {
+    /// Area vectors.
+    normals: Vec<Vector>,
+    area: f64,
+    /// Sort keys of the acute angles.
+    acute: Vec<(u32, f64)>,
+}
+
+impl Faces {
+    fn of(shell: &Shell) -> Self {
+        let mut sum = Sum::default();
+        let mut normals = Vec::with_capacity(shell.panels.len());
+        let mut acute = Vec::with_capacity(shell.panels.len());
+        for (panel, [a, b, _, d]) in (0_u32..).zip(corner_points(shell)) {
+            let [u, v] = [b - a, d - a];
+            let normal = u.cross(v);
+            let area = normal.length();
+            sum.add(area);
+            normals.push(normal);
+            acute.push((panel, sort_key(area, u.dot(v).abs())));
+        }
+        Self {
+            normals,
+            area: sum.value(),
+            acute,
+        }
     }
-    sum.value()
+}
+
+/// What is measured edge by edge.
+struct Sides {
+    lengths: Vec<(u32, f64)>,
+    /// Sort keys of the dihedrals, moved up by 2.
+    folds: Vec<(u32, f64)>,
+    /// Whether panels that meet have the same side out.
+    agree: bool,
+}
+
+impl Sides {
+    fn of(shell: &Shell, normals: &[Vector]) -> Self {
+        let mut all = Self {
+            lengths: Vec::with_capacity(shell.edges.len()),
+            folds: Vec::with_capacity(shell.edges.len()),
+            agree: true,
+        };
+        let mut crowded = shell.crowded.iter().map(|c| c.edge).peekable();
+        for (index, edge) in (0_u32..).zip(&shell.edges) {
+            let [a, b] = edge.ends.map(|v| shell.points[v as usize]);
+            let length = a.distance(b);
+            all.lengths.push((index, length));
+            let agree = angles::sides_agree(shell, edge);
+            all.agree &= agree;
+            while crowded.next_if(|&c| c < index).is_some() {}
+            if edge.panels.contains(&NONE) || crowded.peek() == Some(&index) {
+                continue;
+            }
+            let along = if length > 0.0 { (b - a) / length } else { Vector::ZERO };
+            let normals = edge.panels.map(|p| normals[p as usize]);
+            let [sine, cosine] = angles::fold_parts(normals, along, agree);
+            // The dihedral is half a turn less the fold.
+            all.folds.push((index, sort_key(-sine, cosine) + 2.0));
+        }
+        all
+    }
 }
 
 /// The divergence theorem: a third of the sum of place times area vector.
-fn volume(shell: &Shell) -> Option<f64> {
-    let agree = || shell.edges.iter().all(|e| angles::sides_agree(shell, e));
-    if !shell.is_closed() || !agree() {
+fn volume(shell: &Shell, sides_agree: bool) -> Option<f64> {
+    if !shell.is_closed() || !sides_agree {
         return None;
     }
     // From a vertex on, so that a shell far from the origin loses no digits.
@@ -167,42 +234,6 @@ fn corner_points(shell: &Shell) -> impl Iterator<Item = [Point; 4]> {
     shell.panels.iter().map(move |p| p.corners.map(place))
 }
 
-fn over(count: usize, value: impl Fn(u32) -> Option<f64>) -> Vec<(u32, f64)> {
-    (0_u32..)
-        .take(count)
-        .filter_map(|index| Some((index, value(index)?)))
-        .collect()
-}
-
-fn acute_angles(shell: &Shell) -> Option<Range> {
-    let keys = over(shell.panels.len(), |panel| {
-        let [sine, cosine] = angles::acute_parts(shell, panel);
-        Some(sort_key(sine, cosine))
-    });
-    Range::of(&keys).map(|range| range.map(angle_of_key))
-}
-
-fn dihedrals(shell: &Shell) -> Option<Range> {
-    let mut crowded = shell.crowded.iter().peekable();
-    let keys = over_edges(shell, |index, edge| {
-        while crowded.next_if(|c| c.edge < index).is_some() {}
-        if crowded.peek().is_some_and(|c| c.edge == index) {
-            return None;
-        }
-        let [sine, cosine] = angles::fold_parts(shell, edge)?;
-        // The dihedral is half a turn less the fold.
-        Some(sort_key(-sine, cosine) + 2.0)
-    });
-    Range::of(&keys).map(|range| range.map(|key| PI + angle_of_key(key - 2.0)))
-}
-
-fn over_edges(shell: &Shell, mut value: impl FnMut(u32, &crate::Edge) -> Option<f64>) -> Vec<(u32, f64)> {
-    (0_u32..)
-        .zip(&shell.edges)
-        .filter_map(|(index, edge)| Some((index, value(index, edge)?)))
-        .collect()
-}
-
 /// A number from -2 to 2 that rises with the angle from minus to plus half a turn, without an arc tangent an edge.
 fn sort_key(sine: f64, cosine: f64) -> f64 {
     let key = sine / (sine.abs() + cosine.abs());
@@ -217,11 +248,8 @@ fn sort_key(sine: f64, cosine: f64) -> f64 {
 
 /// The angle that has this key, in radians.
 fn angle_of_key(key: f64) -> f64 {
-    let sine = if key.abs() <= 1.0 {
-        key
-    } else {
-        key.signum() * 2.0 - key
-    };
+    // With its sign also where it is 0: there a panel is folded flat, and the dihedral nothing or a full turn.
+    let sine = key.abs().min(2.0 - key.abs()).copysign(key);
     let cosine = 1.0 - key.abs();
     sine.atan2(cosine)
 }

@@ -1,9 +1,11 @@
 //! The shape: a start, steps, finishing steps, placement, and which side is outside.
 
+use std::collections::BTreeMap;
+
 use serde::{Deserialize, Serialize};
 
-use super::{Finish, Sign, Step, StepId, ZoneRef};
-use crate::{Angle, Vector, start::Start};
+use super::{Act, Direction, Finish, Sign, Step, StepId, ZoneRef};
+use crate::{Angle, Finding, Vector, start::Start};
 
 /// The whole record of a shape. Growing replays it; see [`crate::grow()`].
 #[derive(Clone, PartialEq, Debug, Serialize, Deserialize)]
@@ -32,6 +34,39 @@ pub struct Shape {
 }
 
 impl Shape {
+    /// The same shape with its start turned into free points. Steps, zone rules and finishing steps find their letters and zones again.
+    ///
+    /// # Errors
+    /// When the start's parameters cannot be used.
+    pub fn to_free(&self) -> Result<Self, Finding> {
+        let ids: BTreeMap<u32, u32> = self.start.first_word()?.free_zone_ids().into_iter().collect();
+        let mut free = Self {
+            start: Start::Zigzag(self.start.to_free()?),
+            ..self.clone()
+        };
+        let rename = |zone: &mut ZoneRef| {
+            if let ZoneRef::Start(id) = zone {
+                *id = ids.get(id).copied().unwrap_or(*id);
+            }
+        };
+        for rule in &mut free.zones {
+            rename(&mut rule.zone);
+            if let ZoneVector::Linked(to, _) = &mut rule.vector {
+                rename(to);
+            }
+        }
+        for step in &mut free.steps {
+            if let Act::Splice { directions, .. } = &mut step.act {
+                for direction in directions {
+                    if let Direction::Zone(zone) | Direction::Against(zone) = direction {
+                        rename(zone);
+                    }
+                }
+            }
+        }
+        Ok(free)
+    }
+
     /// A number for a new step that no step of this shape has.
     #[must_use]
     pub fn next_step_id(&self) -> StepId {

@@ -2,10 +2,15 @@
 //!
 //! Every kind checks its parameters, gives a [`FirstWord`], and can be turned into free points.
 
+mod circle;
 mod column;
 mod curve;
 mod free;
+mod free_edit;
+mod free_gap;
+mod free_links;
 mod helical;
+pub mod limits;
 mod loop_tube;
 mod polar;
 mod ribbon;
@@ -18,10 +23,10 @@ use serde::{Deserialize, Serialize};
 
 pub use column::ColumnForm;
 pub use curve::{Curve, CurveShape};
-pub use free::{DragRule, FreeLetter, FreePath, FreeVector};
+pub use free::{DragRule, FreeLetter, FreePath, FreeVector, PathEnd};
 pub use helical::HelicalForm;
 pub use loop_tube::LoopForm;
-pub use polar::{PolarBy, PolarForm};
+pub use polar::{PolarBy, PolarForm, PolarPair};
 pub use ribbon::{RibbonForm, RibbonFrom};
 pub use star::{AxisClass, Star};
 pub use star_path::{StarLength, StarLetter, StarPath};
@@ -75,6 +80,17 @@ impl Role {
     }
 }
 
+/// How the outside of a new design is chosen.
+#[derive(Clone, Copy, PartialEq, Eq, Debug)]
+pub enum OutsideRule {
+    /// The side that looks up.
+    Up,
+    /// The side that looks away from the vertical axis x = y = 0.
+    AwayFromAxis,
+    /// The side that makes the volume positive.
+    PositiveVolume,
+}
+
 /// What a start gives: a word, where it begins, and the zones that its letters belong to.
 #[derive(Clone, PartialEq, Debug)]
 pub struct FirstWord {
@@ -123,6 +139,29 @@ impl FirstWord {
         self.zones[letter.zone as usize].vector * letter.sign.factor()
     }
 
+    /// For each zone, in order: its id, and the id that it has once the word is made of free letters, which is the index of the first letter that
+    /// runs along it. Every zone of every start has one, so the zone keeps its direction.
+    #[must_use]
+    pub fn free_zone_ids(&self) -> Vec<(u32, u32)> {
+        let owners = self.zone_owners();
+        let ids = |(zone, owner): (&StartZone, Option<usize>)| owner.map(|k| (zone.id, self.letters[k].index));
+        self.zones.iter().zip(owners).filter_map(ids).collect()
+    }
+
+    /// For each zone the position of the first letter that runs along it, else of the first that runs against it.
+    fn zone_owners(&self) -> Vec<Option<usize>> {
+        let mut owners: Vec<Option<usize>> = vec![None; self.zones.len()];
+        for sign in [Sign::Plus, Sign::Minus] {
+            for (k, letter) in self.letters.iter().enumerate() {
+                let owner = &mut owners[letter.zone as usize];
+                if letter.sign == sign && owner.is_none() {
+                    *owner = Some(k);
+                }
+            }
+        }
+        owners
+    }
+
     /// The nodes of the word: one more than letters, the last one equal to the first on a word that closes.
     #[must_use]
     pub fn nodes(&self) -> Vec<Point> {
@@ -163,6 +202,18 @@ impl Start {
         match self {
             Self::Zigzag(path) => Ok(path.clone()),
             other => Ok(FreePath::from_word(&other.first_word()?)),
+        }
+    }
+
+    /// Which side of a new design of this kind is outside.
+    #[must_use]
+    pub const fn outside_rule(&self) -> OutsideRule {
+        match self {
+            Self::Zigzag(_) | Self::Translation(_) | Self::Polar(_) | Self::Ribbon(_) | Self::StarPath(_) => {
+                OutsideRule::Up
+            }
+            Self::Loop(_) | Self::Column(_) | Self::Helical(_) => OutsideRule::AwayFromAxis,
+            Self::StarSolid(_) => OutsideRule::PositiveVolume,
         }
     }
 

@@ -1,6 +1,7 @@
 //! Finds parts that may agree, without comparing every two.
 
 use std::collections::HashMap;
+use std::hash::{BuildHasherDefault, Hasher};
 
 use super::{FamilyTolerance, Side};
 
@@ -8,8 +9,8 @@ use super::{FamilyTolerance, Side};
 /// largest bevels. None of them moves by more than a tolerance when every side and angle moves by at most one.
 const FEATURES: usize = 7;
 
-/// Cells are this many tolerances wide: one query in four is near a border, for each number.
-const TOLERANCES_WIDE: f64 = 8.0;
+/// Cells are this many tolerances wide: one query in eight is near a border, for each number.
+const TOLERANCES_WIDE: f64 = 16.0;
 
 /// Cells begin here, in parts of a cell, so that values that users type (0, 30, 300 ...) do not fall on a border.
 const SHIFT: f64 = 0.37;
@@ -18,6 +19,47 @@ const SHIFT: f64 = 0.37;
 const NARROWEST: f64 = 1e-6;
 
 const END: u32 = u32::MAX;
+
+/// Keys are mixed already.
+#[derive(Default)]
+struct Mixed(u64);
+
+impl Hasher for Mixed {
+    fn finish(&self) -> u64 {
+        self.0
+    }
+
+    fn write(&mut self, bytes: &[u8]) {
+        for &byte in bytes {
+            self.0 = self.0.rotate_left(8) ^ u64::from(byte);
+        }
+    }
+
+    fn write_u64(&mut self, key: u64) {
+        self.0 = key;
+    }
+}
+
+/// Where a part lies on the grid.
+struct Spot {
+    len: usize,
+    own: [i64; FEATURES],
+    /// The other cell within a tolerance; its own again when there is none.
+    near: [i64; FEATURES],
+}
+
+impl Spot {
+    /// `moved` says, bit by bit, which numbers take the other cell.
+    fn key(&self, moved: u32) -> u64 {
+        let mut key = self.len as u64;
+        for k in 0..FEATURES {
+            let cell = if moved >> k & 1 == 1 { self.near[k] } else { self.own[k] };
+            // Multiply and fold: keys that collide only cost a comparison.
+            key = (key.rotate_left(23) ^ cell.cast_unsigned()).wrapping_mul(0x9e37_79b9_7f4a_7c15);
+        }
+        key ^ key >> 32
+    }
+}
 
 struct Entry {
     form: u32,
@@ -28,7 +70,7 @@ struct Entry {
 pub(super) struct Grid {
     within: [f64; FEATURES],
     /// The last entry of each cell. Only ever asked by key.
-    cells: HashMap<u64, u32>,
+    cells: HashMap<u64, u32, BuildHasherDefault<Mixed>>,
     entries: Vec<Entry>,
     bevels: Vec<f64>,
 }
@@ -39,40 +81,36 @@ impl Grid {
             [within.side_mm, within.corner_deg, within.bevel_deg].map(|t| t.max(NARROWEST / TOLERANCES_WIDE));
         Self {
             within: [side, side, corner, bevel, bevel, bevel, bevel],
-            cells: HashMap::new(),
+            cells: HashMap::default(),
             entries: Vec::new(),
             bevels: Vec::new(),
         }
     }
 
     pub(super) fn add(&mut self, part: &[Side], form: u32) {
-        let features = self.features(part);
-        let key = self.key(part.len(), &features, None);
+        let key = self.spot(part).key(0);
         self.put(key, form);
     }
 
     /// Looks for the first form that `accept` takes: in the part's own cell, then in the cells within a tolerance.
     pub(super) fn find<T>(&mut self, part: &[Side], accept: impl Fn(u32) -> Option<T>) -> Option<(u32, T)> {
-        let features = self.features(part);
-        let own = self.key(part.len(), &features, None);
+        let spot = self.spot(part);
+        let own = spot.key(0);
         if let Some(found) = self.in_cell(own, &accept) {
             return Some(found);
         }
         let mut near = [0; FEATURES];
         let mut count = 0;
-        for (k, &value) in features.iter().enumerate() {
-            if self.neighbour(k, value) != self.cell(k, value) {
-                near[count] = k;
-                count += 1;
-            }
+        for k in (0..FEATURES).filter(|&k| spot.near[k] != spot.own[k]) {
+            near[count] = k;
+            count += 1;
         }
         for choice in 1_usize..1 << count {
             let moved = near[..count].iter().enumerate();
             let moved = moved
                 .filter(|(bit, _)| choice >> bit & 1 == 1)
                 .fold(0_u32, |m, (_, k)| m | 1 << k);
-            let key = self.key(part.len(), &features, Some(moved));
-            if let Some(found) = self.in_cell(key, &accept) {
+            if let Some(found) = self.in_cell(spot.key(moved), &accept) {
                 // The next part like this one finds the form in its own cell.
                 self.put(own, found.0);
                 return Some(found);
@@ -118,30 +156,29 @@ impl Grid {
         ]
     }
 
-    /// The cell of a value along one of the numbers.
-    fn cell(&self, k: usize, value: f64) -> i64 {
-        // The conversion saturates; a cell at the end of the range is only a full one.
-        (value / (self.within[k] * TOLERANCES_WIDE) + SHIFT).floor() as i64
-    }
-
-    /// The other cell within a tolerance; the value's own when there is none.
-    fn neighbour(&self, k: usize, value: f64) -> i64 {
-        let own = self.cell(k, value);
-        let [low, high] = [-1.0, 1.0].map(|sign: f64| self.cell(k, value + sign * self.within[k]));
-        if low == own { high } else { low }
-    }
-
-    /// `moved` says, bit by bit, which numbers take the neighbouring cell.
-    fn key(&self, len: usize, features: &[f64; FEATURES], moved: Option<u32>) -> u64 {
-        let mut key = len as u64;
-        for (k, &value) in features.iter().enumerate() {
-            let cell = match moved {
-                Some(bits) if bits >> k & 1 == 1 => self.neighbour(k, value),
-                _ => self.cell(k, value),
+    fn spot(&mut self, part: &[Side]) -> Spot {
+        let features = self.features(part);
+        let mut spot = Spot {
+            len: part.len(),
+            own: [0; FEATURES],
+            near: [0; FEATURES],
+        };
+        for (k, value) in features.into_iter().enumerate() {
+            let place = value / (self.within[k] * TOLERANCES_WIDE) + SHIFT;
+            // The conversion saturates; a cell at the end of the range is only a full one.
+            let own = place.floor() as i64;
+            // A little more than a tolerance, so that rounding in the division loses nothing.
+            const MARGIN: f64 = 1.001 / TOLERANCES_WIDE;
+            let into = place - own as f64;
+            spot.own[k] = own;
+            spot.near[k] = if into < MARGIN {
+                own.wrapping_sub(1)
+            } else if into > 1.0 - MARGIN {
+                own.wrapping_add(1)
+            } else {
+                own
             };
-            // Multiply and fold: keys that collide only cost a comparison.
-            key = (key.rotate_left(23) ^ cell.cast_unsigned()).wrapping_mul(0x9e37_79b9_7f4a_7c15);
         }
-        key
+        spot
     }
 }

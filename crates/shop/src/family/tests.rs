@@ -10,8 +10,8 @@ const WITHIN: FamilyTolerance = FamilyTolerance {
 /// A parallelogram from its acute corner on.
 fn parallelogram(a: f64, b: f64, acute: f64, bevels: [f64; 4]) -> Vec<Side> {
     let side = |k: usize| Side {
-        corner_deg: if k % 2 == 0 { acute } else { 180.0 - acute },
-        side_mm: if k % 2 == 0 { a } else { b },
+        corner_deg: if k.is_multiple_of(2) { acute } else { 180.0 - acute },
+        side_mm: if k.is_multiple_of(2) { a } else { b },
         bevel_deg: bevels[k],
     };
     (0..4).map(side).collect()

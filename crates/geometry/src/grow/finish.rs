@@ -1,0 +1,212 @@
+//! From the mesh as it grew to the finished shell.
+
+use super::{
+    Growing,
+    front::Front,
+    mesh::{Mesh, as_index},
+    place::Placed,
+    rims,
+};
+use crate::{
+    Code, Finding, FinishAct, FirstWord, NONE, PanelName, Pinch, Place, Point, Seam, Shell, Side, Tee, Unit, measure,
+};
+
+/// Settles everything that growth left open, and places the shell.
+pub(super) fn finish(
+    growing: Growing<'_>,
+    fronts: &[Front; 2],
+    word: &FirstWord,
+    closing_gap: Option<f64>,
+    join_mm: f64,
+    findings: &mut Vec<Finding>,
+) -> Result<Shell, Finding> {
+    let Growing {
+        shape,
+        alphabet,
+        mut mesh,
+        ..
+    } = growing;
+    let front_points: [Vec<Point>; 2] = [0, 1].map(|k| {
+        let nodes = &fronts[k].nodes;
+        nodes.iter().map(|v| mesh.points[*v as usize]).collect()
+    });
+    mesh.settle_links();
+    for finish in shape.finish.iter().filter(|f| f.on) {
+        let FinishAct::Drop(names) = &finish.act;
+        let lost = drop_panels(&mut mesh, names, |name| alphabet.find(name));
+        if 0 < lost {
+            let place = Place::Step(finish.id);
+            findings.push(Finding::new(Code::NameLost, place).with(lost as f64, None, Unit::Count));
+        }
+    }
+    let (mut tees, mut seams) = mesh.split_seams(shape.tolerances.join_mm);
+    mesh.join_rims(join_mm, findings);
+    let mut pinches = mesh.part_fans(&mut tees);
+    compact(&mut mesh, &mut tees, &mut seams, &mut pinches);
+    if mesh.points.iter().any(|p| !p.is_finite()) {
+        return Err(Finding::new(Code::NotFinite, Place::Design));
+    }
+    let lift = if word.grounded { -lowest(&mesh.points) } else { 0.0 };
+    let placed = Placed::new(&shape.placement, lift);
+    for point in &mut mesh.points {
+        *point = placed.apply(*point);
+    }
+    let states = [0, 1].map(|k| fronts[k].state(front_points[k].iter().map(|p| placed.apply(*p)).collect()));
+    let shell = Shell {
+        rims: rims::trace(&mesh.edges),
+        points: mesh.points,
+        panels: mesh.panels,
+        edges: mesh.edges,
+        tees,
+        crowded: mesh.crowded,
+        seams,
+        pinches,
+        zones: alphabet.zones,
+        letters: alphabet.letters,
+        courses: mesh.courses,
+        fronts: states,
+        closing_gap,
+    };
+    report(&shell, findings);
+    Ok(shell)
+}
+
+fn lowest(points: &[Point]) -> f64 {
+    points.iter().map(|p| p.0.z).reduce(f64::min).unwrap_or(0.0)
+}
+
+fn report(shell: &Shell, findings: &mut Vec<Finding>) {
+    for crowded in &shell.crowded {
+        let panels = (2 + crowded.more.len()) as f64;
+        let place = Place::Edges(vec![crowded.edge]);
+        findings.push(Finding::new(Code::CrowdedEdge, place).with(panels, Some(2.0), Unit::Count));
+    }
+    if !shell.pinches.is_empty() {
+        let vertices = shell.pinches.iter().map(|p| p.vertices[0]).collect();
+        let count = shell.pinches.len() as f64;
+        findings.push(Finding::new(Code::Pinch, Place::Vertices(vertices)).with(count, None, Unit::Count));
+    }
+    if shell.is_closed()
+        && let Some(volume) = measure::totals(shell).volume_mm3.filter(|v| *v < 0.0)
+    {
+        let finding = Finding::new(Code::InsideOut, Place::Design);
+        findings.push(finding.with(volume * 1e-9, Some(0.0), Unit::CubicMetres));
+    }
+}
+
+/// Takes named panels out; returns how many names found none.
+fn drop_panels(mesh: &mut Mesh, names: &[PanelName], find: impl Fn(&crate::LetterName) -> Option<u32>) -> usize {
+    let mut gone = vec![false; mesh.panels.len()];
+    let mut lost = 0;
+    for name in names {
+        let letters = find(&name.letters.0).zip(find(&name.letters.1));
+        let wanted = letters.and_then(|(a, b)| {
+            let same = |p: &crate::Panel| {
+                (p.course < 0) == (name.side == Side::Aft) && (p.letters == [a, b] || p.letters == [b, a])
+            };
+            (0..mesh.panels.len())
+                .filter(|k| same(&mesh.panels[*k]))
+                .nth(name.turn as usize)
+        });
+        match wanted {
+            Some(panel) => gone[panel] = true,
+            None => lost += 1,
+        }
+    }
+    if !gone.contains(&true) {
+        return lost;
+    }
+    let mut kept = 0_u32;
+    let renumbered: Vec<u32> = gone
+        .iter()
+        .map(|gone| {
+            let number = if *gone { NONE } else { kept };
+            kept += u32::from(!gone);
+            number
+        })
+        .collect();
+    for (panel, _) in mesh.panels.iter().zip(&gone).filter(|(_, gone)| **gone) {
+        mesh.suspects.extend(panel.corners);
+        for course in mesh.courses.iter_mut().filter(|c| c.number == panel.course) {
+            course.panels -= 1;
+        }
+    }
+    mesh.courses.retain(|c| 0 < c.panels);
+    let mut at = 0;
+    mesh.panels.retain(|_| {
+        at += 1;
+        !gone[at - 1]
+    });
+    let number = |p: u32| if p == NONE { NONE } else { renumbered[p as usize] };
+    for edge in &mut mesh.edges {
+        edge.panels = edge.panels.map(number);
+    }
+    let crowded = core::mem::take(&mut mesh.crowded);
+    for mut crowd in crowded {
+        crowd.more = crowd.more.iter().map(|p| number(*p)).filter(|p| *p != NONE).collect();
+        // A panel beyond the second moves up when a place comes free.
+        while let Some(slot) = mesh.edges[crowd.edge as usize].panels.iter().position(|p| *p == NONE) {
+            match crowd.more.pop() {
+                Some(panel) => mesh.edges[crowd.edge as usize].panels[slot] = panel,
+                None => break,
+            }
+        }
+        if !crowd.more.is_empty() {
+            mesh.crowded.push(crowd);
+        }
+    }
+    lost
+}
+
+/// Leaves out vertices and edges that border no panel.
+fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut [Pinch]) {
+    let mut used = vec![false; mesh.points.len()];
+    for panel in &mesh.panels {
+        for corner in panel.corners {
+            used[corner as usize] = true;
+        }
+    }
+    for vertex in tees.iter().flat_map(|t| &t.vertices) {
+        used[*vertex as usize] = true;
+    }
+    if !mesh.crowded.is_empty() || mesh.edges.iter().any(|e| e.panels == [NONE; 2]) {
+        let numbers = renumber(mesh.edges.iter().map(|e| e.panels != [NONE; 2]));
+        mesh.edges.retain(|e| e.panels != [NONE; 2]);
+        for crowded in &mut mesh.crowded {
+            crowded.edge = numbers[crowded.edge as usize];
+        }
+        mesh.crowded.sort_by_key(|c| c.edge);
+    }
+    if used.contains(&false) {
+        let numbers = renumber(used.iter().copied());
+        let mut at = 0;
+        mesh.points.retain(|_| {
+            at += 1;
+            used[at - 1]
+        });
+        for panel in &mut mesh.panels {
+            panel.corners = panel.corners.map(|v| numbers[v as usize]);
+        }
+        for edge in &mut mesh.edges {
+            edge.ends = edge.ends.map(|v| numbers[v as usize]);
+        }
+        let lists = tees
+            .iter_mut()
+            .map(|t| &mut t.vertices)
+            .chain(seams.iter_mut().map(|s| &mut s.vertices));
+        for vertex in lists.chain(pinches.iter_mut().map(|p| &mut p.vertices)).flatten() {
+            *vertex = numbers[*vertex as usize];
+        }
+    }
+}
+
+/// New numbers for what is kept; [`NONE`] for the rest.
+fn renumber(kept: impl Iterator<Item = bool>) -> Vec<u32> {
+    let mut next = 0;
+    kept.map(|kept| {
+        let number = if kept { as_index(next) } else { NONE };
+        next += usize::from(kept);
+        number
+    })
+    .collect()
+}

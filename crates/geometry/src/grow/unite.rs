@@ -1,0 +1,112 @@
+//! Uniting vertices and edges that are one: what the word zipped together.
+
+use super::mesh::{Mesh, as_index};
+use crate::NONE;
+
+/// A forest of sets over 0..n; the lowest member stands for each.
+#[derive(Clone, Debug)]
+pub(super) struct Sets {
+    parent: Vec<u32>,
+}
+
+impl Sets {
+    pub(super) fn new(count: usize) -> Self {
+        Self {
+            parent: (0..as_index(count)).collect(),
+        }
+    }
+
+    pub(super) fn find(&mut self, of: u32) -> u32 {
+        let mut root = of;
+        while self.parent[root as usize] != root {
+            root = self.parent[root as usize];
+        }
+        let mut at = of;
+        while self.parent[at as usize] != root {
+            at = core::mem::replace(&mut self.parent[at as usize], root);
+        }
+        root
+    }
+
+    pub(super) fn unite(&mut self, a: u32, b: u32) {
+        let [a, b] = [self.find(a), self.find(b)];
+        self.parent[a.max(b) as usize] = a.min(b);
+    }
+}
+
+impl Mesh {
+    /// Gives every vertex of the same set one number.
+    pub(super) fn merge_vertices(&mut self, pairs: &[[u32; 2]]) {
+        if pairs.is_empty() {
+            return;
+        }
+        let mut sets = Sets::new(self.points.len());
+        for [a, b] in pairs {
+            sets.unite(*a, *b);
+        }
+        for panel in &mut self.panels {
+            panel.corners = panel.corners.map(|v| sets.find(v));
+        }
+        for edge in &mut self.edges {
+            edge.ends = edge.ends.map(|v| sets.find(v));
+        }
+        let merged: Vec<u32> = pairs.iter().map(|[a, _]| sets.find(*a)).collect();
+        self.suspects.extend(merged);
+        for suspect in &mut self.suspects {
+            *suspect = sets.find(*suspect);
+        }
+    }
+
+    /// Moves the panels of the second edge to the first, which must have the same ends already.
+    ///
+    /// Returns whether two panels run the same way along it now.
+    pub(super) fn merge_edges(&mut self, kept: u32, gone: u32) -> bool {
+        let opposite = self.edges[kept as usize].ends != self.edges[gone as usize].ends;
+        let taken = core::mem::replace(&mut self.edges[gone as usize].panels, [NONE; 2]);
+        let mut more: Vec<u32> = Vec::new();
+        self.crowded.retain(|c| {
+            if c.edge == gone {
+                more.extend_from_slice(&c.more);
+            }
+            c.edge != gone
+        });
+        let mut disagree = false;
+        for (slot, panel) in taken.into_iter().enumerate().filter(|(_, panel)| *panel != NONE) {
+            let wanted = slot ^ usize::from(opposite);
+            let panels = self.edges[kept as usize].panels;
+            // A panel that runs the same way as the one that is there takes the other place, when that is free.
+            let same_way = panels[wanted] != NONE && panels[1 - wanted] == NONE;
+            disagree |= same_way;
+            self.put_panel(kept, if same_way { 1 - wanted } else { wanted }, panel);
+        }
+        for panel in more {
+            self.put_panel(kept, 0, panel);
+        }
+        disagree
+    }
+
+    /// Settles what the word zipped together: no tolerance, only names.
+    pub(super) fn settle_links(&mut self) {
+        let pairs = core::mem::take(&mut self.vertex_links);
+        self.merge_vertices(&pairs);
+        let links = core::mem::take(&mut self.edge_links);
+        if links.is_empty() {
+            return;
+        }
+        let mut sets = Sets::new(self.edges.len());
+        for link in &links {
+            let [a, b] = link.map(|e| sets.find(e));
+            if a != b {
+                let [kept, gone] = [a.min(b), a.max(b)];
+                self.merge_edges(kept, gone);
+                sets.unite(a, b);
+            }
+        }
+        // Slides name edges too.
+        let mut slides = core::mem::take(&mut self.slides);
+        for slide in &mut slides {
+            *slide = slide.map(|e| sets.find(e));
+        }
+        self.slides = slides;
+    }
+}
