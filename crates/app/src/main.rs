@@ -16,7 +16,7 @@ fn main() -> ExitCode {
     if let Some(Err(error)) = file.as_deref().map(read_design) {
         return fail(&error.to_string());
     }
-    match Err::<(), _>(format!("no window {file:?}")) {
+    match zonewright::window::run(file.as_deref()) {
         Ok(()) => ExitCode::SUCCESS,
         Err(what) => fail(&what),
     }

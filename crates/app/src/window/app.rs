@@ -117,7 +117,13 @@ impl App {
     }
 
     fn system_events(&mut self, ctx: &egui::Context) {
-        let dropped = ctx.input(|i| i.raw.dropped_files.iter().map(|f| f.path().to_path_buf()).find(|p| !p.as_os_str().is_empty()));
+        let dropped = ctx.input(|i| {
+            i.raw
+                .dropped_files
+                .iter()
+                .map(|f| f.path().to_path_buf())
+                .find(|p| !p.as_os_str().is_empty())
+        });
         if let Some(path) = dropped {
             self.sender.send(Command::OpenPath(path));
         }

@@ -6,13 +6,13 @@
 use std::sync::Arc;
 
 use zonewright_geometry::{
-    Code, Finding, Level, OpenV, Place, Shell, Side, grow,
+    Finding, Level, OpenV, Place, Shell, Side, grow,
     grow::open_vs,
     inspect::Inspection,
     measure::{Totals, totals},
 };
 use zonewright_painter::Scene;
-use zonewright_shop::{FamilyTolerance, Parts};
+use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 
 use super::{
     path_place::PlacedPath,
@@ -23,6 +23,9 @@ use crate::document::Design;
 /// How long a design must have been still before the slow stages begin, in seconds. With these, the exact order is there
 /// within 300 ms of rest.
 const STILL_SECONDS: f64 = 0.12;
+
+/// Findings that are put into words; a shell with thousands of them is not mended one by one.
+pub const MOST_SHOWN: usize = 100;
 
 /// How often each stage was worked out; an idle window leaves all of them alone.
 #[derive(Clone, Copy, PartialEq, Eq, Debug, Default)]
@@ -50,6 +53,8 @@ pub struct Derived {
     pub parts: Parts,
     /// The family of each panel.
     pub families: Vec<u32>,
+    /// The first findings in words.
+    pub texts: Vec<String>,
     /// The gravest finding of each panel.
     pub levels: Vec<Option<Level>>,
     /// Open Vs of the fore and the aft front.
@@ -78,6 +83,7 @@ impl Derived {
             totals: totals(&shell),
             parts: Parts::new(&shell, &FamilyTolerance::default()),
             families: Vec::new(),
+            texts: Vec::new(),
             levels: Vec::new(),
             open: [Vec::new(), Vec::new()],
             path: None,
@@ -108,8 +114,7 @@ impl Derived {
         self.scene_revision += 1;
         self.shell = Arc::new(shell);
         self.findings = findings;
-        self.findings.sort_by_key(Finding::level);
-        self.levels = levels(&self.findings, self.shell.panels.len());
+        self.put_into_words();
         self.inspection = None;
         self.changed_at = now;
         self.asked = false;
@@ -141,14 +146,25 @@ impl Derived {
             && done.revision == self.revision
         {
             self.findings.extend(done.inspection.findings(&design.shape.tolerances));
-            self.findings.sort_by_key(Finding::level);
-            self.levels = levels(&self.findings, self.shell.panels.len());
+            self.put_into_words();
             self.inspection = Some(done.inspection);
             self.scene = done.scene;
             self.scene_revision += 1;
             self.counts.inspected += 1;
         }
         wait
+    }
+
+    fn put_into_words(&mut self) {
+        self.findings.sort_by_key(Finding::level);
+        self.levels = levels(&self.findings, self.shell.panels.len());
+        let first = self.findings.iter().take(MOST_SHOWN);
+        self.texts = if self.findings.is_empty() {
+            Vec::new()
+        } else {
+            let writer = FindingWriter::new(&self.shell, &self.parts);
+            first.map(|f| writer.write(f).text).collect()
+        };
     }
 
     /// Open Vs of a front.
@@ -158,12 +174,6 @@ impl Derived {
             Side::Fore => &self.open[0],
             Side::Aft => &self.open[1],
         }
-    }
-
-    /// Whether a finding of this code is there.
-    #[must_use]
-    pub fn has(&self, code: Code) -> bool {
-        self.findings.iter().any(|f| f.code == code)
     }
 }
 

@@ -83,7 +83,7 @@ fn first_design(
         match document::read_design(&last) {
             Ok(design) => return Ok((design, Some(last), None)),
             // The last design may be broken by now; that must not keep the window from opening.
-            Err(error) => message = Some(format!("{error}. The sample is shown instead.")),
+            Err(error) => message = Some(execute::sentence(&format!("{error}. The sample is shown instead."))),
         }
     }
     Ok((session::sample()?, None, message))

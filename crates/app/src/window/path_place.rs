@@ -71,12 +71,9 @@ fn turned(placement: &Placement) -> DMat3 {
 #[must_use]
 pub fn lift(shape: &Shape, shell: &Shell) -> Vector {
     let grounded = shape.start.first_word().is_ok_and(|word| word.grounded);
-    let free = if grounded { shape.start.to_free().ok() } else { None };
+    let free = if grounded { shape.to_free().ok() } else { None };
     let Some(free) = free else { return Vector::ZERO };
-    let (other, _) = grow(&Shape {
-        start: Start::Zigzag(free),
-        ..shape.clone()
-    });
+    let (other, _) = grow(&free);
     match (shell.fronts[0].nodes.first(), other.fronts[0].nodes.first()) {
         (Some(lifted), Some(plain)) => *lifted - *plain,
         _ => Vector::ZERO,

@@ -104,7 +104,7 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
 fn open(state: &mut State, path: &Path) {
     match document::read_design(path) {
         Ok(design) => show(state, design, Some(path.to_path_buf())),
-        Err(error) => state.complain(format!("{error}. The design in the window was kept.")),
+        Err(error) => state.complain(sentence(&format!("{error}. The design in the window was kept."))),
     }
 }
 
@@ -122,7 +122,7 @@ fn save(state: &mut State, path: &Path) {
         }
         Err(error) => {
             state.after_save = None;
-            state.complain(error.to_string());
+            state.complain(sentence(&format!("{error}.")));
         }
     }
 }
@@ -138,10 +138,33 @@ fn remember(state: &mut State) {
 }
 
 fn export(state: &mut State, folder: &Path) {
-    match crate::files::export_to(folder, state.design()) {
-        Ok(names) => state.say(format!("{} files were written into {}", names.len(), folder.display())),
-        Err(error) => state.complain(error),
+    let derived = &state.derived;
+    if derived.shell.panels.is_empty() {
+        state.complain("There is nothing to export: the shell has no panels. Lay a course.");
+        return;
     }
+    let files = zonewright_shop::export(&derived.shell, &derived.parts, &[]);
+    let files = match files {
+        Ok(files) => files,
+        Err(error) => return state.complain(error.to_string()),
+    };
+    let count = files.len();
+    match write_all(folder, files) {
+        Ok(()) => state.say(format!("{count} files were written into {}", folder.display())),
+        Err(text) => state.complain(text),
+    }
+}
+
+fn write_all(folder: &Path, files: Vec<(String, Vec<u8>)>) -> Result<(), String> {
+    let unwritten = |path: &Path, cause: std::io::Error| {
+        format!("Cannot write {}: {cause}. Choose another folder.", path.display())
+    };
+    std::fs::create_dir_all(folder).map_err(|cause| unwritten(folder, cause))?;
+    for (name, bytes) in files {
+        let path = folder.join(name);
+        document::write_whole(&path, &bytes).map_err(|cause| unwritten(&path, cause))?;
+    }
+    Ok(())
 }
 
 /// System dialogs may give a name without an ending.
@@ -151,4 +174,12 @@ fn with_ending(path: PathBuf) -> PathBuf {
     } else {
         path.with_extension(ENDING)
     }
+}
+
+/// The same text with a capital letter at its beginning.
+pub(crate) fn sentence(text: &str) -> String {
+    let mut letters = text.chars();
+    letters
+        .next()
+        .map_or_else(String::new, |first| first.to_uppercase().chain(letters).collect())
 }

@@ -7,7 +7,7 @@ mod splice;
 mod steps;
 mod view;
 
-pub(crate) use file::ENDING;
+pub(crate) use file::{ENDING, sentence};
 pub(crate) use splice::fresh_splice;
 pub(crate) use view::fit_when_pending;
 

@@ -1,10 +1,6 @@
 //! The start, the placement, the outside, the unit.
 
-use std::collections::BTreeMap;
-
-use zonewright_geometry::{
-    Act, Direction, Outside, Placement, Shape, Start, Vector, ZoneRef, ZoneVector, start::FreePath,
-};
+use zonewright_geometry::{Outside, Placement, Shape, Start, Vector};
 use zonewright_shop::text::Units;
 
 use super::path::refusal;
@@ -57,49 +53,17 @@ pub(super) fn free_points(state: &mut State) {
 }
 
 /// The same shape with free points. A kind that is lifted to the ground keeps its place: the lift goes into the origin.
-/// Zones are called by other numbers afterwards; splices and rules of zones follow.
 pub(super) fn freed(shape: &Shape) -> Result<Shape, String> {
-    let word = shape.start.first_word();
-    let word = word.map_err(|finding| refusal("The start cannot be turned into free points", &finding))?;
-    let mut path = FreePath::from_word(&word);
+    let refused = |finding| refusal("The start cannot be turned into free points", &finding);
+    let mut freed = shape.to_free().map_err(refused)?;
     let (shell, _) = zonewright_geometry::grow(shape);
     let lift = path_place::lift(shape, &shell);
-    if lift != Vector::ZERO {
+    if let Start::Zigzag(path) = &mut freed.start
+        && lift != Vector::ZERO
+    {
         path.origin += path_place::own_movement(&shape.placement, lift);
     }
-    let mut freed = Shape {
-        start: Start::Zigzag(path),
-        ..shape.clone()
-    };
-    let ids: BTreeMap<u32, u32> = word.free_zone_ids().into_iter().collect();
-    rename_zones(&mut freed, &ids);
     Ok(freed)
-}
-
-fn rename_zones(shape: &mut Shape, ids: &BTreeMap<u32, u32>) {
-    let rename = |zone: &mut ZoneRef| {
-        if let ZoneRef::Start(id) = zone
-            && let Some(new) = ids.get(id)
-        {
-            *id = *new;
-        }
-    };
-    for rule in &mut shape.zones {
-        rename(&mut rule.zone);
-        if let ZoneVector::Linked(zone, _) = &mut rule.vector {
-            rename(zone);
-        }
-    }
-    for step in &mut shape.steps {
-        let Act::Splice { directions, .. } = &mut step.act else {
-            continue;
-        };
-        for direction in directions {
-            if let Direction::Zone(zone) | Direction::Against(zone) = direction {
-                rename(zone);
-            }
-        }
-    }
 }
 
 /// Moves, turns, scales or mirrors the shell.

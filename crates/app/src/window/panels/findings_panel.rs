@@ -4,10 +4,7 @@ use egui::{RichText, Ui};
 use zonewright_geometry::{Finding, Level, Place};
 
 use super::Cx;
-use crate::window::command::Command;
-
-/// Findings that are listed; a shell with thousands of them is not mended one by one.
-const MOST_SHOWN: usize = 100;
+use crate::window::{command::Command, derived::MOST_SHOWN};
 
 /// Draws the list of findings.
 pub(super) fn findings_ui(cx: Cx<'_>, ui: &mut Ui) {
@@ -34,7 +31,12 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, finding: &Finding) {
         Level::Note => ("Note", colours.note()),
     };
     let shown = cx.state.view.finding == Some(at);
-    let said = finding.code.text().what;
+    let said = cx
+        .state
+        .derived
+        .texts
+        .get(at)
+        .map_or(finding.code.text().what, String::as_str);
     ui.horizontal_wrapped(|ui| {
         ui.label(RichText::new(word).color(colour).strong());
         if has_place(&finding.place) {
@@ -45,7 +47,6 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, finding: &Finding) {
         }
         ui.label(said);
     });
-    ui.weak(finding.code.text().remedy);
 }
 
 /// Whether a finding has a place that can be shown in the picture.
