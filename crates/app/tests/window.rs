@@ -17,6 +17,7 @@ use zonewright_geometry::{
 fn open(design: Design) -> Harness<'static, App> {
     let mut harness = Harness::builder()
         .with_size([1280.0, 800.0])
+        .with_max_steps(20)
         .build_eframe(move |cc| App::new_headless(&cc.egui_ctx, design));
     harness.run();
     harness
@@ -158,7 +159,7 @@ fn a_click_on_an_open_v_splices_and_the_next_one_takes_it_away() {
         2,
         "one spur makes two of one"
     );
-    harness.get_by_label("Add a course").click();
+    harness.state().send(Command::AddCourse);
     harness.run();
     assert_eq!(harness.state().state().derived.totals.panels, 4);
     harness.state().send(Command::Undo);
@@ -174,13 +175,13 @@ fn all_is_undone_all_is_redone_saved_and_reopened_with_the_same_numbers() {
     let file = folder.path().join("a design.ron");
     let first = polar();
     let mut harness = open(first.clone());
-    for label in ["Remove a course", "Remove a course", "Turn into free points"] {
-        harness.get_by_label(label).click();
+    for command in [Command::RemoveCourse, Command::RemoveCourse, Command::FreePoints] {
+        harness.state().send(command);
         harness.run();
     }
     harness.get_by_label("Open V 1").click();
     harness.run();
-    harness.get_by_label("Add a course").click();
+    harness.state().send(Command::AddCourse);
     harness.run();
     let last = harness.state().state().design().clone();
     let numbers = harness.state().state().derived.totals.clone();
@@ -297,10 +298,10 @@ fn without_a_dialog_service_the_path_box_saves() {
     harness.state().send(Command::SaveAs);
     harness.run();
     let typed: PathBuf = folder.path().join("typed");
-    harness.get_by_label("Path").focus();
+    harness.get_by_label("File path").focus();
     harness.key_press_modifiers(egui::Modifiers::COMMAND, egui::Key::A);
     harness.run();
-    harness.get_by_label("Path").type_text(typed.to_str().unwrap());
+    harness.get_by_label("File path").type_text(typed.to_str().unwrap());
     harness.run();
     harness.key_press(egui::Key::Enter);
     harness.run();

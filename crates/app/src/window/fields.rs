@@ -8,7 +8,7 @@ use zonewright_geometry::{Angle, Vector};
 use zonewright_shop::text::{self, MM_PER_INCH, Units};
 
 /// Width of a value field, in points.
-const VALUE_WIDTH: f32 = 96.0;
+const VALUE_WIDTH: f32 = 124.0;
 
 /// A labelled length. Gives whether it was changed.
 pub fn length(ui: &mut Ui, label: &str, mm: &mut f64, units: Units) -> bool {
@@ -123,18 +123,25 @@ pub fn choice(ui: &mut Ui, label: &str, now: usize, names: &[&str]) -> Option<us
     row(ui, label, |ui| bare_choice(ui, label, now, names))
 }
 
-/// A choice from a list without a visible label; `name` is its accessible name.
+/// A choice from a list without a visible label, as wide as a value field; `name` is its accessible name.
 pub fn bare_choice(ui: &mut Ui, name: &str, now: usize, names: &[&str]) -> Option<usize> {
+    let combo = egui::ComboBox::from_id_salt(name).width(VALUE_WIDTH).truncate();
+    chosen(ui, combo, name, now, names)
+}
+
+/// The same, as wide as its text.
+pub fn wide_choice(ui: &mut Ui, name: &str, now: usize, names: &[&str]) -> Option<usize> {
+    chosen(ui, egui::ComboBox::from_id_salt(name).width(0.0), name, now, names)
+}
+
+fn chosen(ui: &mut Ui, combo: egui::ComboBox<'_>, name: &str, now: usize, names: &[&str]) -> Option<usize> {
     let mut chosen = now;
     let shown = names.get(now).copied().unwrap_or_default();
-    let combo = egui::ComboBox::from_id_salt(name)
-        .selected_text(shown)
-        .width(VALUE_WIDTH)
-        .show_ui(ui, |ui| {
-            for (index, text) in names.iter().enumerate() {
-                ui.selectable_value(&mut chosen, index, *text);
-            }
-        });
+    let combo = combo.selected_text(shown).show_ui(ui, |ui| {
+        for (index, text) in names.iter().enumerate() {
+            ui.selectable_value(&mut chosen, index, *text);
+        }
+    });
     combo.response.accessible_name(name);
     (chosen != now).then_some(chosen)
 }

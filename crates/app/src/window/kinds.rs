@@ -65,7 +65,7 @@ pub const KINDS: [Kind; 9] = [
         name: "Loop",
         new_name: "New loop",
         hint: "A closed zigzag: a tube.",
-        courses: Some(4),
+        courses: Some(3),
         usual: tube,
     },
     Kind {

@@ -26,7 +26,7 @@ pub fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
         ui.set_width(480.0);
         ui.heading(own.asked.heading());
         let field = TextEdit::singleline(&mut widgets.path.text).desired_width(f32::INFINITY);
-        let field = ui.add(field).accessible_name("Path");
+        let field = ui.add(field).accessible_name("File path");
         if fresh {
             field.request_focus();
         }
@@ -106,7 +106,7 @@ fn entries_ui(ui: &mut Ui, path: &mut PathText, asked: Asked) {
         .auto_shrink([false, false])
         .show(ui, |ui| {
             if let Some(up) = path.folder.parent()
-                && ui.selectable_label(false, "↑ folder above").clicked()
+                && ui.selectable_label(false, "Folder above").clicked()
             {
                 chosen = Some(up.to_path_buf());
             }

@@ -74,8 +74,13 @@ pub fn lift(shape: &Shape, shell: &Shell) -> Vector {
     let free = if grounded { shape.to_free().ok() } else { None };
     let Some(free) = free else { return Vector::ZERO };
     let (other, _) = grow(&free);
-    match (shell.fronts[0].nodes.first(), other.fronts[0].nodes.first()) {
-        (Some(lifted), Some(plain)) => *lifted - *plain,
+    // Both grow alike, so that their first vertices belong together; without a panel there are only the fronts' nodes.
+    let first = |shell: &Shell| {
+        let node = shell.fronts.iter().find_map(|front| front.nodes.first());
+        shell.points.first().or(node).copied()
+    };
+    match (first(shell), first(&other)) {
+        (Some(lifted), Some(plain)) => lifted - plain,
         _ => Vector::ZERO,
     }
 }

@@ -67,3 +67,31 @@ fn small(ui: &mut Ui, enabled: bool, text: &str, name: &str) -> bool {
     let button = button.on_hover_text(name).on_disabled_hover_text(name);
     button.accessible_name(name).clicked()
 }
+
+/// What an icon button shows.
+#[derive(Clone, Copy, PartialEq, Eq, Debug)]
+enum Icon {
+    /// A triangle that points up.
+    Up,
+    /// A triangle that points down.
+    Down,
+}
+
+/// A small button with a drawn icon: the fonts have no arrows.
+fn icon(ui: &mut Ui, enabled: bool, icon: Icon, name: &str) -> bool {
+    let side = ui.spacing().interact_size.y * 0.8;
+    let button = egui::Button::new("").small().min_size(egui::vec2(side, side));
+    let button = ui.add_enabled(enabled, button).on_hover_text(name);
+    let colour = ui.style().interact(&button).text_color();
+    let colour = if enabled { colour } else { colour.gamma_multiply(0.4) };
+    let (middle, reach) = (button.rect.center(), side * 0.22);
+    let up = if icon == Icon::Up { -reach } else { reach };
+    let corners = vec![
+        middle + egui::vec2(0.0, up),
+        middle + egui::vec2(reach * 1.2, -up),
+        middle + egui::vec2(-reach * 1.2, -up),
+    ];
+    ui.painter()
+        .add(egui::Shape::convex_polygon(corners, colour, egui::Stroke::NONE));
+    button.accessible_name(name).clicked()
+}

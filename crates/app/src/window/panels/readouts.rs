@@ -1,6 +1,6 @@
 //! The readouts, live with every change.
 
-use egui::{Grid, Role, Ui, WidgetInfo};
+use egui::{Align, Label, Layout, Role, Ui, WidgetInfo};
 use zonewright_geometry::measure::Range;
 use zonewright_shop::text;
 
@@ -8,15 +8,17 @@ use super::Cx;
 
 /// Draws the readouts.
 pub(super) fn readouts_ui(cx: Cx<'_>, ui: &mut Ui) {
-    Grid::new("readouts").num_columns(2).striped(true).show(ui, |ui| {
-        for (name, value) in rows(cx) {
+    ui.spacing_mut().item_spacing.y = 3.0;
+    for (name, value) in rows(cx) {
+        ui.horizontal(|ui| {
             ui.weak(name);
-            let shown = ui.label(&value);
-            // The value is read together with its name.
-            shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("{name}: {value}")));
-            ui.end_row();
-        }
-    });
+            ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
+                let shown = ui.add(Label::new(&value).truncate());
+                // The value is read together with its name.
+                shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("{name}: {value}")));
+            });
+        });
+    }
 }
 
 /// Names and values of all readouts, as they are shown.

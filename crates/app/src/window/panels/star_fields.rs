@@ -65,7 +65,7 @@ pub(super) fn star_path(ui: &mut Ui, path: &mut StarPath, units: Units) -> Optio
     let (mut delete, mut insert) = (None, None);
     for (at, letter) in path.letters.iter_mut().enumerate() {
         ui.push_id(("letter", at), |ui| {
-            ui.horizontal(|ui| {
+            ui.horizontal_wrapped(|ui| {
                 if letter_fields(ui, at, letter, axes, units) {
                     changed = Some("a letter");
                 }

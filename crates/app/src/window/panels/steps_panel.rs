@@ -1,9 +1,9 @@
 //! The steps of the record.
 
-use egui::Ui;
+use egui::{Align, Layout, Ui};
 use zonewright_geometry::{Act, Courses, Side, Spurs, Step, StepId, Vs};
 
-use super::{Cx, small, step_fields};
+use super::{Cx, Icon, icon, small, step_fields};
 use crate::window::{command::Command, fields};
 
 /// Draws the list of steps and the buttons for courses.
@@ -43,28 +43,30 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, step: &Step, count: usize) {
             .checkbox(&mut edited.on, "")
             .on_hover_text("A step switched off is kept and skipped.");
         changed |= on.accessible_name(format!("Step {number} on")).changed();
-        let mut name = step.name.clone().unwrap_or_default();
-        let hint = format!("{number}  {}", title(step));
-        let field = egui::TextEdit::singleline(&mut name)
-            .hint_text(hint)
-            .desired_width(ui.available_width() - 84.0);
-        if ui
-            .add(field)
-            .accessible_name(format!("Name of step {number}"))
-            .changed()
-        {
-            edited.name = (!name.is_empty()).then_some(name);
-            changed = true;
-        }
-        if small(ui, 0 < at, "↑", &format!("Move step {number} up")) {
-            cx.tx.send(Command::MoveStep(at, at - 1));
-        }
-        if small(ui, number < count, "↓", &format!("Move step {number} down")) {
-            cx.tx.send(Command::MoveStep(at, at + 1));
-        }
-        if small(ui, true, "×", &format!("Delete step {number}")) {
-            cx.tx.send(Command::DeleteStep(at));
-        }
+        ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
+            if small(ui, true, "×", &format!("Delete step {number}")) {
+                cx.tx.send(Command::DeleteStep(at));
+            }
+            if icon(ui, number < count, Icon::Down, &format!("Move step {number} down")) {
+                cx.tx.send(Command::MoveStep(at, at + 1));
+            }
+            if icon(ui, 0 < at, Icon::Up, &format!("Move step {number} up")) {
+                cx.tx.send(Command::MoveStep(at, at - 1));
+            }
+            let mut name = step.name.clone().unwrap_or_default();
+            let hint = format!("{number}  {}", title(step));
+            let field = egui::TextEdit::singleline(&mut name)
+                .hint_text(hint)
+                .desired_width(f32::INFINITY);
+            if ui
+                .add(field)
+                .accessible_name(format!("Name of step {number}"))
+                .changed()
+            {
+                edited.name = (!name.is_empty()).then_some(name);
+                changed = true;
+            }
+        });
     });
     ui.indent("act", |ui| {
         changed |= step_fields::act_fields(cx, ui, at, &mut edited);

@@ -3,7 +3,7 @@
 use egui::Ui;
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 
-use crate::window::{command::Command, fields::bare_choice, panels::Cx};
+use crate::window::{command::Command, fields::wide_choice, panels::Cx};
 
 const FACES: [(Faces, &str); 3] = [
     (Faces::ShadedWithEdges, "Faces and edges"),
@@ -13,12 +13,12 @@ const FACES: [(Faces, &str); 3] = [
 
 const COLOURS: [(ColourBy, &str); 7] = [
     (ColourBy::Plain, "Plain"),
-    (ColourBy::Zone, "Zone"),
-    (ColourBy::Family, "Family"),
-    (ColourBy::Course, "Course"),
-    (ColourBy::Slope, "Slope"),
-    (ColourBy::Fold, "Fold"),
-    (ColourBy::Finding, "Finding"),
+    (ColourBy::Zone, "By zone"),
+    (ColourBy::Family, "By family"),
+    (ColourBy::Course, "By course"),
+    (ColourBy::Slope, "By slope"),
+    (ColourBy::Fold, "By fold"),
+    (ColourBy::Finding, "By finding"),
 ];
 
 /// Draws the bar.
@@ -45,7 +45,6 @@ pub(super) fn bar_ui(cx: Cx<'_>, ui: &mut Ui) {
             Command::SetProjection,
         );
         pick(cx, ui, "Faces", view.faces, &FACES, Command::SetFaces);
-        ui.weak("Colour by");
         pick(cx, ui, "Colour by", view.colour, &COLOURS, Command::SetColour);
         let mut hidden = view.hidden_edges;
         if ui.checkbox(&mut hidden, "Hidden edges").changed() {
@@ -64,7 +63,7 @@ fn pick<T: Copy + PartialEq>(
 ) {
     let names: Vec<&str> = all.iter().map(|(_, n)| *n).collect();
     let at = all.iter().position(|(t, _)| *t == now).unwrap_or(0);
-    if let Some(chosen) = bare_choice(ui, name, at, &names) {
+    if let Some(chosen) = wide_choice(ui, name, at, &names) {
         cx.tx.send(command(all[chosen].0));
     }
 }
