@@ -97,7 +97,7 @@ pub const KINDS: [Kind; 9] = [
         name: "Star path",
         new_name: "New star path",
         hint: "A path along the axes of a star.",
-        courses: Some(4),
+        courses: Some(2),
         usual: star_path,
     },
     Kind {
@@ -208,18 +208,20 @@ fn helical() -> Start {
 }
 
 fn star_path() -> Start {
-    let letters = [(0, Sign::Minus), (1, Sign::Plus), (2, Sign::Minus), (3, Sign::Plus)];
+    let zags = [1, 2, 3].map(|axis| (axis, Sign::Plus));
+    let letters: Vec<(u32, Sign)> = zags.into_iter().flat_map(|zag| [(0, Sign::Minus), zag]).collect();
     Start::StarPath(StarPath {
         star: Star::Icosahedral(vec![AxisClass::FiveFold]),
         unit_mm: 400.0,
         closed: false,
         letters: letters
+            .into_iter()
             .map(|(axis, sign)| StarLetter {
                 axis,
                 sign,
                 length: StarLength::Golden(0),
             })
-            .to_vec(),
+            .collect(),
     })
 }
 

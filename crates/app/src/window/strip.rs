@@ -96,7 +96,7 @@ fn letter_colour(cx: Cx<'_>, side: Side, letter: usize) -> Color32 {
     let shell = &cx.state.derived.shell;
     let zone = shell.zone_of(front(cx, side).letters[letter].letter);
     let counts_as = shell.zones[zone as usize].counts_as;
-    let colour = picture::palette(cx.state.view.dark).category(counts_as as usize);
+    let colour = picture::palette(cx.state).category(counts_as as usize);
     Color32::from_rgb(colour.r, colour.g, colour.b)
 }
 

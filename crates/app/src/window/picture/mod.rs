@@ -7,9 +7,9 @@ mod marks;
 
 use egui::{Role, Sense, Ui, WidgetInfo};
 use zonewright_geometry::{Point, Side};
-use zonewright_painter::{Bounds, Camera, Look, Palette, Projection, Tints, View, with_egui};
+use zonewright_painter::{Bounds, Camera, Colour, Look, Palette, Projection, Tints, View, with_egui};
 
-use super::{command::Command, panels::Cx, view::ViewState, widgets::Widgets};
+use super::{command::Command, panels::Cx, state::State, view::ViewState, widgets::Widgets};
 
 /// The accessible name of the picture.
 pub const NAME: &str = "Picture of the shell";
@@ -34,10 +34,24 @@ pub fn first_camera(projection: Projection) -> Camera {
     Camera::view(View::Fit, projection, &bounds, [1.0, 1.0])
 }
 
-/// Colours of the picture.
+/// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
 #[must_use]
-pub fn palette(dark: bool) -> Palette {
-    if dark { Palette::dark() } else { Palette::light() }
+pub fn palette(state: &State) -> Palette {
+    let palette = if state.view.dark {
+        Palette::dark()
+    } else {
+        Palette::light()
+    };
+    let own = |colour: egui::Color32| {
+        let [r, g, b, a] = colour.to_array();
+        Colour { r, g, b, a }
+    };
+    Palette {
+        background: own(state.colours().picture()),
+        mark: own(state.colours().handle()),
+        preview: own(state.colours().preview()),
+        ..palette
+    }
 }
 
 /// Draws the bar above the picture, and the picture.
@@ -80,7 +94,7 @@ fn put_together(cx: Cx<'_>, widgets: &mut Widgets) {
         faces: state.view.faces,
         hidden_edges: state.view.hidden_edges,
         colour: state.view.colour,
-        palette: palette(state.view.dark),
+        palette: palette(state),
         cull: uncrossed,
         ..Look::default()
     };
