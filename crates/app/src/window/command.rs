@@ -281,24 +281,24 @@ impl Command {
 
 /// Commands on their way from widgets to the executor.
 #[derive(Debug, Default)]
-pub struct Sender {
+pub(super) struct Sender {
     queue: std::cell::RefCell<Vec<Command>>,
 }
 
 impl Sender {
     /// Sends a command; it is carried out before the next frame is drawn.
-    pub fn send(&self, command: Command) {
+    pub(super) fn send(&self, command: Command) {
         self.queue.borrow_mut().push(command);
     }
 
     /// Takes all that has been sent, in order.
-    pub fn take(&self) -> Vec<Command> {
+    pub(super) fn take(&self) -> Vec<Command> {
         std::mem::take(&mut *self.queue.borrow_mut())
     }
 
     /// Whether nothing waits.
     #[must_use]
-    pub fn is_empty(&self) -> bool {
+    pub(super) fn is_empty(&self) -> bool {
         self.queue.borrow().is_empty()
     }
 }

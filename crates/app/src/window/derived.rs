@@ -25,7 +25,7 @@ use crate::document::Design;
 const STILL_SECONDS: f64 = 0.12;
 
 /// Findings that are put into words; a shell with thousands of them is not mended one by one.
-pub const MOST_SHOWN: usize = 100;
+pub(super) const MOST_SHOWN: usize = 100;
 
 /// How often each stage was worked out; an idle window leaves all of them alone.
 #[derive(Clone, Copy, PartialEq, Eq, Debug, Default)]

@@ -11,12 +11,12 @@ use zonewright_shop::text::{self, MM_PER_INCH, Units};
 const VALUE_WIDTH: f32 = 124.0;
 
 /// A labelled length. Gives whether it was changed.
-pub fn length(ui: &mut Ui, label: &str, mm: &mut f64, units: Units) -> bool {
+pub(super) fn length(ui: &mut Ui, label: &str, mm: &mut f64, units: Units) -> bool {
     row(ui, label, |ui| bare_length(ui, label, mm, units))
 }
 
 /// A length without a visible label; `name` is its accessible name. Gives whether it was changed.
-pub fn bare_length(ui: &mut Ui, name: &str, mm: &mut f64, units: Units) -> bool {
+pub(super) fn bare_length(ui: &mut Ui, name: &str, mm: &mut f64, units: Units) -> bool {
     let speed = match units {
         Units::Mm => 1.0,
         Units::Inch => MM_PER_INCH / 16.0,
@@ -49,7 +49,7 @@ fn length_text(mm: f64, units: Units) -> String {
 }
 
 /// A labelled angle, shown in degrees. Gives whether it was changed.
-pub fn angle(ui: &mut Ui, label: &str, value: &mut Angle) -> bool {
+pub(super) fn angle(ui: &mut Ui, label: &str, value: &mut Angle) -> bool {
     let mut degrees = value.degrees();
     let changed = row(ui, label, |ui| {
         ui.add(
@@ -69,7 +69,7 @@ pub fn angle(ui: &mut Ui, label: &str, value: &mut Angle) -> bool {
 }
 
 /// A labelled whole number. Gives whether it was changed.
-pub fn count(ui: &mut Ui, label: &str, value: &mut u32, range: std::ops::RangeInclusive<u32>) -> bool {
+pub(super) fn count(ui: &mut Ui, label: &str, value: &mut u32, range: std::ops::RangeInclusive<u32>) -> bool {
     row(ui, label, |ui| {
         ui.add(
             DragValue::new(value)
@@ -84,7 +84,7 @@ pub fn count(ui: &mut Ui, label: &str, value: &mut u32, range: std::ops::RangeIn
 }
 
 /// A labelled whole number that may be negative. Gives whether it was changed.
-pub fn integer(ui: &mut Ui, label: &str, value: &mut i32) -> bool {
+pub(super) fn integer(ui: &mut Ui, label: &str, value: &mut i32) -> bool {
     row(ui, label, |ui| {
         ui.add(DragValue::new(value).speed(0.05).update_while_editing(false))
             .accessible_name(label)
@@ -93,7 +93,7 @@ pub fn integer(ui: &mut Ui, label: &str, value: &mut i32) -> bool {
 }
 
 /// A labelled plain number. Gives whether it was changed.
-pub fn number(ui: &mut Ui, label: &str, value: &mut f64, speed: f64) -> bool {
+pub(super) fn number(ui: &mut Ui, label: &str, value: &mut f64, speed: f64) -> bool {
     row(ui, label, |ui| {
         ui.add(
             DragValue::new(value)
@@ -107,7 +107,7 @@ pub fn number(ui: &mut Ui, label: &str, value: &mut f64, speed: f64) -> bool {
 }
 
 /// Three lengths beside each other, named after `name`. Gives whether one was changed.
-pub fn vector(ui: &mut Ui, name: &str, value: &mut Vector, units: Units) -> bool {
+pub(super) fn vector(ui: &mut Ui, name: &str, value: &mut Vector, units: Units) -> bool {
     let mut changed = false;
     ui.horizontal(|ui| {
         for (axis, part) in ["x", "y", "z"].into_iter().zip(value.as_mut()) {
@@ -119,18 +119,18 @@ pub fn vector(ui: &mut Ui, name: &str, value: &mut Vector, units: Units) -> bool
 }
 
 /// A labelled choice from a list. Gives the index of the choice when it was changed.
-pub fn choice(ui: &mut Ui, label: &str, now: usize, names: &[&str]) -> Option<usize> {
+pub(super) fn choice(ui: &mut Ui, label: &str, now: usize, names: &[&str]) -> Option<usize> {
     row(ui, label, |ui| bare_choice(ui, label, now, names))
 }
 
 /// A choice from a list without a visible label, as wide as a value field; `name` is its accessible name.
-pub fn bare_choice(ui: &mut Ui, name: &str, now: usize, names: &[&str]) -> Option<usize> {
+pub(super) fn bare_choice(ui: &mut Ui, name: &str, now: usize, names: &[&str]) -> Option<usize> {
     let combo = egui::ComboBox::from_id_salt(name).width(VALUE_WIDTH).truncate();
     chosen(ui, combo, name, now, names)
 }
 
 /// The same, as wide as its text.
-pub fn wide_choice(ui: &mut Ui, name: &str, now: usize, names: &[&str]) -> Option<usize> {
+pub(super) fn wide_choice(ui: &mut Ui, name: &str, now: usize, names: &[&str]) -> Option<usize> {
     chosen(ui, egui::ComboBox::from_id_salt(name).width(0.0), name, now, names)
 }
 
@@ -147,7 +147,7 @@ fn chosen(ui: &mut Ui, combo: egui::ComboBox<'_>, name: &str, now: usize, names:
 }
 
 /// A row: the label on the left, the value on the right.
-pub fn row<R>(ui: &mut Ui, label: &str, value: impl FnOnce(&mut Ui) -> R) -> R {
+pub(super) fn row<R>(ui: &mut Ui, label: &str, value: impl FnOnce(&mut Ui) -> R) -> R {
     ui.horizontal(|ui| {
         let width = (ui.available_width() - VALUE_WIDTH - ui.spacing().item_spacing.x).max(60.0);
         let height = ui.spacing().interact_size.y;

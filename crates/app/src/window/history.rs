@@ -8,7 +8,7 @@ use std::sync::Arc;
 use crate::document::Design;
 
 /// What makes neighbouring changes one undo step.
-pub type MergeKey = String;
+pub(super) type MergeKey = String;
 
 /// A state that can be gone back to, and the change that leads away from it.
 #[derive(Clone, Debug)]

@@ -12,7 +12,7 @@ use super::command::Words;
 
 /// A kind of start.
 #[derive(Clone, Copy, Debug)]
-pub struct Kind {
+pub(super) struct Kind {
     /// The word of the file and of the command line.
     pub word: &'static str,
     /// Its name.
@@ -29,13 +29,13 @@ pub struct Kind {
 impl Kind {
     /// A start of this kind with its usual parameters.
     #[must_use]
-    pub fn usual(&self) -> Start {
+    pub(super) fn usual(&self) -> Start {
         (self.usual)()
     }
 }
 
 /// All kinds, in the order of the chooser.
-pub const KINDS: [Kind; 9] = [
+pub(super) const KINDS: [Kind; 9] = [
     Kind {
         word: "zigzag",
         name: "Zigzag",
@@ -112,13 +112,13 @@ pub const KINDS: [Kind; 9] = [
 
 /// The kind with this word.
 #[must_use]
-pub fn kind(word: &str) -> &'static Kind {
+pub(super) fn kind(word: &str) -> &'static Kind {
     KINDS.iter().find(|k| k.word == word).unwrap_or(&KINDS[0])
 }
 
 /// Words of the command that makes a new design of this kind.
 #[must_use]
-pub fn new_words(word: &str) -> Words {
+pub(super) fn new_words(word: &str) -> Words {
     let kind = kind(word);
     Words {
         name: kind.new_name,

@@ -7,7 +7,7 @@ use zonewright_shop::text::Units;
 use super::{command::Command, kinds, panels::Cx};
 
 /// Draws the menu bar.
-pub fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
     MenuBar::new().ui(ui, |ui| {
         ui.menu_button("File", |ui| {
             ui.menu_button("New", |ui| {

@@ -16,7 +16,7 @@ use super::{
 const MOST_ENTRIES: usize = 500;
 
 /// Draws the box while it is open.
-pub fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
+pub(super) fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
     let Some(own) = &cx.state.dialogs.own else { return };
     let fresh = widgets.path.serial != own.serial;
     if fresh {

@@ -54,7 +54,7 @@ impl PlacedPath {
 
 /// A movement in the placed frame, as a movement in the frame before placement.
 #[must_use]
-pub fn own_movement(placement: &Placement, movement: Vector) -> Vector {
+pub(super) fn own_movement(placement: &Placement, movement: Vector) -> Vector {
     turned(placement).inverse() * movement
 }
 
@@ -69,7 +69,7 @@ fn turned(placement: &Placement) -> DMat3 {
 /// By how much growing lifts a start to the ground, in the placed frame: the difference to the same path as free points,
 /// which is never lifted.
 #[must_use]
-pub fn lift(shape: &Shape, shell: &Shell) -> Vector {
+pub(super) fn lift(shape: &Shape, shell: &Shell) -> Vector {
     let grounded = shape.start.first_word().is_ok_and(|word| word.grounded);
     let free = if grounded { shape.to_free().ok() } else { None };
     let Some(free) = free else { return Vector::ZERO };

@@ -8,7 +8,7 @@ use super::{
 };
 
 /// Asks about unsaved changes, while something waits for the answer.
-pub fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
+pub(super) fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
     if cx.state.waiting.is_none() {
         return;
     }
@@ -35,7 +35,7 @@ pub fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
 }
 
 /// Banners above the picture: what went wrong, and that the system's dialog is open.
-pub fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
     let colours = cx.state.colours();
     if let Some(message) = &cx.state.message {
         let frame = Frame::new()
@@ -81,7 +81,7 @@ pub fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
 }
 
 /// The bar at the bottom: what was done last, and how the pointer works.
-pub fn status_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn status_ui(cx: Cx<'_>, ui: &mut Ui) {
     ui.horizontal(|ui| {
         let hints = "Drag turns · shift-drag moves · wheel zooms · x, y, z lock an axis";
         ui.with_layout(egui::Layout::right_to_left(egui::Align::Center), |ui| {

@@ -5,7 +5,7 @@ use egui::{Key, Modal, ScrollArea, TextEdit, Ui};
 use super::{command::Command, panels::Cx, widgets::Widgets};
 
 /// Draws the search while it is open.
-pub fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
+pub(super) fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
     if cx.state.search.is_none() {
         widgets.search.clear();
         return;

@@ -23,7 +23,7 @@ struct Session {
 
 /// The file that the session is kept in; none when the system has no place for it.
 #[must_use]
-pub fn file() -> Option<PathBuf> {
+pub(super) fn file() -> Option<PathBuf> {
     let folder = match std::env::var_os(STATE_DIR) {
         Some(folder) => PathBuf::from(folder),
         None => {
@@ -38,7 +38,7 @@ pub fn file() -> Option<PathBuf> {
 ///
 /// # Errors
 /// When the file cannot be written.
-pub fn remember(file: &Path, design: &Path) -> io::Result<()> {
+pub(super) fn remember(file: &Path, design: &Path) -> io::Result<()> {
     let design = std::path::absolute(design)?;
     let session = Session { design: Some(design) };
     let text = ron::ser::to_string_pretty(&session, ron::ser::PrettyConfig::default()).map_err(io::Error::other)?;
@@ -50,7 +50,7 @@ pub fn remember(file: &Path, design: &Path) -> io::Result<()> {
 
 /// The design that was open last; none when there is no session that can be read.
 #[must_use]
-pub fn last(file: &Path) -> Option<PathBuf> {
+pub(super) fn last(file: &Path) -> Option<PathBuf> {
     if fs::metadata(file).ok()?.len() > MAX_BYTES {
         return None;
     }
@@ -62,7 +62,7 @@ pub fn last(file: &Path) -> Option<PathBuf> {
 ///
 /// # Errors
 /// A sentence, when it cannot be read.
-pub fn sample() -> Result<Design, String> {
+pub(super) fn sample() -> Result<Design, String> {
     let (name, text) = document::bundled()
         .first()
         .ok_or("No sample comes with this program.")?;

@@ -8,7 +8,7 @@ use super::{execute::fresh_splice, state::State};
 
 /// The name of an open V, by its place among the open Vs of a front.
 #[must_use]
-pub fn v_name(state: &State, side: Side, index: usize) -> Option<VName> {
+pub(super) fn v_name(state: &State, side: Side, index: usize) -> Option<VName> {
     let shell = &state.derived.shell;
     let front = &shell.fronts[usize::from(side == Side::Aft)];
     let v = state.derived.open_on(side).get(index)?;
@@ -21,7 +21,7 @@ pub fn v_name(state: &State, side: Side, index: usize) -> Option<VName> {
 
 /// The open Vs of a front that a click would unsplice, by their places among the open Vs.
 #[must_use]
-pub fn spliced(state: &State, side: Side) -> BTreeSet<usize> {
+pub(super) fn spliced(state: &State, side: Side) -> BTreeSet<usize> {
     let shape = state.shape();
     let last = shape.steps.iter().rev().find(|s| s.on && s.side == side);
     if !last.is_some_and(|s| matches!(s.act, Act::Splice { .. })) {

@@ -8,7 +8,7 @@ use zonewright_geometry::{FrontState, Role, Side};
 use super::{command::Command, panels::Cx, picture, splice_marks, strip_layout::Zigzag, widgets::Widgets};
 
 /// Draws the strip.
-pub fn strip_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
+pub(super) fn strip_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     ui.horizontal(|ui| {
         ui.vertical(|ui| {
             ui.set_width(128.0);

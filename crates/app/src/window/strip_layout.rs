@@ -12,7 +12,7 @@ const TALLEST: f32 = 40.0;
 
 /// A front laid out flat.
 #[derive(Clone, PartialEq, Debug)]
-pub struct Zigzag {
+pub(super) struct Zigzag {
     /// How deep each node lies, in letters.
     depths: Vec<i32>,
     width: f32,
@@ -23,7 +23,7 @@ pub struct Zigzag {
 impl Zigzag {
     /// Lays a front out in a room. `around` draws the first letter again at the end, for a V that the last one makes with it.
     #[must_use]
-    pub fn new(roles: &[Role], around: bool, room: (f32, f32)) -> Self {
+    pub(super) fn new(roles: &[Role], around: bool, room: (f32, f32)) -> Self {
         let mut depths = vec![0];
         let again = roles.first().filter(|_| around);
         for role in roles.iter().chain(again) {
@@ -50,20 +50,20 @@ impl Zigzag {
 
     /// The width of the whole strip.
     #[must_use]
-    pub fn width(&self) -> f32 {
+    pub(super) fn width(&self) -> f32 {
         2.0 * MARGIN + self.width * (self.depths.len() - 1) as f32
     }
 
     /// Where a node lies: right and down from the strip's corner. Nodes count from 0; a closed front's go round.
     #[must_use]
-    pub fn node(&self, node: usize) -> (f32, f32) {
+    pub(super) fn node(&self, node: usize) -> (f32, f32) {
         let depth = self.depths.get(node).copied().unwrap_or(0);
         (MARGIN + self.width * node as f32, self.top + self.height * depth as f32)
     }
 
     /// The letters between two places across the strip.
     #[must_use]
-    pub fn seen(&self, left: f32, right: f32) -> std::ops::Range<usize> {
+    pub(super) fn seen(&self, left: f32, right: f32) -> std::ops::Range<usize> {
         let last = self.depths.len() - 1;
         let letter = |x: f32| ((x - MARGIN) / self.width).max(0.0) as usize;
         letter(left - self.width).min(last)..(letter(right) + 2).min(last)

@@ -65,7 +65,7 @@ impl Default for ViewState {
 
 /// Words of the commands that look from a side.
 #[must_use]
-pub const fn look_words(view: View) -> Words {
+pub(super) const fn look_words(view: View) -> Words {
     let (name, hint) = match view {
         View::Plan => ("Plan", "Looks down from above."),
         View::Front => ("Front", "Looks from the front, along y."),

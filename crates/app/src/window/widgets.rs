@@ -7,7 +7,7 @@ use zonewright_painter::Picture;
 
 /// A drag in the picture.
 #[derive(Clone, Copy, PartialEq, Debug)]
-pub enum Drag {
+pub(super) enum Drag {
     /// The camera turns.
     Orbit,
     /// The camera moves along.
@@ -27,7 +27,7 @@ pub enum Drag {
 
 /// The text of the path box and what it shows.
 #[derive(Debug, Default)]
-pub struct PathText {
+pub(super) struct PathText {
     /// The box that this belongs to.
     pub serial: u64,
     /// What is typed.
@@ -42,7 +42,7 @@ pub struct PathText {
 
 /// The picture as it was put together last, and from what.
 #[derive(Debug, Default)]
-pub struct PictureCache {
+pub(super) struct PictureCache {
     /// What it was put together from.
     pub key: Option<super::picture::Key>,
     /// The picture.
@@ -51,7 +51,7 @@ pub struct PictureCache {
 
 /// State of the widgets.
 #[derive(Debug, Default)]
-pub struct Widgets {
+pub(super) struct Widgets {
     /// The path box.
     pub path: PathText,
     /// The command search.

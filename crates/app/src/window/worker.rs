@@ -59,7 +59,7 @@ pub enum Worker {
         results: mpsc::Receiver<Done>,
     },
     /// Everything is worked out when it is asked for, so that tests do not depend on timing.
-    Inline(Option<Done>),
+    Inline(Option<Box<Done>>),
 }
 
 /// Keeps the slot's fields to this file.
@@ -96,7 +96,7 @@ impl Worker {
                 slot.0.lock().unwrap_or_else(PoisonError::into_inner).0.job = Some(job);
                 slot.1.notify_one();
             }
-            Self::Inline(done) => *done = Some(work(&job)),
+            Self::Inline(done) => *done = Some(Box::new(work(&job))),
         }
     }
 
@@ -104,7 +104,7 @@ impl Worker {
     pub fn poll(&mut self) -> Option<Done> {
         match self {
             Self::Thread { results, .. } => results.try_iter().last(),
-            Self::Inline(done) => done.take(),
+            Self::Inline(done) => done.take().map(|done| *done),
         }
     }
 }

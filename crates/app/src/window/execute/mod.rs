@@ -14,7 +14,7 @@ pub(crate) use view::fit_when_pending;
 use super::{command::Command, state::State};
 
 /// Carries a command out.
-pub fn run(state: &mut State, command: Command) {
+pub(super) fn run(state: &mut State, command: Command) {
     match command {
         Command::New(_)
         | Command::Open

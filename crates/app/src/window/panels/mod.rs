@@ -18,7 +18,7 @@ use super::{command::Sender, state::State};
 
 /// What a panel reads, and where it sends commands.
 #[derive(Clone, Copy, Debug)]
-pub struct Cx<'a> {
+pub(super) struct Cx<'a> {
     /// The state, to read.
     pub state: &'a State,
     /// Where commands go.
@@ -26,7 +26,7 @@ pub struct Cx<'a> {
 }
 
 /// The left panel: the start, its path, the steps, where the shell stands.
-pub fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
     ScrollArea::vertical()
         .auto_shrink(false)
         .id_salt("left")
@@ -40,7 +40,7 @@ pub fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
 }
 
 /// The right panel: readouts and findings.
-pub fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
     ScrollArea::vertical()
         .auto_shrink(false)
         .id_salt("right")

@@ -9,12 +9,6 @@ use crate::window::{command::Command, fields};
 /// Draws the list of steps and the buttons for courses.
 pub(super) fn steps_ui(cx: Cx<'_>, ui: &mut Ui) {
     let steps = &cx.state.shape().steps;
-    if steps.is_empty() {
-        ui.weak("No steps yet: nothing grows. Add a course.");
-    }
-    for (at, step) in steps.iter().enumerate() {
-        ui.push_id(("step", step.id.0), |ui| one(cx, ui, at, step, steps.len()));
-    }
     let side = usize::from(cx.state.view.side == Side::Aft);
     if let Some(chosen) = fields::choice(ui, "Live front", side, &["Fore", "Aft"]) {
         cx.tx
@@ -31,6 +25,12 @@ pub(super) fn steps_ui(cx: Cx<'_>, ui: &mut Ui) {
             }
         }
     });
+    if steps.is_empty() {
+        ui.weak("No steps yet: nothing grows. Add a course.");
+    }
+    for (at, step) in steps.iter().enumerate() {
+        ui.push_id(("step", step.id.0), |ui| one(cx, ui, at, step, steps.len()));
+    }
     ui.menu_button("Add a step", |ui| add_menu(cx, ui));
 }
 

@@ -16,7 +16,7 @@ pub const NAME: &str = "Picture of the shell";
 
 /// What a picture was put together from: an equal key means an equal picture.
 #[derive(Clone, PartialEq, Debug)]
-pub struct Key {
+pub(super) struct Key {
     revision: u64,
     scene: u64,
     camera: Camera,
@@ -26,7 +26,7 @@ pub struct Key {
 
 /// The camera before there is anything to look at.
 #[must_use]
-pub fn first_camera(projection: Projection) -> Camera {
+pub(super) fn first_camera(projection: Projection) -> Camera {
     let bounds = Bounds {
         min: Point::new(-1000.0, -1000.0, -1000.0),
         max: Point::new(1000.0, 1000.0, 1000.0),
@@ -36,7 +36,7 @@ pub fn first_camera(projection: Projection) -> Camera {
 
 /// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
 #[must_use]
-pub fn palette(state: &State) -> Palette {
+pub(super) fn palette(state: &State) -> Palette {
     let palette = if state.view.dark {
         Palette::dark()
     } else {
@@ -55,7 +55,7 @@ pub fn palette(state: &State) -> Palette {
 }
 
 /// Draws the bar above the picture, and the picture.
-pub fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
+pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     bar::bar_ui(cx, ui);
     let size = ui.available_size().max(egui::vec2(50.0, 50.0));
     let (rect, response) = ui.allocate_exact_size(size, Sense::click_and_drag());
@@ -81,7 +81,7 @@ fn put_together(cx: Cx<'_>, widgets: &mut Widgets) {
     let key = Key {
         revision: state.derived.revision,
         scene: state.derived.scene_revision,
-        camera: state.camera.clone(),
+        camera: state.camera,
         view: state.view.clone(),
         over: widgets.over,
     };
