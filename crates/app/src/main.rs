@@ -1,4 +1,4 @@
-//! The zonewright program: the command line, or the window.
+//! The zonewright program: the command line.
 
 use std::process::ExitCode;
 
@@ -12,7 +12,6 @@ fn main() -> ExitCode {
         Asked::Leave(status) => return status,
         Asked::Window(file) => file,
     };
-    // Said here, before a window opens, so that a wrong name in a terminal is answered in the terminal.
     if let Some(Err(error)) = file.as_deref().map(read_design) {
         return fail(&error.to_string());
     }

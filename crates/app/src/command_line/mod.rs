@@ -132,7 +132,8 @@ pub fn fail(what: &str) -> ExitCode {
 
 fn complain(what: &str) {
     // Nothing is left to be done when standard error is closed.
-    let _ = writeln!(std::io::stderr(), "zonewright: {}", what.trim_end());
+    let one_line = what.split_whitespace().collect::<Vec<_>>().join(" ");
+    let _ = writeln!(std::io::stderr(), "zonewright: {one_line}");
 }
 
 /// Prints to standard output. A reader that stops reading is no error.

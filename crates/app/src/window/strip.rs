@@ -9,12 +9,14 @@ use super::{command::Command, panels::Cx, picture, splice_marks, strip_layout::Z
 
 /// Draws the strip.
 pub(super) fn strip_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
-    ui.horizontal(|ui| {
+    let height = ui.available_height();
+    ui.horizontal_top(|ui| {
+        ui.set_min_height(height);
         ui.vertical(|ui| {
             ui.set_width(128.0);
             head_ui(cx, ui);
         });
-        front_ui(cx, ui, widgets);
+        front_ui(cx, ui, widgets, height);
     });
 }
 
@@ -50,12 +52,12 @@ fn front(cx: Cx<'_>, side: Side) -> &FrontState {
     &cx.state.derived.shell.fronts[usize::from(side == Side::Aft)]
 }
 
-fn front_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
+fn front_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets, height: f32) {
     let side = cx.state.view.side;
     let roles: Vec<Role> = front(cx, side).letters.iter().map(|l| l.role).collect();
     let vs = cx.state.derived.open_on(side);
     let around = vs.last().is_some_and(|v| v.position + 1 == roles.len());
-    let room = ui.available_size();
+    let room = vec2(ui.available_width(), height);
     let zigzag = Zigzag::new(&roles, around, room.into());
     ScrollArea::horizontal()
         .id_salt("strip")

@@ -4,7 +4,7 @@
 //! is one panel (the arrangements of de Bruijn and Elnitsky). Few crossings mean few panels. Which chords are
 //! exchanged first decides between surfaces of the same panels; a surface without crossings is looked for.
 
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use super::{
     Growing,
@@ -12,7 +12,7 @@ use super::{
     front::Front,
     lay::Laid,
 };
-use crate::{Point, Side, Vector, inspect};
+use crate::{Courses, Point, Side, Vector, inspect};
 
 /// Surfaces looked at before the best so far is taken. A rim of six letters has 2, of eight 8, of ten 62 (OEIS A006245).
 const MOST_SURFACES: usize = 64;
@@ -67,15 +67,23 @@ pub(super) fn close(front: &mut Front, growing: &mut Growing<'_>) -> Option<Clos
     })
 }
 
-/// Fills a front whose panels must lie on the convex hull of the sum of its zones, until nothing is left.
-pub(super) fn fill_on_hull(front: &mut Front, growing: &mut Growing<'_>) -> Laid {
+/// Fills a front whose panels must lie on the convex hull of the sum of its zones, for a number of courses or until nothing is left.
+pub(super) fn fill_on_hull(front: &mut Front, courses: Courses, growing: &mut Growing<'_>) -> Laid {
     let zones: Vec<Vector> = growing.alphabet.zones.iter().map(|z| z.vector).collect();
     // The sum of the segments is centred on the middle of the silhouette.
     let nodes: Vec<Vector> = front.nodes.iter().map(|v| growing.mesh.points[*v as usize].0).collect();
     let centre = nodes.iter().sum::<Vector>() / nodes.len().max(1) as f64;
-    let mut met: Vec<[u32; 2]> = Vec::new();
+    let mut met: BTreeSet<[u32; 2]> = BTreeSet::new();
+    let mut left = match courses {
+        Courses::Count(count) => count,
+        Courses::UntilStill => u32::MAX,
+    };
     loop {
         retract_any(front, growing);
+        if left == 0 {
+            return Laid::Done;
+        }
+        left -= 1;
         let before = growing.mesh.panels.len();
         let course = growing.mesh.open_course(front.side);
         let mut at = 0;
@@ -91,7 +99,7 @@ pub(super) fn fill_on_hull(front: &mut Front, growing: &mut Growing<'_>) -> Laid
                 continue;
             }
             front.exchange(at, course, &growing.alphabet, &mut growing.mesh);
-            met.push(pair);
+            met.insert(pair);
             at += 2;
         }
         growing.mesh.close_course(course, before);

@@ -135,8 +135,8 @@ fn take_step(
         Act::Lay { courses, spurs } => {
             let present = growing.mesh.panels.len();
             let before = front.slots.len();
-            let laid = if on_hull && *courses == Courses::UntilStill {
-                close_rim::fill_on_hull(front, growing)
+            let laid = if on_hull {
+                close_rim::fill_on_hull(front, *courses, growing)
             } else {
                 lay(front, *courses, *spurs, growing)
             };

@@ -262,7 +262,10 @@ fn helical(n: u32, r: u32) -> Shape {
     let rib = |i: u32| Vector::new(cos * azimuth(i).cos(), cos * azimuth(i).sin(), sin);
     let role = |i: u32| if i < r { Role::Zig } else { Role::Zag };
     let word: Vec<_> = (0..n).map(|i| (rib(i), role(i))).collect();
-    let gcd = (1..=r).rev().find(|d| n.is_multiple_of(*d) && r.is_multiple_of(*d)).unwrap_or(1);
+    let gcd = (1..=r)
+        .rev()
+        .find(|d| n.is_multiple_of(*d) && r.is_multiple_of(*d))
+        .unwrap_or(1);
     let mut acts = vec![until_still(Spurs::Retract)];
     for _ in 1..n / gcd {
         acts.push(Act::SetRoles(RoleRule::FirstAreZig(r)));
@@ -369,7 +372,7 @@ fn what_cannot_be_grown_is_refused() {
     for (word, code) in [
         (zero, Code::ZeroVector),
         (nan, Code::NotFinite),
-        (huge, Code::NotFinite),
+        (huge, Code::ParameterLimit),
     ] {
         let (shell, findings) = grow(&shape(open_word(&word), vec![lay(1, Spurs::Retract)]));
         assert!(shell.panels.is_empty());

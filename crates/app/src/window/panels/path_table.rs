@@ -100,6 +100,7 @@ fn table(cx: Cx<'_>, ui: &mut Ui, path: &PlacedPath) {
         .column(Column::exact(26.0))
         .columns(Column::remainder().at_least(58.0), 3)
         .column(Column::exact(40.0))
+        .cell_layout(egui::Layout::left_to_right(egui::Align::Center))
         .max_scroll_height(height)
         .min_scrolled_height(height.min(80.0))
         .vscroll(true)
