@@ -1,4 +1,4 @@
-//! The zonewright program: the command line.
+//! The zonewright program: the command line, or the window.
 
 use std::process::ExitCode;
 
