@@ -355,3 +355,35 @@ fn the_search_finds_a_command_and_enter_sends_it() {
     assert!(harness.state().state().view.dark);
     assert_eq!(harness.state().state().search, None);
 }
+
+#[test]
+fn export_writes_the_files_that_the_shop_makes() {
+    let folder = tempfile::tempdir().unwrap();
+    let mut harness = open(polar());
+    harness.state().send(Command::ExportTo(folder.path().join("bench")));
+    harness.run();
+    assert_eq!(harness.state().state().message, None);
+    for file in zonewright_shop::FILES {
+        assert!(folder.path().join("bench").join(file.name).is_file(), "{}", file.name);
+    }
+}
+
+#[test]
+fn a_finding_is_shown_in_the_picture() {
+    // With twice the turn equal to the ribs, panels coincide in pairs (common fact of these solids; derived by symmetry).
+    let form = zonewright_geometry::start::HelicalForm {
+        ribs: 4,
+        turn: 2,
+        pitch: Angle::from_degrees(40.0),
+        edge_mm: 400.0,
+    };
+    let mut harness = open(new_design(Start::Helical(form), None, Spurs::default()).unwrap());
+    let before = harness.state().pictures();
+    harness.get_by_label("Show finding 1").click();
+    harness.run();
+    assert_eq!(harness.state().state().view.finding, Some(0));
+    assert!(harness.state().pictures() > before);
+    harness.get_by_label("Hide finding 1").click();
+    harness.run();
+    assert_eq!(harness.state().state().view.finding, None);
+}

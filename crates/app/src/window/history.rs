@@ -173,3 +173,67 @@ impl History {
             .is_none_or(|saved| !Arc::ptr_eq(saved, &self.now) && **saved != *self.now)
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use proptest::prelude::*;
+
+    use super::*;
+    use crate::window::kinds;
+
+    fn design(name: &str) -> Design {
+        let mut design = crate::document::new_design(kinds::kind("loop").usual(), Some(1), Default::default()).unwrap();
+        name.clone_into(&mut design.name);
+        design
+    }
+
+    #[test]
+    fn changes_with_one_key_are_one_step_until_the_step_is_sealed() {
+        let mut history = History::new(design("a"), true);
+        for name in ["b", "c", "d"] {
+            history.change(design(name), "Drag", Some("point 1".to_owned()));
+        }
+        history.seal();
+        history.change(design("e"), "Drag", Some("point 1".to_owned()));
+        assert_eq!(history.undo().as_deref(), Some("Drag"));
+        assert_eq!(history.now().name, "d");
+        history.undo();
+        assert_eq!(history.now().name, "a");
+        assert_eq!(history.undo(), None);
+        assert!(!history.unsaved(), "back at what the file holds");
+    }
+
+    #[test]
+    fn a_change_that_changes_nothing_is_no_step() {
+        let mut history = History::new(design("a"), true);
+        let revision = history.revision();
+        history.change(design("a"), "Nothing", None);
+        assert_eq!((history.revision(), history.undo_label()), (revision, None));
+    }
+
+    proptest! {
+        /// Planted answer: a plain list of all states and a place in it.
+        #[test]
+        fn any_sequence_keeps_every_state(acts in proptest::collection::vec(0_u8..4, 1..60)) {
+            let mut history = History::new(design("0"), true);
+            let mut states = vec!["0".to_owned()];
+            let mut at = 0;
+            for (turn, act) in (1..).zip(acts) {
+                match act {
+                    0 => at = history.undo().map_or(at, |_| at - 1),
+                    1 => at = history.redo().map_or(at, |_| at + 1),
+                    2 => history.mark_saved(Arc::clone(history.now())),
+                    _ => {
+                        let name = format!("{turn}");
+                        history.change(design(&name), "Change", None);
+                        states.truncate(at + 1);
+                        states.push(name);
+                        at += 1;
+                    }
+                }
+                prop_assert_eq!(&history.now().name, &states[at]);
+                prop_assert_eq!(history.check(), Ok(()));
+            }
+        }
+    }
+}

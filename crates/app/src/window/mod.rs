@@ -65,8 +65,20 @@ pub fn run(file: Option<&Path>) -> Result<(), String> {
         Ok(Box::new(app.with_session(session).with_message(message)))
     });
     eframe::run_native("zonewright", options, create).map_err(|error| {
-        format!("No window can be opened here ({error}); everything also works without one: see zonewright --help.")
+        let why = refused(&error);
+        format!("No window can be opened: {why}. Everything also works without one: see zonewright --help.")
     })
+}
+
+/// Why no window was opened, in a few words: what the system's libraries say names their own sources.
+const fn refused(error: &eframe::Error) -> &'static str {
+    match error {
+        eframe::Error::Winit(_) | eframe::Error::WinitEventLoop(_) => "there is no display that answers",
+        eframe::Error::Glutin(_) | eframe::Error::NoGlutinConfigs(..) | eframe::Error::OpenGL(_) => {
+            "there is no OpenGL driver, not even one in software"
+        }
+        _ => "the system refused it",
+    }
 }
 
 /// The design to begin with, its file, and what is to be said about it.

@@ -2,7 +2,7 @@
 
 use std::{fs, path::Path, path::PathBuf};
 
-use egui::{Key, Modal, ScrollArea, TextEdit, Ui};
+use egui::{Key, ScrollArea, TextEdit, Ui};
 
 use super::{
     command::Command,
@@ -22,7 +22,7 @@ pub(super) fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
     if fresh {
         begin(&mut widgets.path, own);
     }
-    let modal = Modal::new(egui::Id::unique("path box")).show(ui.ctx(), |ui| {
+    let modal = super::prompts::question(ui, "path box").show(ui.ctx(), |ui| {
         ui.set_width(480.0);
         ui.heading(own.asked.heading());
         let field = TextEdit::singleline(&mut widgets.path.text).desired_width(f32::INFINITY);

@@ -7,12 +7,17 @@ use super::{
     panels::Cx,
 };
 
+/// A question in the middle of the window, with room round its words.
+pub(super) fn question(ui: &Ui, id: &'static str) -> Modal {
+    Modal::new(egui::Id::unique(id)).frame(Frame::popup(ui.style()).inner_margin(16))
+}
+
 /// Asks about unsaved changes, while something waits for the answer.
 pub(super) fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
     if cx.state.waiting.is_none() {
         return;
     }
-    let modal = Modal::new(egui::Id::unique("unsaved")).show(ui.ctx(), |ui| {
+    let modal = question(ui, "unsaved").show(ui.ctx(), |ui| {
         ui.set_width(380.0);
         ui.heading("Unsaved changes");
         ui.label(format!("{} has changes that no file holds.", cx.state.file_name()));

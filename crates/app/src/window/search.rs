@@ -1,6 +1,6 @@
 //! The command search: all commands, found by a part of their name.
 
-use egui::{Key, Modal, ScrollArea, TextEdit, Ui};
+use egui::{Key, ScrollArea, TextEdit, Ui};
 
 use super::{command::Command, panels::Cx, widgets::Widgets};
 
@@ -10,7 +10,7 @@ pub(super) fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
         widgets.search.clear();
         return;
     }
-    let modal = Modal::new(egui::Id::unique("search")).show(ui.ctx(), |ui| {
+    let modal = super::prompts::question(ui, "search").show(ui.ctx(), |ui| {
         ui.set_width(420.0);
         let field = TextEdit::singleline(&mut widgets.search)
             .hint_text("Name of a command")
