@@ -30,7 +30,7 @@ pub enum ColourBy {
     Course,
     /// Panels between level and upright.
     Slope,
-    /// Edges between valley and ridge. Edges are drawn whatever [`Look::faces`] says.
+    /// Edges between valley and ridge, the shell's steepest in full colour. Edges are drawn whatever [`Look::faces`] says.
     Fold,
     /// Panels with findings stand out by their gravest level.
     Finding,

@@ -1,6 +1,6 @@
 //! The colours of panels and edges.
 
-use core::f64::consts::{FRAC_PI_2, FRAC_PI_3};
+use core::f64::consts::FRAC_PI_2;
 
 use zonewright_geometry::{NONE, Shell, Vector};
 
@@ -12,8 +12,8 @@ const AMBIENT: f64 = 0.5;
 const LIGHT: Vector = Vector::new(-0.36, 0.48, 0.8);
 /// The share of the inside's colour on panels that have a colour of their own.
 const INSIDE_SHARE: f32 = 0.55;
-/// Folds at least so steep, in radians, take the full colour of a ridge or valley.
-const STEEP_FOLD: f64 = FRAC_PI_3;
+/// Where all folds are flatter than this, a degree in radians, none takes the full colour: rounding is not shown as folds.
+const LEAST_STEEP: f64 = core::f64::consts::PI / 180.0;
 
 /// The colour of one side of a panel before shading, and whether the eye sees the outside.
 pub(crate) struct Paints<'a> {
@@ -118,7 +118,7 @@ impl<'a> Paints<'a> {
                     })
                     .collect(),
             ),
-            ColourBy::Fold => Some(edges.map(|edge| self.fold(edge.ends, edge.panels)).collect()),
+            ColourBy::Fold => Some(self.folds()),
             _ => None,
         }
     }
@@ -136,20 +136,37 @@ impl<'a> Paints<'a> {
         self.zone(panel.letters[usize::from(off_second < off_first)])
     }
 
-    /// Ridges are turns to the left about the direction in which the first panel runs along the edge.
+    /// Edges by fold, the steepest in the full colour of a ridge or valley; rims in their own.
     #[expect(clippy::cast_possible_truncation, reason = "shares need no more than f32")]
-    fn fold(&self, ends: [u32; 2], panels: [u32; 2]) -> Colour {
+    fn folds(&self) -> Vec<Colour> {
         let palette = &self.look.palette;
-        let planes = panels.map(|panel| self.scene.planes.get(panel as usize));
-        let places = ends.map(|v| self.shell.points.get(v as usize));
-        let ([Some(one), Some(other)], [Some(&from), Some(&to)]) = (planes, places) else {
-            return palette.rim;
-        };
-        let along = (to - from).normalize_or_zero();
-        let fold = along
-            .dot(one.normal.cross(other.normal))
-            .atan2(one.normal.dot(other.normal));
-        let end = palette.fold[if fold > 0.0 { 2 } else { 0 }];
-        palette.fold[1].mix(end, (fold.abs() / STEEP_FOLD) as f32)
+        let folds: Vec<Option<f64>> = self
+            .shell
+            .edges
+            .iter()
+            .map(|edge| self.fold(edge.ends, edge.panels))
+            .collect();
+        let steepest = folds
+            .iter()
+            .flatten()
+            .fold(LEAST_STEEP, |most, fold| most.max(fold.abs()));
+        folds
+            .into_iter()
+            .map(|fold| {
+                fold.map_or(palette.rim, |fold| {
+                    let end = palette.fold[if fold > 0.0 { 2 } else { 0 }];
+                    palette.fold[1].mix(end, (fold.abs() / steepest) as f32)
+                })
+            })
+            .collect()
+    }
+
+    /// The fold at an edge in radians; ridges, positive, turn to the left about the direction in which the first panel runs.
+    fn fold(&self, ends: [u32; 2], panels: [u32; 2]) -> Option<f64> {
+        let [one, other] = panels.map(|panel| self.scene.planes.get(panel as usize));
+        let [from, to] = ends.map(|v| self.shell.points.get(v as usize));
+        let (one, other) = (one?.normal, other?.normal);
+        let along = (*to? - *from?).normalize_or_zero();
+        Some(along.dot(one.cross(other)).atan2(one.dot(other)))
     }
 }

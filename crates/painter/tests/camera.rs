@@ -47,7 +47,7 @@ fn views_show_their_axes() {
     assert_eq!(signs(View::Iso)[2], [0, -1, -1]);
 }
 
-/// In an isometric view all three axes are shortened by sqrt(2/3) (ISO 5456-3, 5.1).
+/// In an isometric view all three axes are shortened by sqrt(2/3) (common knowledge; ISO 5456-3 from memory).
 #[test]
 fn isometric_shortens_all_axes_alike() {
     let camera = Camera::view(View::Iso, Projection::Parallel, &bounds(), SIZE);

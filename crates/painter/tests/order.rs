@@ -104,7 +104,7 @@ fn cube_is_in_order() {
 #[test]
 fn convex_shell_is_in_order() {
     let shell = polar(12);
-    // n (n - 1) rhombs round two poles (Kowalewski; Coxeter, Regular Polytopes).
+    // n (n - 1) rhombs round two poles (polar zonohedra; Coxeter, Regular Polytopes, from memory).
     assert_eq!(shell.panels.len(), 132);
     assert!(shell.is_closed());
     from_all_sides("polar", &shell);

@@ -173,21 +173,16 @@ impl Alphabet {
     }
 
     /// How two letters lie to each other.
+    #[inline]
     pub(super) fn meeting(&self, zig: u32, zag: u32) -> Meeting {
         let (a, b) = (self.vector(zig), self.vector(zag));
         let lengths = a.length_squared() * b.length_squared();
         if PARALLEL_SINE * PARALLEL_SINE * lengths < a.cross(b).length_squared() {
-            return Meeting::Panel;
-        }
-        let near = |d: Vector| d.length_squared() <= PARALLEL_SINE * PARALLEL_SINE * a.length_squared();
-        match (0.0 < a.dot(b), near(a - b), near(a + b)) {
-            (true, true, _) => Meeting::Equal,
-            (true, false, _) => Meeting::Slide,
-            (false, _, true) => Meeting::Spur,
-            (false, _, false) => Meeting::Fold,
+            Meeting::Panel
+        } else {
+            meeting_of_parallel(a, b)
         }
     }
-
     /// The letters of one family in the order they were made: same maker, sign and role at birth.
     pub(super) fn family(&self, of: u32) -> impl Iterator<Item = u32> + '_ {
         let key = |l: &Letter| (l.maker, l.sign, l.born);
@@ -203,6 +198,17 @@ impl Alphabet {
         }
         let steps = (to + start_zones - from) % start_zones;
         (1..steps).map(|k| (from + k) % start_zones).collect()
+    }
+}
+
+#[cold]
+fn meeting_of_parallel(a: Vector, b: Vector) -> Meeting {
+    let near = |d: Vector| d.length_squared() <= PARALLEL_SINE * PARALLEL_SINE * a.length_squared();
+    match (0.0 < a.dot(b), near(a - b), near(a + b)) {
+        (true, true, _) => Meeting::Equal,
+        (true, false, _) => Meeting::Slide,
+        (false, _, true) => Meeting::Spur,
+        (false, _, false) => Meeting::Fold,
     }
 }
 

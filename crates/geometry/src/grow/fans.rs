@@ -7,12 +7,16 @@ impl Mesh {
     /// Gives every fan of panels round a suspect vertex a vertex of its own; returns the touches.
     ///
     /// A fan is a set of panels connected by edges at the vertex. The fan of the lowest panel keeps the vertex.
-    pub(super) fn part_fans(&mut self, tees: &mut [Tee]) -> Vec<Pinch> {
+    pub(super) fn part_fans(&mut self, rims: &[u32], tees: &mut [Tee]) -> Vec<Pinch> {
+        let mut suspects = core::mem::take(&mut self.suspects);
+        suspects.extend(self.busy_rim_vertices(rims));
+        if suspects.is_empty() {
+            return Vec::new();
+        }
         let mut suspect = vec![false; self.points.len()];
-        for v in core::mem::take(&mut self.suspects) {
+        for v in suspects {
             suspect[v as usize] = true;
         }
-        self.suspect_busy_rims(&mut suspect);
         let mut corners: Vec<(u32, u32)> = Vec::new();
         for (panel, p) in (0_u32..).zip(&self.panels) {
             corners.extend(p.corners.iter().filter(|v| suspect[**v as usize]).map(|v| (*v, panel)));
@@ -48,17 +52,13 @@ impl Mesh {
     }
 
     /// A vertex with more than two rim edges may be a touch too.
-    fn suspect_busy_rims(&self, suspect: &mut [bool]) {
-        let mut ends: Vec<u32> = Vec::new();
-        for edge in &self.edges {
-            if edge.rim_panel().is_some() {
-                ends.extend(edge.ends);
-            }
-        }
+    fn busy_rim_vertices(&self, rims: &[u32]) -> Vec<u32> {
+        let mut ends: Vec<u32> = rims.iter().flat_map(|e| self.edges[*e as usize].ends).collect();
         ends.sort_unstable();
-        for busy in ends.chunk_by(|a, b| a == b).filter(|c| 2 < c.len()) {
-            suspect[busy[0] as usize] = true;
-        }
+        ends.chunk_by(|a, b| a == b)
+            .filter(|c| 2 < c.len())
+            .map(|c| c[0])
+            .collect()
     }
 
     fn part(&mut self, vertex: u32, panels: &[u32], edges: &[u32], tees: &mut [Tee]) -> Option<Pinch> {

@@ -40,16 +40,19 @@ pub(super) fn finish(
         }
     }
     let (mut tees, mut seams) = mesh.split_seams(shape.tolerances.join_mm);
-    mesh.join_rims(join_mm, findings);
-    let mut pinches = mesh.part_fans(&mut tees);
+    mesh.join_rims(&mesh.rim_edges(), join_mm, findings);
+    let mut pinches = mesh.part_fans(&mesh.rim_edges(), &mut tees);
     compact(&mut mesh, &mut tees, &mut seams, &mut pinches);
-    if mesh.points.iter().any(|p| !p.is_finite()) {
+    // A coordinate that is not finite makes the sum so.
+    if !mesh.points.iter().map(|p| p.0).sum::<crate::Vector>().is_finite() {
         return Err(Finding::new(Code::NotFinite, Place::Design));
     }
     let lift = if word.grounded { -lowest(&mesh.points) } else { 0.0 };
     let placed = Placed::new(&shape.placement, lift);
-    for point in &mut mesh.points {
-        *point = placed.apply(*point);
+    if !placed.is_nothing() {
+        for point in &mut mesh.points {
+            *point = placed.apply(*point);
+        }
     }
     let states = [0, 1].map(|k| fronts[k].state(front_points[k].iter().map(|p| placed.apply(*p)).collect()));
     let shell = Shell {
@@ -72,7 +75,10 @@ pub(super) fn finish(
 }
 
 fn lowest(points: &[Point]) -> f64 {
-    points.iter().map(|p| p.0.z).reduce(f64::min).unwrap_or(0.0)
+    points
+        .iter()
+        .fold(f64::INFINITY, |low, p| if p.0.z < low { p.0.z } else { low })
+        .min(f64::MAX)
 }
 
 fn report(shell: &Shell, findings: &mut Vec<Finding>) {
@@ -116,6 +122,7 @@ fn drop_panels(mesh: &mut Mesh, names: &[PanelName], find: impl Fn(&crate::Lette
     if !gone.contains(&true) {
         return lost;
     }
+    mesh.gaps = true;
     let mut kept = 0_u32;
     let renumbered: Vec<u32> = gone
         .iter()
@@ -160,6 +167,10 @@ fn drop_panels(mesh: &mut Mesh, names: &[PanelName], find: impl Fn(&crate::Lette
 
 /// Leaves out vertices and edges that border no panel.
 fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut [Pinch]) {
+    // Every vertex and edge is made with a panel, but for the loose ones.
+    if !mesh.gaps && mesh.loose.iter().all(|e| mesh.edges[*e as usize].panels != [NONE; 2]) {
+        return;
+    }
     let mut used = vec![false; mesh.points.len()];
     for panel in &mesh.panels {
         for corner in panel.corners {
@@ -179,23 +190,25 @@ fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut 
     }
     if used.contains(&false) {
         let numbers = renumber(used.iter().copied());
+        let first = as_index(used.iter().position(|used| !used).unwrap_or(0));
+        let number = |v: u32| if v < first { v } else { numbers[v as usize] };
         let mut at = 0;
         mesh.points.retain(|_| {
             at += 1;
             used[at - 1]
         });
         for panel in &mut mesh.panels {
-            panel.corners = panel.corners.map(|v| numbers[v as usize]);
+            panel.corners = panel.corners.map(number);
         }
         for edge in &mut mesh.edges {
-            edge.ends = edge.ends.map(|v| numbers[v as usize]);
+            edge.ends = edge.ends.map(number);
         }
         let lists = tees
             .iter_mut()
             .map(|t| &mut t.vertices)
             .chain(seams.iter_mut().map(|s| &mut s.vertices));
         for vertex in lists.chain(pinches.iter_mut().map(|p| &mut p.vertices)).flatten() {
-            *vertex = numbers[*vertex as usize];
+            *vertex = number(*vertex);
         }
     }
 }

@@ -78,7 +78,11 @@ impl Front {
                 mesh.edge_links.push([slots[count - 1].edge, slots[0].edge]);
             }
         }
-        mesh.suspects.extend_from_slice(&nodes);
+        mesh.loose.extend(slots.iter().map(|s| s.edge));
+        let mut passed = nodes.clone();
+        passed.sort_unstable();
+        mesh.suspects
+            .extend(passed.chunk_by(|a, b| a == b).filter(|c| 1 < c.len()).map(|c| c[0]));
         [Side::Fore, Side::Aft].map(|side| Self {
             side,
             closed,
@@ -158,6 +162,7 @@ impl Front {
         if meeting == Meeting::Spur {
             zip([a, b], [prev, next], mesh);
             mesh.suspects.extend([prev, new]);
+            mesh.loose.push(edge_b);
             self.slots[at] = Slot {
                 edge: edge_b,
                 reversed: false,
@@ -184,6 +189,7 @@ impl Front {
         if meeting != Meeting::Panel {
             mesh.slides.push([a.edge, b.edge, edge_b, edge_a]);
             mesh.suspects.extend([prev, mid, next, new]);
+            mesh.loose.extend([edge_b, edge_a]);
             return false;
         }
         let above = mesh.slot_above(self.side);

@@ -13,9 +13,8 @@ impl Mesh {
             .collect()
     }
 
-    /// Joins rim edges whose ends lie within `within_mm` of each other, edge to edge. Rims that touch only at a point stay apart.
-    pub(super) fn join_rims(&mut self, within_mm: f64, findings: &mut Vec<Finding>) {
-        let rims = self.rim_edges();
+    /// Joins those of the given rim edges whose ends lie within `within_mm` of each other, edge to edge. Rims that touch only at a point stay apart.
+    pub(super) fn join_rims(&mut self, rims: &[u32], within_mm: f64, findings: &mut Vec<Finding>) {
         let mut vertices: Vec<u32> = rims.iter().flat_map(|e| self.edges[*e as usize].ends).collect();
         vertices.sort_unstable();
         vertices.dedup();
@@ -42,11 +41,18 @@ impl Mesh {
                 if place(ends[0]) != place(kept[0]) {
                     ends.reverse();
                 }
-                pairs.extend([[kept[0], ends[0]], [kept[1], ends[1]]]);
+                pairs.extend(
+                    [[kept[0], ends[0]], [kept[1], ends[1]]]
+                        .into_iter()
+                        .filter(|[a, b]| a != b),
+                );
                 joins.push([group[0].1, *edge]);
+                // Joining closes a fan, also round an end that the two edges had in common already.
+                self.suspects.extend(kept);
             }
         }
         self.merge_vertices(&pairs);
+        self.gaps |= !joins.is_empty();
         let mut disagreeing = Vec::new();
         for [kept, gone] in joins.into_iter().chain(self.edges_between_the_same()) {
             if self.edges[gone as usize].panels != [NONE; 2] && self.merge_edges(kept, gone) {
@@ -63,6 +69,9 @@ impl Mesh {
 impl Mesh {
     /// Once vertices are zipped or joined, two edges may lie between the same two: they are at one place, and become one.
     fn edges_between_the_same(&self) -> Vec<[u32; 2]> {
+        if !self.gaps {
+            return Vec::new();
+        }
         let mut touched = vec![false; self.points.len()];
         for suspect in &self.suspects {
             touched[*suspect as usize] = true;

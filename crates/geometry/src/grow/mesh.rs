@@ -25,8 +25,13 @@ pub(super) struct Mesh {
     pub(super) edge_links: Vec<[u32; 2]>,
     /// Edges that lie on one line: two before a slide, two after.
     pub(super) slides: Vec<[u32; 4]>,
-    /// Vertices where sheets may touch only at a point.
+    /// Vertices where sheets may touch only at a point: those that a front passes more than once, and merged ones. Everywhere else
+    /// a touch shows by four rim edges.
     pub(super) suspects: Vec<u32>,
+    /// Edges that were made without a panel; they may never get one.
+    pub(super) loose: Vec<u32>,
+    /// Whether vertices or panels went away since they were made.
+    pub(super) gaps: bool,
     /// Whether panels are wound the other way round, so that the chosen outside sees them counter-clockwise.
     pub(super) reversed: bool,
 }
@@ -52,6 +57,7 @@ impl Mesh {
         usize::from((side == Side::Aft) != self.reversed)
     }
 
+    #[inline]
     pub(super) fn put_panel(&mut self, edge: u32, slot: usize, panel: u32) {
         let place = &mut self.edges[edge as usize].panels[slot];
         if *place == NONE {
@@ -61,6 +67,7 @@ impl Mesh {
         }
     }
 
+    #[cold]
     fn crowd(&mut self, edge: u32, panel: u32) {
         match self.crowded.iter_mut().find(|c| c.edge == edge) {
             Some(found) => found.more.push(panel),

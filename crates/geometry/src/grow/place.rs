@@ -42,6 +42,11 @@ impl Placed {
         }
     }
 
+    /// Whether every point stays where it is.
+    pub(super) fn is_nothing(&self) -> bool {
+        self.identity && self.lift == DVec3::ZERO
+    }
+
     pub(super) fn apply(&self, p: Point) -> Point {
         let lifted = p.0 + self.lift;
         if self.identity {

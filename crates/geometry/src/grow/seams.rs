@@ -21,6 +21,7 @@ impl Mesh {
         if slides.is_empty() {
             return (Vec::new(), Vec::new());
         }
+        self.gaps = true;
         let mut sets = Sets::new(self.edges.len());
         for [first, rest @ ..] in &slides {
             for other in rest {

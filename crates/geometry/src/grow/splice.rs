@@ -89,6 +89,7 @@ fn insert(front: &mut Front, at: usize, spurs: &[Spur], step: StepId, alphabet: 
         let tip = mesh.add_point(mesh.points[mid as usize] + alphabet.vector(out));
         mesh.suspects.push(tip);
         let edge = mesh.add_edge([mid, tip]);
+        mesh.loose.push(edge);
         slots.push(Slot {
             letter: out,
             edge,

@@ -372,7 +372,7 @@ fn what_cannot_be_grown_is_refused() {
     for (word, code) in [
         (zero, Code::ZeroVector),
         (nan, Code::NotFinite),
-        (huge, Code::NotFinite),
+        (huge, Code::ParameterLimit),
     ] {
         let (shell, findings) = grow(&shape(open_word(&word), vec![lay(1, Spurs::Retract)]));
         assert!(shell.panels.is_empty());

@@ -35,7 +35,7 @@ impl Sets {
 }
 
 impl Mesh {
-    /// Gives every vertex of the same set one number.
+    /// Gives every vertex of the same set one number, the lowest.
     pub(super) fn merge_vertices(&mut self, pairs: &[[u32; 2]]) {
         if pairs.is_empty() {
             return;
@@ -44,14 +44,21 @@ impl Mesh {
         for [a, b] in pairs {
             sets.unite(*a, *b);
         }
-        for panel in &mut self.panels {
-            panel.corners = panel.corners.map(|v| sets.find(v));
+        // Only vertices that give up their number matter, and none of them is in what was made before the lowest of them.
+        let gone = pairs.iter().flatten().copied().filter(|v| sets.find(*v) != *v);
+        let Some(lowest) = gone.min() else { return };
+        let highest_of = |of: &[u32]| of.iter().copied().max().unwrap_or(0);
+        let panels = self.panels.partition_point(|p| highest_of(&p.corners) < lowest);
+        let edges = self.edges.partition_point(|e| highest_of(&e.ends) < lowest);
+        let [panels, edges] = if self.gaps { [0, 0] } else { [panels, edges] };
+        for panel in &mut self.panels[panels..] {
+            panel.corners = panel.corners.map(|v| if lowest <= v { sets.find(v) } else { v });
         }
-        for edge in &mut self.edges {
-            edge.ends = edge.ends.map(|v| sets.find(v));
+        for edge in &mut self.edges[edges..] {
+            edge.ends = edge.ends.map(|v| if lowest <= v { sets.find(v) } else { v });
         }
-        let merged: Vec<u32> = pairs.iter().map(|[a, _]| sets.find(*a)).collect();
-        self.suspects.extend(merged);
+        self.gaps = true;
+        self.suspects.extend(pairs.iter().map(|[a, _]| *a));
         for suspect in &mut self.suspects {
             *suspect = sets.find(*suspect);
         }

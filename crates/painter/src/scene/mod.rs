@@ -100,7 +100,7 @@ impl Scene {
             rim: shell.edges.iter().map(|edge| edge.rim_panel().is_some()).collect(),
             nodes: Vec::new(),
             bounds,
-            encloses: shell.is_closed() && volume(shell) > 0.0,
+            encloses: shell.is_closed() && volume(shell, &planes) > 0.0,
             exact: false,
             planes,
         };
@@ -246,10 +246,11 @@ fn plane(shell: &Shell, panel: &Panel, span: f64) -> Plane {
     }
 }
 
-/// Six times the enclosed volume, by its sign.
-fn volume(shell: &Shell) -> f64 {
+/// Three times the enclosed volume, negative when the outside is inside.
+fn volume(shell: &Shell, planes: &[Plane]) -> f64 {
     let Some(from) = shell.points.first() else { return 0.0 };
     (0..index(shell.panels.len()))
+        .filter(|&k| planes[k as usize].exists())
         .map(|k| (shell.corner_points(k)[0] - *from).dot(shell.area_vector(k)))
         .sum()
 }

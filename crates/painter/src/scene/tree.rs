@@ -12,11 +12,13 @@ use super::{
 };
 use crate::picture::index;
 
-/// Cells with at most so many pieces are ordered by panel planes. Smaller cells divide more panels along the cells' walls,
-/// greater ones take longer; around here the pieces to draw and the time to build are both low.
-const CELL: usize = 16;
-/// A divided piece counts as much as so many pieces by which the two sides differ.
-const DIVIDED: usize = 4;
+/// Among more pieces than this only walls are tried, as long as they make headway: evenness counts there, for the time it takes
+/// to build. Among fewer, dividing none comes first, and panels' own planes before walls: the walk is no longer for being uneven.
+const CELL: usize = 64;
+/// Among many pieces, a divided one counts as much as so many by which the two sides differ.
+const DIVIDED: usize = 6;
+/// Walls are weighed by so many of the pieces.
+const SAMPLE: usize = 512;
 /// So many panels are tried for the plane that divides fewest others.
 const TRIED: usize = 32;
 
@@ -32,12 +34,21 @@ pub(crate) struct Node {
     pub(crate) count: u32,
 }
 
+/// A plane to part pieces by.
+struct Choice {
+    normal: Vector,
+    offset: f64,
+    owner: u32,
+    divided: usize,
+    cost: usize,
+}
+
 struct Task {
     pieces: Vec<u32>,
     /// The parent and which child of it; none for the root.
     under: Option<(u32, usize)>,
     /// Whether walls are worth a try.
-    cells: bool,
+    walls: bool,
 }
 
 pub(super) struct Grower {
@@ -81,27 +92,22 @@ impl Grower {
         let mut tasks = vec![Task {
             pieces: (0..index(self.pieces.all.len())).collect(),
             under: None,
-            cells: true,
+            walls: true,
         }];
         while let Some(task) = tasks.pop() {
-            let Some(&any) = task.pieces.first() else { continue };
+            if task.pieces.is_empty() {
+                continue;
+            }
             let id = index(self.nodes.len());
             if let Some((parent, child)) = task.under {
                 self.nodes[parent as usize].children[child] = id;
             }
-            let mut cells = task.cells && task.pieces.len() > CELL;
-            let wall = cells.then(|| self.wall(&task.pieces)).flatten();
-            let (normal, offset, owner) = wall.map_or_else(
-                || {
-                    cells = false;
-                    let owner = self
-                        .divider(&task.pieces)
-                        .unwrap_or(self.pieces.all[any as usize].panel);
-                    let plane = self.planes[owner as usize];
-                    (plane.normal, plane.offset, owner)
-                },
-                |(normal, offset)| (normal, offset, NONE),
-            );
+            let Some(Choice {
+                normal, offset, owner, ..
+            }) = self.choose(&task.pieces, task.walls)
+            else {
+                continue;
+            };
             let first = index(self.order.len());
             if self.pieces.all.len() > self.room {
                 self.exact = false;
@@ -121,23 +127,39 @@ impl Grower {
                 first,
                 count: index(self.order.len()) - first,
             });
+            let count = task.pieces.len();
             for (child, pieces) in [parted.before, parted.behind].into_iter().enumerate() {
                 tasks.push(Task {
+                    // Of many pieces a sample is weighed: should a wall part nothing, or no wall be good, only panels are tried.
+                    walls: pieces.len() <= CELL || (task.walls && owner == NONE && pieces.len() < count),
                     pieces,
                     under: Some((id, child)),
-                    cells,
                 });
             }
         }
     }
 
-    /// The plane that parts pieces most evenly while dividing few; none when none does well.
-    ///
-    /// Tried are axis-aligned planes, and planes upright on a panel along one of its sides: where a surface bends gently these
-    /// run between two rows of panels for a long way.
-    fn wall(&self, pieces: &[u32]) -> Option<(Vector, f64)> {
-        let count = pieces.len();
-        let middles: Vec<Vector> = pieces
+    /// The plane, and the panel whose it is ([`NONE`] for a wall), that parts pieces most evenly while dividing few.
+    fn choose(&self, pieces: &[u32], walls: bool) -> Option<Choice> {
+        let mut best: Option<Choice> = None;
+        let small = pieces.len() <= CELL;
+        if small {
+            self.try_panels(pieces, &mut best);
+        }
+        if walls && best.as_ref().is_none_or(|best| best.divided > 0) {
+            self.try_walls(pieces, &mut best);
+        }
+        if best.is_none() {
+            self.try_panels(pieces, &mut best);
+        }
+        best
+    }
+
+    /// Tries axis-aligned planes, and planes along the sides of panels, upright on the panel or standing vertically: where a
+    /// surface bends gently, and in a sum of two curves, these run between two rows of panels for a long way.
+    fn try_walls(&self, pieces: &[u32], best: &mut Option<Choice>) {
+        let sample: Vec<u32> = pieces.iter().copied().step_by(pieces.len().div_ceil(SAMPLE)).collect();
+        let middles: Vec<Vector> = sample
             .iter()
             .map(|&piece| {
                 let corners = self.pieces.corners_of(piece);
@@ -145,70 +167,68 @@ impl Grower {
                 (a + b) * 0.5
             })
             .collect();
-        let mut tried = Vec::with_capacity(16);
-        let mut order: Vec<usize> = (0..count).collect();
-        for (axis, normal) in [Vector::X, Vector::Y, Vector::Z].into_iter().enumerate() {
+        let mut order: Vec<usize> = (0..sample.len()).collect();
+        for (axis, along) in [Vector::X, Vector::Y, Vector::Z].into_iter().enumerate() {
             let by_place = |a: &usize, b: &usize| middles[*a][axis].total_cmp(&middles[*b][axis]).then(a.cmp(b));
-            let (_, &mut middle, _) = order.select_nth_unstable_by(count / 2, by_place);
-            let piece = pieces[middle];
+            let (_, &mut middle, _) = order.select_nth_unstable_by(sample.len() / 2, by_place);
+            let piece = sample[middle];
             let corners = self.pieces.corners_of(piece);
             let upright = self.planes[self.pieces.all[piece as usize].panel as usize].normal;
             for (k, &from) in corners.iter().enumerate() {
                 let to = corners[(k + 1) % corners.len()];
                 let [from, to] = [from, to].map(|v| self.pieces.points[v as usize]);
-                let across = upright.cross(to - from).normalize_or_zero();
-                if across != Vector::ZERO {
-                    tried.push((across, across.dot(from)));
+                // Axis-aligned planes at a corner too, not through the middle: in regular shells whole rows end there.
+                for normal in [along, upright.cross(to - from), Vector::Z.cross(to - from)] {
+                    let normal = normal.normalize_or_zero();
+                    if normal != Vector::ZERO {
+                        self.weigh(&sample, normal, normal.dot(from), NONE, best);
+                    }
                 }
-                // At a corner, not through the middle: in regular shells whole rows end there.
-                tried.push((normal, from[axis]));
             }
         }
-        let slack = self.pieces.slack;
-        let mut best: Option<(usize, Vector, f64)> = None;
-        for (normal, offset) in tried {
-            let (mut before, mut behind) = (0, 0);
-            for &piece in pieces {
-                let [least, most] = self.pieces.heights(piece, normal, offset);
-                before += usize::from(most > slack);
-                behind += usize::from(least < -slack);
-            }
-            let divided = (before + behind).saturating_sub(count);
-            let most = before.max(behind);
-            let cost = most - before.min(behind) + DIVIDED * divided;
-            if most * 10 <= count * 8 && best.is_none_or(|(least, ..)| cost < least) {
-                best = Some((cost, normal, offset));
-            }
-        }
-        best.map(|(_, normal, offset)| (normal, offset))
     }
 
-    /// The panel whose plane divides the fewest pieces, and of those the one that parts them most evenly.
-    fn divider(&self, pieces: &[u32]) -> Option<u32> {
-        let step = pieces.len().div_ceil(TRIED).max(1);
-        let slack = self.pieces.slack;
-        let mut best: Option<(usize, u32)> = None;
-        for &candidate in pieces.iter().step_by(step) {
+    /// Tries the planes of panels themselves. One of them always makes headway: its own pieces are done with.
+    fn try_panels(&self, pieces: &[u32], best: &mut Option<Choice>) {
+        for &candidate in pieces.iter().step_by(pieces.len().div_ceil(TRIED).max(1)) {
             let panel = self.pieces.all[candidate as usize].panel;
             let plane = self.planes[panel as usize];
-            let (mut before, mut behind) = (0_usize, 0_usize);
-            for &piece in pieces {
-                if self.pieces.all[piece as usize].panel != panel {
-                    let [least, most] = self.pieces.heights(piece, plane.normal, plane.offset);
-                    before += usize::from(most > slack);
-                    behind += usize::from(least < -slack);
-                }
-            }
-            let divided = (before + behind).saturating_sub(pieces.len() - 1);
-            let cost = divided * 2 * DIVIDED + before.abs_diff(behind);
-            if best.is_none_or(|(least, _)| cost < least) {
-                best = Some((cost, panel));
-                if cost <= 1 {
-                    break;
-                }
+            self.weigh(pieces, plane.normal, plane.offset, panel, best);
+            if best.as_ref().is_some_and(|best| best.divided == 0) {
+                break;
             }
         }
-        best.map(|(_, panel)| panel)
+    }
+
+    fn weigh(&self, pieces: &[u32], normal: Vector, offset: f64, owner: u32, best: &mut Option<Choice>) {
+        let slack = self.pieces.slack;
+        let weight = if pieces.len() <= CELL { 2 * CELL } else { DIVIDED };
+        let enough = best.as_ref().map_or(usize::MAX, |best| best.cost);
+        let (mut before, mut behind, mut divided) = (0_usize, 0_usize, 0_usize);
+        for &piece in pieces {
+            if self.pieces.all[piece as usize].panel == owner {
+                continue;
+            }
+            let [least, most] = self.pieces.heights(piece, normal, offset);
+            let sides = [most > slack, least < -slack];
+            before += usize::from(sides[0]);
+            behind += usize::from(sides[1]);
+            divided += usize::from(sides[0] && sides[1]);
+            if divided * weight >= enough {
+                return;
+            }
+        }
+        let cost = divided * weight + before.abs_diff(behind);
+        let headway = owner != NONE || before.max(behind) * 10 <= pieces.len() * 8;
+        if headway && cost < enough {
+            *best = Some(Choice {
+                normal,
+                offset,
+                owner,
+                divided,
+                cost,
+            });
+        }
     }
 
     /// Packs nodes and pieces into the scene, in the order in which they are met.
