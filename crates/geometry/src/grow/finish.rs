@@ -40,8 +40,11 @@ pub(super) fn finish(
         }
     }
     let (mut tees, mut seams) = mesh.split_seams(shape.tolerances.join_mm);
-    mesh.join_rims(&mesh.rim_edges(), join_mm, findings);
-    let mut pinches = mesh.part_fans(&mesh.rim_edges(), &mut tees);
+    let mut border = mesh.rim_edges();
+    if mesh.join_rims(&border, join_mm, findings) {
+        border = mesh.rim_edges();
+    }
+    let mut pinches = mesh.part_fans(&border, &mut tees);
     compact(&mut mesh, &mut tees, &mut seams, &mut pinches);
     // A coordinate that is not finite makes the sum so.
     if !mesh.points.iter().map(|p| p.0).sum::<crate::Vector>().is_finite() {
@@ -172,43 +175,41 @@ fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut 
         return;
     }
     let mut used = vec![false; mesh.points.len()];
-    for panel in &mesh.panels {
-        for corner in panel.corners {
-            used[corner as usize] = true;
-        }
+    for corner in mesh.panels.iter().flat_map(|p| p.corners) {
+        used[corner as usize] = true;
     }
     for vertex in tees.iter().flat_map(|t| &t.vertices) {
         used[*vertex as usize] = true;
     }
-    if !mesh.crowded.is_empty() || mesh.edges.iter().any(|e| e.panels == [NONE; 2]) {
+    if !mesh.crowded.is_empty() {
         let numbers = renumber(mesh.edges.iter().map(|e| e.panels != [NONE; 2]));
-        mesh.edges.retain(|e| e.panels != [NONE; 2]);
         for crowded in &mut mesh.crowded {
             crowded.edge = numbers[crowded.edge as usize];
         }
         mesh.crowded.sort_by_key(|c| c.edge);
     }
+    mesh.edges.retain(|e| e.panels != [NONE; 2]);
     if used.contains(&false) {
         let numbers = renumber(used.iter().copied());
         let first = as_index(used.iter().position(|used| !used).unwrap_or(0));
-        let number = |v: u32| if v < first { v } else { numbers[v as usize] };
         let mut at = 0;
         mesh.points.retain(|_| {
             at += 1;
             used[at - 1]
         });
-        for panel in &mut mesh.panels {
-            panel.corners = panel.corners.map(number);
-        }
-        for edge in &mut mesh.edges {
-            edge.ends = edge.ends.map(number);
+        let corners = mesh.panels.iter_mut().flat_map(|p| &mut p.corners);
+        for vertex in corners.chain(mesh.edges.iter_mut().flat_map(|e| &mut e.ends)) {
+            // Most of a shell lies before the first gap.
+            if first < *vertex {
+                *vertex = numbers[*vertex as usize];
+            }
         }
         let lists = tees
             .iter_mut()
             .map(|t| &mut t.vertices)
             .chain(seams.iter_mut().map(|s| &mut s.vertices));
         for vertex in lists.chain(pinches.iter_mut().map(|p| &mut p.vertices)).flatten() {
-            *vertex = number(*vertex);
+            *vertex = numbers[*vertex as usize];
         }
     }
 }

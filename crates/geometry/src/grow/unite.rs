@@ -51,11 +51,11 @@ impl Mesh {
         let panels = self.panels.partition_point(|p| highest_of(&p.corners) < lowest);
         let edges = self.edges.partition_point(|e| highest_of(&e.ends) < lowest);
         let [panels, edges] = if self.gaps { [0, 0] } else { [panels, edges] };
-        for panel in &mut self.panels[panels..] {
-            panel.corners = panel.corners.map(|v| if lowest <= v { sets.find(v) } else { v });
-        }
-        for edge in &mut self.edges[edges..] {
-            edge.ends = edge.ends.map(|v| if lowest <= v { sets.find(v) } else { v });
+        let corners = self.panels[panels..].iter_mut().flat_map(|p| &mut p.corners);
+        for vertex in corners.chain(self.edges[edges..].iter_mut().flat_map(|e| &mut e.ends)) {
+            if lowest <= *vertex {
+                *vertex = sets.find(*vertex);
+            }
         }
         self.gaps = true;
         self.suspects.extend(pairs.iter().map(|[a, _]| *a));
