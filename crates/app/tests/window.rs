@@ -126,6 +126,11 @@ fn dragging_a_point_of_a_parametric_start_frees_it_in_one_undo_step() {
     let at = picture_place(&harness, path.placed[1]);
     drag(&mut harness, at, egui::vec2(20.0, 20.0));
     assert_eq!(harness.state().state().shape().start.kind(), "zigzag");
+    let dropped = picture_place(&harness, point(harness.state(), 1));
+    assert!(
+        (dropped - (at + egui::vec2(20.0, 20.0))).length() < 0.5,
+        "the point stays under the pointer: {dropped:?}"
+    );
     harness.state().send(Command::Undo);
     harness.run();
     assert_eq!(**harness.state().state().design(), design);

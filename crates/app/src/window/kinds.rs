@@ -57,7 +57,7 @@ pub(super) const KINDS: [Kind; 9] = [
         name: "Polar form",
         new_name: "New polar form",
         hint: "Equal ribs round a pole.",
-        courses: None,
+        courses: Some(5),
         usual: polar,
     },
     Kind {

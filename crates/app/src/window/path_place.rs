@@ -33,8 +33,15 @@ impl PlacedPath {
             own.pop();
         }
         let placement = shape.placement;
-        let shift = placement.shift + lift(shape, shell);
-        let placed = own.iter().map(|p| Point(turned(&placement) * p.0 + shift)).collect();
+        // The own frame is the one that the path has once it is free: a drag that frees it goes on in the same frame.
+        let lifted = own_movement(&placement, lift(shape, shell));
+        for point in &mut own {
+            *point += lifted;
+        }
+        let placed = own
+            .iter()
+            .map(|p| Point(turned(&placement) * p.0 + placement.shift))
+            .collect();
         Some(Self {
             own,
             placed,
