@@ -83,7 +83,7 @@ fn free(parts: u32) -> Shape {
         .copied()
         .chain(zag[1..].iter().map(|p| end + (*p - zag[0])))
         .collect();
-    let mut path = FreePath::from_points(&both, false);
+    let mut path = FreePath::from_points(&both, false).expect("a path of finite points");
     for (k, letter) in path.letters.iter_mut().enumerate() {
         letter.role = if k < parts as usize {
             zonewright_geometry::Role::Zig
