@@ -25,8 +25,8 @@ pub(super) struct Key {
     light: bool,
 }
 
-/// Beyond this many panels edges are left out while the picture is being turned: what reaches software OpenGL is what
-/// costs (measured: 10,000 panels with edges take three times as long as without).
+/// Beyond this many panels edges are left out while the picture is dragged: the triangles that reach software OpenGL are what
+/// costs (a probe of 10,000 panels took 29 ms a frame filled, 93 ms with four edge strips each).
 const LIGHT_BEYOND: usize = 8000;
 
 /// The camera before there is anything to look at.
