@@ -13,26 +13,23 @@ impl Mesh {
         if suspects.is_empty() {
             return Vec::new();
         }
-        let mut suspect = vec![false; self.points.len()];
+        // One bit a vertex: the whole set stays in the cache while all panels and edges are asked.
+        let mut bits = vec![0_u64; self.points.len() / 64 + 1];
         for v in suspects {
-            suspect[v as usize] = true;
+            bits[v as usize / 64] |= 1 << (v % 64);
         }
+        let suspect = |v: &u32| bits[*v as usize / 64] >> (v % 64) & 1 == 1;
         let mut corners: Vec<(u32, u32)> = Vec::new();
         for (panel, p) in (0_u32..).zip(&self.panels) {
-            corners.extend(p.corners.iter().filter(|v| suspect[**v as usize]).map(|v| (*v, panel)));
+            corners.extend(p.corners.iter().filter(|v| suspect(v)).map(|v| (*v, panel)));
         }
         for tee in tees.iter() {
-            corners.extend(
-                tee.vertices
-                    .iter()
-                    .filter(|v| suspect[**v as usize])
-                    .map(|v| (*v, tee.panel)),
-            );
+            corners.extend(tee.vertices.iter().filter(|v| suspect(v)).map(|v| (*v, tee.panel)));
         }
         let mut ties: Vec<(u32, u32)> = Vec::new();
         for (edge, e) in (0_u32..).zip(&self.edges) {
             if e.panels != [NONE; 2] {
-                ties.extend(e.ends.iter().filter(|v| suspect[**v as usize]).map(|v| (*v, edge)));
+                ties.extend(e.ends.iter().filter(|v| suspect(v)).map(|v| (*v, edge)));
             }
         }
         corners.sort_unstable();

@@ -46,11 +46,11 @@ pub(super) fn finish(
     }
     let mut pinches = mesh.part_fans(&border, &mut tees);
     compact(&mut mesh, &mut tees, &mut seams, &mut pinches);
-    // A coordinate that is not finite makes the sum so.
-    if !mesh.points.iter().map(|p| p.0).sum::<crate::Vector>().is_finite() {
+    let (lowest, finite) = lowest(&mesh.points);
+    if !finite {
         return Err(Finding::new(Code::NotFinite, Place::Design));
     }
-    let lift = if word.grounded { -lowest(&mesh.points) } else { 0.0 };
+    let lift = if word.grounded { -lowest } else { 0.0 };
     let placed = Placed::new(&shape.placement, lift);
     if !placed.is_nothing() {
         for point in &mut mesh.points {
@@ -77,11 +77,13 @@ pub(super) fn finish(
     Ok(shell)
 }
 
-fn lowest(points: &[Point]) -> f64 {
-    points
-        .iter()
-        .fold(f64::INFINITY, |low, p| if p.0.z < low { p.0.z } else { low })
-        .min(f64::MAX)
+/// The lowest z, and whether all coordinates are finite: one that is not makes the sum so.
+fn lowest(points: &[Point]) -> (f64, bool) {
+    let start = (f64::MAX, crate::Vector::ZERO);
+    let (low, sum) = points.iter().fold(start, |(low, sum), p| {
+        (if p.0.z < low { p.0.z } else { low }, sum + p.0)
+    });
+    (if points.is_empty() { 0.0 } else { low }, sum.is_finite())
 }
 
 fn report(shell: &Shell, findings: &mut Vec<Finding>) {

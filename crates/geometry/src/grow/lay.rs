@@ -103,13 +103,14 @@ impl Front {
             }
         }
         mesh.close_course(course, before);
-        // Around a closed front's seam the candidates are out of order, or there twice.
-        if next
-            .first()
-            .zip(next.last())
-            .is_some_and(|(first, last)| *first + 1 == count || *last == 0 || last <= first)
-        {
-            next.sort_unstable();
+        // Around a closed front's seam a candidate may stand at the wrong end, or there twice.
+        if 1 < next.len() {
+            if next[0] + 1 == count {
+                next.rotate_left(1);
+            }
+            if next.last() == Some(&0) {
+                next.rotate_right(1);
+            }
             next.dedup();
         }
         next.retain(|at| {
