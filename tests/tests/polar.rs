@@ -74,6 +74,7 @@ const F1: Fixture = Fixture {
     ],
 };
 
+#[expect(clippy::approx_constant, reason = "the figure as the source prints it")]
 const F2: Fixture = Fixture {
     ribs: 8,
     pitch_deg: 45.0,

@@ -9,8 +9,8 @@ use zonewright_geometry::{
     Start, StepId, VName, Vector, Vs, grow,
     grow::open_vs,
     start::{
-        ColumnForm, Curve, CurveShape, FreePath, HelicalForm, LoopForm, PolarBy, PolarForm, RibbonForm, RibbonFrom,
-        TranslationForm,
+        AxisClass, ColumnForm, Curve, CurveShape, FreePath, HelicalForm, LoopForm, PolarBy, PolarForm, RibbonForm,
+        RibbonFrom, Star, StarLength, StarLetter, StarPath, StarSolid, TranslationForm,
     },
 };
 use zonewright_tests::{
@@ -163,6 +163,18 @@ fn records() -> Vec<Shape> {
             rise_mm: 80.0,
             turn: 1,
         }),
+        Start::StarPath(StarPath {
+            star: Star::Icosahedral(vec![AxisClass::FiveFold]),
+            unit_mm: 100.0,
+            closed: false,
+            letters: [0, 1, 2, 3, 4, 0]
+                .map(|axis| StarLetter {
+                    axis,
+                    sign: Sign::Plus,
+                    length: StarLength::Golden(0),
+                })
+                .to_vec(),
+        }),
         Start::Helical(HelicalForm {
             ribs: 6,
             turn: 2,
@@ -217,6 +229,21 @@ fn free_points_grow_the_same_panels() {
         }
         assert!(shift.x.hypot(shift.y) < 1e-12, "{kind}");
     }
+}
+
+#[test]
+fn a_star_solid_made_of_free_points_keeps_its_silhouette() {
+    // Free points do not keep to the hull; what is kept is the word: the same places, the same letters.
+    let solid = Start::StarSolid(StarSolid {
+        star: Star::Cubic(vec![AxisClass::ThreeFold]),
+        edge_mm: 100.0,
+    });
+    let word = solid.first_word().expect("the star has axes");
+    let free = Start::Zigzag(solid.to_free().expect("the star has axes"));
+    let path = free.first_word().expect("a path");
+    assert_eq!(path.nodes(), word.nodes());
+    let indices = |w: &zonewright_geometry::start::FirstWord| w.letters.iter().map(|l| l.index).collect::<Vec<_>>();
+    assert_eq!(indices(&path), indices(&word));
 }
 
 #[test]
