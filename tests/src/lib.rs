@@ -5,6 +5,7 @@
 
 pub mod closed_forms;
 pub mod look;
+pub mod polar_fixtures;
 pub mod zonohedron;
 
 use zonewright_geometry::{
