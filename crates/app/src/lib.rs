@@ -4,3 +4,4 @@ pub mod command_line;
 pub mod document;
 pub mod import;
 pub mod report;
+pub mod window;

@@ -1,4 +1,4 @@
-//! The zonewright program: the command line.
+//! The zonewright program: the command line, or the window.
 
 use std::process::ExitCode;
 
@@ -15,5 +15,8 @@ fn main() -> ExitCode {
     if let Some(Err(error)) = file.as_deref().map(read_design) {
         return fail(&error.to_string());
     }
-    fail("no window can be opened by this build; everything also works without one: see zonewright --help")
+    match zonewright::window::run(file.as_deref()) {
+        Ok(()) => ExitCode::SUCCESS,
+        Err(what) => fail(&what),
+    }
 }

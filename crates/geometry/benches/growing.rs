@@ -2,12 +2,14 @@
 //!
 //! `cargo bench -p zonewright-geometry --bench growing`
 //!
-//! Each line: the median of several runs of both in turn, and their ratio.
+//! Each line: the median of several runs of both in turn, and their ratio. Every run is a process of its own, so that both work in
+//! fresh memory, as a program does that grows a shell once.
 
 #![expect(clippy::print_stdout, reason = "a bench prints its figures")]
 
 use std::{
     hint::black_box,
+    process::Command,
     time::{Duration, Instant},
 };
 
@@ -108,40 +110,94 @@ fn timed<T>(work: impl FnOnce() -> T) -> (Duration, T) {
     (start.elapsed(), result)
 }
 
-fn median(mut times: Vec<Duration>) -> Duration {
-    times.sort_unstable();
+fn median(mut times: Vec<f64>) -> f64 {
+    times.sort_by(f64::total_cmp);
     times[times.len() / 2]
 }
 
-fn compare(name: &str, shape: &Shape) {
-    let (shell, findings): (Shell, _) = grow(shape);
-    assert!(!shell.panels.is_empty(), "{name}: {findings:?}");
-    let [v, p, e] = [shell.points.len(), shell.panels.len(), shell.edges.len()];
-    drop(shell);
-    let (mut grown, mut written) = (Vec::new(), Vec::new());
-    for _ in 0..RUNS {
-        written.push(timed(|| baseline(v, p, e)).0);
+fn cases() -> [(&'static str, Shape); 4] {
+    [
+        ("translation 10k", translation(100)),
+        ("translation 1M", translation(1000)),
+        ("polar, splices 10k", polar_with_splices(100)),
+        ("polar, splices 1M", polar_with_splices(1030)),
+    ]
+}
+
+/// Prints how many vertices, panels and edges a case has.
+fn count(case: usize) {
+    let (shell, findings): (Shell, _) = grow(&cases()[case].1);
+    assert!(!shell.panels.is_empty(), "{findings:?}");
+    println!("{} {} {}", shell.points.len(), shell.panels.len(), shell.edges.len());
+}
+
+/// One piece of work: growing, or with counts the bare loop.
+fn one(case: usize, counts: [usize; 3]) -> Duration {
+    let (_, shape) = &cases()[case];
+    if counts[0] == 0 {
         let (time, result) = timed(|| grow(shape));
-        grown.push(time);
-        drop(result);
+        drop(black_box(result));
+        time
+    } else {
+        timed(|| baseline(counts[0], counts[1], counts[2])).0
     }
-    let [grown, written] = [median(grown), median(written)].map(|t| t.as_secs_f64() * 1e3);
+}
+
+fn peak_kb() -> u64 {
+    let status = std::fs::read_to_string("/proc/self/status").unwrap_or_default();
+    let line = status.lines().find_map(|l| l.strip_prefix("VmHWM:")).unwrap_or("0 kB");
+    line.trim().trim_end_matches(" kB").parse().unwrap_or(0)
+}
+
+/// Runs this program again as a child with these words, and reads the numbers that it prints.
+fn ask(words: &[String]) -> Vec<f64> {
+    let program = std::env::current_exe().expect("this program has a path");
+    let output = Command::new(program).args(words).output().expect("a child starts");
+    let text = String::from_utf8_lossy(&output.stdout);
+    text.split_whitespace().filter_map(|word| word.parse().ok()).collect()
+}
+
+fn compare(case: usize, name: &str) {
+    let counts = ask(&["count".into(), case.to_string()]);
+    let [v, p, e] = [counts[0], counts[1], counts[2]];
+    let words = |counts: [f64; 3]| {
+        let mut words = vec!["one".to_string(), case.to_string()];
+        words.extend(counts.iter().map(|c| format!("{c:.0}")));
+        words
+    };
+    let (mut grown, mut written, mut peaks) = (Vec::new(), Vec::new(), [0.0, 0.0]);
+    for _ in 0..RUNS {
+        let base = ask(&words([v, p, e]));
+        let own = ask(&words([0.0; 3]));
+        written.push(base[0]);
+        grown.push(own[0]);
+        peaks = [own[1], base[1]];
+    }
+    let [grown, written] = [median(grown), median(written)].map(|t| t * 1e3);
+    let bytes = v * 24.0 + p * 28.0 + e * 16.0;
     println!(
-        "{name:<22} {p:>9} panels  grow {grown:8.1} ms  baseline {written:8.1} ms  ratio {:5.2}",
-        grown / written
+        "{name:<20} {p:>8} panels  grow {grown:7.1} ms  baseline {written:7.1} ms  ratio {:5.2}   peak {:6.1} MB  baseline {:6.1} MB  \
+         bytes written {:5.1} MB",
+        grown / written,
+        peaks[0] / 1024.0,
+        peaks[1] / 1024.0,
+        bytes / 1048576.0
     );
 }
 
 fn main() {
-    compare("translation 10k", &translation(100));
-    compare("translation 1M", &translation(1000));
-    compare("polar, splices 10k", &polar_with_splices(100));
-    compare("polar, splices 1M", &polar_with_splices(960));
-    if let Ok(status) = std::fs::read_to_string("/proc/self/status") {
-        let peak = status.lines().find(|l| l.starts_with("VmHWM"));
-        println!(
-            "peak memory of this process: {}",
-            peak.unwrap_or("unknown").trim_start_matches("VmHWM:").trim()
-        );
+    let words: Vec<String> = std::env::args().skip(1).filter(|w| w != "--bench").collect();
+    let number = |k: usize| words.get(k).and_then(|w| w.parse::<usize>().ok()).unwrap_or(0);
+    match words.first().map(String::as_str) {
+        Some("count") => count(number(1)),
+        Some("one") => {
+            let time = one(number(1), [number(2), number(3), number(4)]);
+            println!("{} {}", time.as_secs_f64(), peak_kb());
+        }
+        _ => {
+            for (case, (name, _)) in cases().iter().enumerate() {
+                compare(case, name);
+            }
+        }
     }
 }

@@ -2,8 +2,6 @@
 //!
 //! Pure: everything comes out as text or bytes; nothing here opens a file or a window.
 
-#![cfg_attr(test, expect(clippy::unwrap_used, reason = "a test may stop where it stands"))]
-
 pub mod bevel;
 pub mod export;
 pub mod family;

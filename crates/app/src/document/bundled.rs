@@ -1,4 +1,4 @@
-//! The designs that come with the program.
+//! The designs that come with the program: the commissions of one fishing village's waterfront.
 
 /// Name and text of each bundled design; the first is the demo that an empty window shows.
 #[must_use]
@@ -9,21 +9,24 @@ pub const fn bundled() -> &'static [(&'static str, &'static str)] {
             include_str!("../../../../assets/designs/plant-house.ron"),
         ),
         (
-            "Stage canopy",
-            include_str!("../../../../assets/designs/stage-canopy.ron"),
+            "Ferry steps canopy",
+            include_str!("../../../../assets/designs/ferry-steps-canopy.ron"),
         ),
         (
-            "Climbing column",
-            include_str!("../../../../assets/designs/climbing-column.ron"),
+            "Market lantern",
+            include_str!("../../../../assets/designs/market-lantern.ron"),
         ),
         (
-            "Helical lantern",
-            include_str!("../../../../assets/designs/helical-lantern.ron"),
+            "Tide column",
+            include_str!("../../../../assets/designs/tide-column.ron"),
         ),
-        ("Star solid", include_str!("../../../../assets/designs/star-solid.ron")),
         (
-            "Folded screen",
-            include_str!("../../../../assets/designs/folded-screen.ron"),
+            "Harbour office screen",
+            include_str!("../../../../assets/designs/harbour-office-screen.ron"),
+        ),
+        (
+            "Ice house vent",
+            include_str!("../../../../assets/designs/ice-house-vent.ron"),
         ),
     ]
 }

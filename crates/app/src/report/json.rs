@@ -2,7 +2,6 @@
 
 use serde::Serialize;
 use zonewright_shop::{
-    family::Hand,
     parts::{Mate, PartEdge, PartPanel, Parts},
     text::{MM2_PER_M2, MM3_PER_M3},
 };
@@ -46,7 +45,7 @@ struct Panel<'a> {
     part_mark: &'a str,
     zones: [u32; 2],
     family: u32,
-    hand: Option<&'static str>,
+    hand: &'static str,
     course: i32,
     corners_mm: Vec<[f64; 3]>,
     sides_mm: Vec<f64>,
@@ -121,10 +120,7 @@ impl Report {
             part_mark: part.part_mark.as_str(),
             zones: shell.panel_zones(at),
             family: Parts::family_number(part.family),
-            hand: match part.hand {
-                Hand::None => None,
-                hand => Some(hand.letter()),
-            },
+            hand: part.hand.word(),
             course: shell.panels[at as usize].course,
             corners_mm: part.outline().map(|v| shell.points[v as usize].to_array()).collect(),
             sides_mm: part.sides_mm().collect(),

@@ -183,6 +183,13 @@ impl Alphabet {
             meeting_of_parallel(a, b)
         }
     }
+    /// Whether two letters run out and back along one line: a spur or a fold.
+    #[inline]
+    pub(super) fn is_back_on_itself(&self, zig: u32, zag: u32) -> bool {
+        // Most are told by the sign of one product.
+        self.vector(zig).dot(self.vector(zag)) < 0.0 && matches!(self.meeting(zig, zag), Meeting::Spur | Meeting::Fold)
+    }
+
     /// The letters of one family in the order they were made: same maker, sign and role at birth.
     pub(super) fn family(&self, of: u32) -> impl Iterator<Item = u32> + '_ {
         let key = |l: &Letter| (l.maker, l.sign, l.born);

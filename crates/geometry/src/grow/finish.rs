@@ -40,8 +40,11 @@ pub(super) fn finish(
         }
     }
     let (mut tees, mut seams) = mesh.split_seams(shape.tolerances.join_mm);
-    mesh.join_rims(&mesh.rim_edges(), join_mm, findings);
-    let mut pinches = mesh.part_fans(&mesh.rim_edges(), &mut tees);
+    let mut border = mesh.rim_edges();
+    if mesh.join_rims(&border, join_mm, findings) {
+        border = mesh.rim_edges();
+    }
+    let mut pinches = mesh.part_fans(&border, &mut tees);
     compact(&mut mesh, &mut tees, &mut seams, &mut pinches);
     // A coordinate that is not finite makes the sum so.
     if !mesh.points.iter().map(|p| p.0).sum::<crate::Vector>().is_finite() {
@@ -172,54 +175,69 @@ fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut 
         return;
     }
     let mut used = vec![false; mesh.points.len()];
-    for panel in &mesh.panels {
-        for corner in panel.corners {
-            used[corner as usize] = true;
-        }
+    for corner in mesh.panels.iter().flat_map(|p| p.corners) {
+        used[corner as usize] = true;
     }
     for vertex in tees.iter().flat_map(|t| &t.vertices) {
         used[*vertex as usize] = true;
     }
-    if !mesh.crowded.is_empty() || mesh.edges.iter().any(|e| e.panels == [NONE; 2]) {
-        let numbers = renumber(mesh.edges.iter().map(|e| e.panels != [NONE; 2]));
-        mesh.edges.retain(|e| e.panels != [NONE; 2]);
-        for crowded in &mut mesh.crowded {
-            crowded.edge = numbers[crowded.edge as usize];
-        }
-        mesh.crowded.sort_by_key(|c| c.edge);
+    let edges = fill_gaps(&mut mesh.edges, |_, e| e.panels != [NONE; 2]);
+    for crowded in &mut mesh.crowded {
+        crowded.edge = edges.of(crowded.edge);
     }
-    if used.contains(&false) {
-        let numbers = renumber(used.iter().copied());
-        let first = as_index(used.iter().position(|used| !used).unwrap_or(0));
-        let number = |v: u32| if v < first { v } else { numbers[v as usize] };
-        let mut at = 0;
-        mesh.points.retain(|_| {
-            at += 1;
-            used[at - 1]
-        });
-        for panel in &mut mesh.panels {
-            panel.corners = panel.corners.map(number);
-        }
-        for edge in &mut mesh.edges {
-            edge.ends = edge.ends.map(number);
-        }
-        let lists = tees
-            .iter_mut()
-            .map(|t| &mut t.vertices)
-            .chain(seams.iter_mut().map(|s| &mut s.vertices));
-        for vertex in lists.chain(pinches.iter_mut().map(|p| &mut p.vertices)).flatten() {
-            *vertex = number(*vertex);
+    mesh.crowded.sort_by_key(|c| c.edge);
+    let vertices = fill_gaps(&mut mesh.points, |v, _| used[v]);
+    if vertices.moved.is_empty() {
+        return;
+    }
+    let corners = mesh.panels.iter_mut().flat_map(|p| &mut p.corners);
+    let ends = mesh.edges.iter_mut().flat_map(|e| &mut e.ends);
+    let tees = tees.iter_mut().flat_map(|t| &mut t.vertices);
+    let seams = seams.iter_mut().flat_map(|s| &mut s.vertices);
+    let pinches = pinches.iter_mut().flat_map(|p| &mut p.vertices);
+    for vertex in corners.chain(ends) {
+        *vertex = vertices.of(*vertex);
+    }
+    for vertex in tees.chain(seams).chain(pinches) {
+        *vertex = vertices.of(*vertex);
+    }
+}
+
+/// Where the last items went when they filled gaps before them.
+struct Moved {
+    /// How many items are left.
+    kept: u32,
+    /// New numbers of those that stood at `kept` and behind.
+    moved: Vec<u32>,
+}
+
+impl Moved {
+    fn of(&self, number: u32) -> u32 {
+        if number < self.kept {
+            number
+        } else {
+            self.moved[(number - self.kept) as usize]
         }
     }
 }
 
-/// New numbers for what is kept; [`NONE`] for the rest.
-fn renumber(kept: impl Iterator<Item = bool>) -> Vec<u32> {
-    let mut next = 0;
-    kept.map(|kept| {
-        let number = if kept { as_index(next) } else { NONE };
-        next += usize::from(kept);
-        number
-    })
-    .collect()
+/// Takes out what is not kept and fills the gaps with the last items: all but the last keep their numbers, so that few references change.
+fn fill_gaps<T: Copy>(items: &mut Vec<T>, keep: impl Fn(usize, &T) -> bool) -> Moved {
+    let gaps: Vec<usize> = (0..items.len()).filter(|k| !keep(*k, &items[*k])).collect();
+    let kept = items.len() - gaps.len();
+    let mut moved = vec![NONE; gaps.len()];
+    let mut free = gaps.iter().take_while(|gap| **gap < kept);
+    for from in kept..items.len() {
+        if gaps.binary_search(&from).is_err()
+            && let Some(gap) = free.next()
+        {
+            items[*gap] = items[from];
+            moved[from - kept] = as_index(*gap);
+        }
+    }
+    items.truncate(kept);
+    Moved {
+        kept: as_index(kept),
+        moved,
+    }
 }

@@ -14,7 +14,9 @@ impl Mesh {
     }
 
     /// Joins those of the given rim edges whose ends lie within `within_mm` of each other, edge to edge. Rims that touch only at a point stay apart.
-    pub(super) fn join_rims(&mut self, rims: &[u32], within_mm: f64, findings: &mut Vec<Finding>) {
+    ///
+    /// Returns whether any were.
+    pub(super) fn join_rims(&mut self, rims: &[u32], within_mm: f64, findings: &mut Vec<Finding>) -> bool {
         let mut vertices: Vec<u32> = rims.iter().flat_map(|e| self.edges[*e as usize].ends).collect();
         vertices.sort_unstable();
         vertices.dedup();
@@ -53,8 +55,9 @@ impl Mesh {
         }
         self.merge_vertices(&pairs);
         self.gaps |= !joins.is_empty();
-        let mut disagreeing = Vec::new();
+        let (mut disagreeing, mut joined) = (Vec::new(), false);
         for [kept, gone] in joins.into_iter().chain(self.edges_between_the_same()) {
+            joined = true;
             if self.edges[gone as usize].panels != [NONE; 2] && self.merge_edges(kept, gone) {
                 disagreeing.push(kept);
             }
@@ -63,6 +66,7 @@ impl Mesh {
             let count = disagreeing.len() as f64;
             findings.push(Finding::new(Code::SidesDisagree, Place::Edges(disagreeing)).with(count, None, Unit::Count));
         }
+        joined
     }
 }
 

@@ -41,12 +41,9 @@ impl Front {
         };
         let zigs = self.slots.iter().filter(|s| s.role == Role::Zig).count();
         let every_meeting = zigs * (self.slots.len() - zigs);
-        if courses == Courses::UntilStill {
-            let more = every_meeting.min(MAX_PANELS - mesh.panels.len().min(MAX_PANELS));
-            mesh.points.reserve(more);
-            mesh.panels.reserve(more);
-            mesh.edges.reserve(2 * more);
-        }
+        // Room for all that may come: what stays unused is never touched.
+        let most = every_meeting.min(wanted.saturating_mul(self.slots.len() / 2));
+        mesh.reserve(most.min(MAX_PANELS - mesh.panels.len().min(MAX_PANELS)));
         let (mut meetings, mut passes_without_panel) = (0, 0);
         let mut active = self.open_after_spurs(spurs, alphabet, mesh, None);
         for _ in 0..wanted {
@@ -132,8 +129,7 @@ impl Front {
     /// Whether an open V is left alone: a spur that is not crossed, or an unequal fold that is not.
     fn held(&self, at: usize, spurs: Spurs, alphabet: &Alphabet) -> bool {
         let Some(behind) = self.after(at) else { return true };
-        let meeting = alphabet.meeting(self.slots[at].letter, self.slots[behind].letter);
-        spurs != Spurs::Cross && matches!(meeting, Meeting::Spur | Meeting::Fold)
+        spurs != Spurs::Cross && alphabet.is_back_on_itself(self.slots[at].letter, self.slots[behind].letter)
     }
 
     /// The open Vs that laying would fill, after retracting where that is the policy.

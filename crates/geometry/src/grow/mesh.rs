@@ -37,6 +37,13 @@ pub(super) struct Mesh {
 }
 
 impl Mesh {
+    /// Makes room for this many more panels.
+    pub(super) fn reserve(&mut self, panels: usize) {
+        self.points.reserve(panels);
+        self.panels.reserve(panels);
+        self.edges.reserve(2 * panels);
+    }
+
     pub(super) fn add_point(&mut self, at: Point) -> u32 {
         let index = as_index(self.points.len());
         self.points.push(at);

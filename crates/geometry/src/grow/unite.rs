@@ -45,17 +45,25 @@ impl Mesh {
             sets.unite(*a, *b);
         }
         // Only vertices that give up their number matter, and none of them is in what was made before the lowest of them.
-        let gone = pairs.iter().flatten().copied().filter(|v| sets.find(*v) != *v);
-        let Some(lowest) = gone.min() else { return };
+        let mut gone: Vec<u32> = pairs
+            .iter()
+            .flatten()
+            .copied()
+            .filter(|v| sets.find(*v) != *v)
+            .collect();
+        gone.sort_unstable();
+        let [Some(&lowest), Some(&highest)] = [gone.first(), gone.last()] else {
+            return;
+        };
         let highest_of = |of: &[u32]| of.iter().copied().max().unwrap_or(0);
         let panels = self.panels.partition_point(|p| highest_of(&p.corners) < lowest);
         let edges = self.edges.partition_point(|e| highest_of(&e.ends) < lowest);
         let [panels, edges] = if self.gaps { [0, 0] } else { [panels, edges] };
-        for panel in &mut self.panels[panels..] {
-            panel.corners = panel.corners.map(|v| if lowest <= v { sets.find(v) } else { v });
-        }
-        for edge in &mut self.edges[edges..] {
-            edge.ends = edge.ends.map(|v| if lowest <= v { sets.find(v) } else { v });
+        let corners = self.panels[panels..].iter_mut().flat_map(|p| &mut p.corners);
+        for vertex in corners.chain(self.edges[edges..].iter_mut().flat_map(|e| &mut e.ends)) {
+            if lowest <= *vertex && *vertex <= highest {
+                *vertex = sets.find(*vertex);
+            }
         }
         self.gaps = true;
         self.suspects.extend(pairs.iter().map(|[a, _]| *a));

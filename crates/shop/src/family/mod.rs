@@ -51,7 +51,16 @@ pub enum Hand {
 }
 
 impl Hand {
-    /// `L`, `R`, or nothing.
+    /// `L`, `R`, or `none`: the word of the lists and of the report.
+    #[must_use]
+    pub const fn word(self) -> &'static str {
+        match self {
+            Self::None => "none",
+            hand => hand.letter(),
+        }
+    }
+
+    /// `L`, `R`, or nothing: the end of a part mark.
     #[must_use]
     pub const fn letter(self) -> &'static str {
         match self {

@@ -49,7 +49,7 @@ pub fn families_csv(shell: &Shell, parts: &Parts) -> String {
         let [short, long] = diagonals(shell, first);
         table.text(family.mark);
         table.count(Parts::family_number(index) as usize);
-        table.text(family.hand.letter());
+        table.text(family.hand.word());
         match family.twin.and_then(|t| parts.families.get(t as usize)) {
             Some(twin) => table.text(twin.mark),
             None => table.empty(),

@@ -67,7 +67,7 @@ fn panel_cells(table: &mut Table, shell: &Shell, parts: &Parts, index: u32, pane
     table.text(panel.mark);
     table.text(panel.part_mark);
     table.count(Parts::family_number(panel.family) as usize);
-    table.text(panel.hand.letter());
+    table.text(panel.hand.word());
     table.text(joined(shell.panel_zones(index).iter().map(|&z| zone_mark(z))));
     table.whole(shell.panels[index as usize].course);
     table.count(panel.edges.len());

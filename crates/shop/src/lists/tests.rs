@@ -55,7 +55,7 @@ fn panels_of_the_polar_nine() {
     assert!(near(number(row, "area_m2"), 0.0897882383, 5e-7));
     assert_eq!(
         (row["part_mark"].as_str(), row["family"].as_str(), row["hand"].as_str()),
-        ("P3", "3", "")
+        ("P3", "3", "none")
     );
     let mut bevels: Vec<f64> = ["a", "b", "c", "d"]
         .iter()

@@ -1,0 +1,227 @@
+//! The window: `logic` changes the state, `ui` draws it and sends commands.
+
+use std::path::PathBuf;
+
+use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
+
+use super::{
+    command::{Command, Sender},
+    derived::Counts,
+    execute, menu,
+    panels::{self, Cx},
+    path_box, picture, prompts, search,
+    state::State,
+    strip,
+    widgets::Widgets,
+    worker::Worker,
+};
+use crate::document::Design;
+
+/// The window.
+#[derive(Debug)]
+pub struct App {
+    state: State,
+    sender: Sender,
+    widgets: Widgets,
+    title: String,
+    dark: Option<bool>,
+}
+
+impl App {
+    /// The window on a design, with its worker and the system's dialogs.
+    #[must_use]
+    pub fn new(ctx: &egui::Context, design: Design, path: Option<PathBuf>) -> Self {
+        let mut app = Self::on(ctx, State::new(design, path, Worker::start(ctx)));
+        app.state.dialogs.system = Some(ctx.clone());
+        app
+    }
+
+    /// The window on a design for tests: slow stages are worked out at once, and the system is asked nothing.
+    #[must_use]
+    pub fn new_headless(ctx: &egui::Context, design: Design) -> Self {
+        Self::on(ctx, State::new(design, None, Worker::Inline(None)))
+    }
+
+    fn on(ctx: &egui::Context, state: State) -> Self {
+        state.theme.apply(ctx);
+        Self {
+            state,
+            sender: Sender::default(),
+            widgets: Widgets::default(),
+            title: String::new(),
+            dark: None,
+        }
+    }
+
+    /// Remembers in this file which design is open.
+    #[must_use]
+    pub fn with_session(mut self, session: Option<PathBuf>) -> Self {
+        self.state.session = session;
+        self
+    }
+
+    /// Says something when the window opens.
+    #[must_use]
+    pub fn with_message(mut self, message: Option<String>) -> Self {
+        if let Some(text) = message {
+            self.state.complain(text);
+        }
+        self
+    }
+
+    /// The state, to read.
+    #[must_use]
+    pub const fn state(&self) -> &State {
+        &self.state
+    }
+
+    /// Sends a command, as a widget does.
+    pub fn send(&self, command: Command) {
+        self.sender.send(command);
+    }
+
+    /// How often each stage was worked out.
+    #[must_use]
+    pub const fn counts(&self) -> Counts {
+        self.state.derived.counts
+    }
+
+    /// How often a picture was put together.
+    #[must_use]
+    pub const fn pictures(&self) -> u64 {
+        self.widgets.pictures
+    }
+
+    fn shortcuts(&self, ctx: &egui::Context) {
+        let typing = ctx.text_edit_focused();
+        let mut commands = Command::listed();
+        // A shortcut with fewer modifiers also matches the keys of one with more.
+        commands.sort_by_key(|c| c.shortcut().is_none_or(|s| !s.modifiers.shift));
+        for command in commands {
+            let Some(keys) = command.shortcut() else { continue };
+            let of_text = matches!(
+                command,
+                Command::Undo | Command::Redo | Command::AddCourse | Command::RemoveCourse | Command::LayUntilStill
+            );
+            if !(typing && of_text) && ctx.input_mut(|i| i.consume_shortcut(&keys)) {
+                self.sender.send(command);
+            }
+        }
+        if !typing && ctx.input_mut(|i| i.consume_key(Modifiers::COMMAND, Key::Y)) {
+            self.sender.send(Command::Redo);
+        }
+        let popup = egui::Popup::is_any_open(ctx);
+        if !typing && !popup && ctx.input(|i| i.key_pressed(Key::Escape)) {
+            self.sender.send(Command::Dismiss);
+        }
+    }
+
+    fn system_events(&mut self, ctx: &egui::Context) {
+        let dropped = ctx.input(|i| {
+            i.raw
+                .dropped_files
+                .iter()
+                .map(|f| f.path().to_path_buf())
+                .find(|p| !p.as_os_str().is_empty())
+        });
+        if let Some(path) = dropped {
+            self.sender.send(Command::OpenPath(path));
+        }
+        if ctx.input(|i| i.viewport().close_requested()) && !self.state.closing && self.state.history.unsaved() {
+            ctx.send_viewport_cmd(ViewportCommand::CancelClose);
+            self.sender.send(Command::Quit);
+        }
+        if let Some(command) = self.state.dialogs.poll() {
+            self.sender.send(command);
+        }
+    }
+
+    fn show_outside(&mut self, ctx: &egui::Context) {
+        let title = self.state.title();
+        if title != self.title {
+            ctx.send_viewport_cmd(ViewportCommand::Title(title.clone()));
+            self.title = title;
+        }
+        if self.dark != Some(self.state.view.dark) {
+            self.dark = Some(self.state.view.dark);
+            ctx.set_theme(if self.state.view.dark {
+                egui::Theme::Dark
+            } else {
+                egui::Theme::Light
+            });
+        }
+        if self.state.closing {
+            ctx.send_viewport_cmd(ViewportCommand::Close);
+        }
+    }
+
+    /// Works out what follows from the design. When it is worked out anew, the camera may have something to be fitted to.
+    fn follow(&mut self, ctx: &egui::Context) {
+        let now = ctx.input(|i| i.time);
+        let state = &mut self.state;
+        let design = std::sync::Arc::clone(state.design());
+        state.derived.follow(&design, state.history.revision(), now);
+        if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
+            ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
+        }
+        execute::fit_when_pending(state);
+    }
+}
+
+impl eframe::App for App {
+    fn logic(&mut self, ctx: &egui::Context, _frame: &mut eframe::Frame) {
+        self.shortcuts(ctx);
+        self.system_events(ctx);
+        for command in self.sender.take() {
+            execute::run(&mut self.state, command);
+        }
+        // A drag is one undo step; it ends when the button is let go.
+        if !ctx.input(|i| i.pointer.any_down()) {
+            self.state.history.seal();
+        }
+        self.follow(ctx);
+        self.show_outside(ctx);
+    }
+
+    fn ui(&mut self, ui: &mut Ui, _frame: &mut eframe::Frame) {
+        let cx = Cx {
+            state: &self.state,
+            tx: &self.sender,
+        };
+        let sizes = self.state.theme.sizes;
+        let widgets = &mut self.widgets;
+        widgets.over_next = None;
+        let bar = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(sizes.margin, 4));
+        let side = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::same(sizes.margin));
+        Panel::top("menu").frame(bar).show(ui, |ui| menu::menu_ui(cx, ui));
+        Panel::bottom("status")
+            .frame(bar)
+            .show(ui, |ui| prompts::status_ui(cx, ui));
+        Panel::left("start and steps")
+            .frame(side)
+            .default_size(sizes.left)
+            .size_range(sizes.left..=520.0)
+            .show(ui, |ui| panels::left_ui(cx, ui));
+        Panel::right("readouts and findings")
+            .frame(side)
+            .default_size(sizes.right)
+            .size_range(220.0..=480.0)
+            .show(ui, |ui| panels::right_ui(cx, ui));
+        Panel::bottom("strip")
+            .frame(side)
+            .exact_size(sizes.strip)
+            .show(ui, |ui| strip::strip_ui(cx, ui, widgets));
+        CentralPanel::no_frame().frame(side).show(ui, |ui| {
+            prompts::banners_ui(cx, ui);
+            picture::picture_ui(cx, ui, widgets);
+        });
+        search::search_ui(cx, ui, widgets);
+        path_box::path_box_ui(cx, ui, widgets);
+        prompts::unsaved_ui(cx, ui);
+        let moved_on = widgets.over != widgets.over_next;
+        widgets.over = widgets.over_next;
+        if moved_on || !self.sender.is_empty() {
+            ui.ctx().request_repaint();
+        }
+    }
+}

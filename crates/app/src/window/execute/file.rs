@@ -1,0 +1,185 @@
+//! New, open, save, export, quit, and the question about unsaved changes.
+
+use std::{
+    path::{Path, PathBuf},
+    sync::Arc,
+};
+
+use zonewright_geometry::Spurs;
+
+use crate::{
+    document::{self, Design},
+    window::{
+        command::{Command, Unsaved},
+        dialogs::Asked,
+        history::History,
+        kinds, session,
+        state::State,
+    },
+};
+
+/// The ending of design files, without the dot.
+pub(crate) const ENDING: &str = "ron";
+
+/// Carries out a command about files.
+pub(super) fn run(state: &mut State, command: Command) {
+    match command {
+        Command::New(_) | Command::Open | Command::OpenPath(_) | Command::OpenSample | Command::Quit
+            if state.history.unsaved() =>
+        {
+            state.waiting = Some(Box::new(command));
+        }
+        command => run_saved(state, command),
+    }
+}
+
+/// The same, once nothing can get lost any more.
+fn run_saved(state: &mut State, command: Command) {
+    match command {
+        Command::New(kind) => make_new(state, kind),
+        Command::Open => state
+            .dialogs
+            .ask(Asked::Open, state.path.as_deref(), &state.file_name()),
+        Command::OpenPath(path) => open(state, &path),
+        Command::OpenSample => match session::sample() {
+            Ok(design) => show(state, design, None),
+            Err(text) => state.complain(text),
+        },
+        Command::Save => match state.path.clone() {
+            Some(path) => save(state, &path),
+            None => state.dialogs.ask(Asked::Save, None, &state.file_name()),
+        },
+        Command::SaveAs => state
+            .dialogs
+            .ask(Asked::Save, state.path.as_deref(), &state.file_name()),
+        Command::SaveTo(path) => save(state, &with_ending(path)),
+        Command::Export => state
+            .dialogs
+            .ask(Asked::Export, state.path.as_deref(), &state.file_name()),
+        Command::ExportTo(folder) => export(state, &folder),
+        Command::Quit => state.closing = true,
+        Command::Unsaved(answer) => answered(state, answer),
+        Command::Show(design, path) => show(state, *design, path),
+        _ => {}
+    }
+}
+
+fn answered(state: &mut State, answer: Unsaved) {
+    let Some(waiting) = state.waiting.take() else { return };
+    match answer {
+        Unsaved::Stay => state.say("Nothing was closed"),
+        Unsaved::Discard => run_saved(state, *waiting),
+        Unsaved::Save => {
+            state.after_save = Some(waiting);
+            run_saved(state, Command::Save);
+        }
+    }
+}
+
+fn make_new(state: &mut State, word: &str) {
+    let kind = kinds::kind(word);
+    match document::new_design(kind.usual(), kind.courses, Spurs::default()) {
+        Ok(mut design) => {
+            design.units = state.units();
+            show(state, design, None);
+            state.say(format!("A new {}", kind.name.to_lowercase()));
+        }
+        Err(finding) => state.complain(format!("The new design cannot be made: {}.", finding.code.text().what)),
+    }
+}
+
+/// Shows a design in place of the one that is there; its history begins.
+fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
+    let revision = state.history.revision();
+    state.history = History::new(design, true).after(revision);
+    state.path = path;
+    state.message = None;
+    state.view.point = None;
+    state.view.finding = None;
+    state.fit_pending = true;
+    remember(state);
+    state.say(format!("{} is open", state.file_name()));
+}
+
+fn open(state: &mut State, path: &Path) {
+    match document::read_design(path) {
+        Ok(design) => show(state, design, Some(path.to_path_buf())),
+        Err(error) => state.complain(sentence(&format!("{error}. The design in the window was kept."))),
+    }
+}
+
+fn save(state: &mut State, path: &Path) {
+    let design = Arc::clone(state.design());
+    match document::write_design(path, &design) {
+        Ok(()) => {
+            state.history.mark_saved(design);
+            state.path = Some(path.to_path_buf());
+            remember(state);
+            state.say(format!("Saved as {}", path.display()));
+            if let Some(next) = state.after_save.take() {
+                run_saved(state, *next);
+            }
+        }
+        Err(error) => {
+            state.after_save = None;
+            state.complain(sentence(&format!("{error}.")));
+        }
+    }
+}
+
+fn remember(state: &mut State) {
+    let (Some(session), Some(path)) = (&state.session, &state.path) else {
+        return;
+    };
+    if let Err(error) = session::remember(session, path) {
+        let text = format!("{error}; the program will not find this design by itself next time");
+        state.say(text);
+    }
+}
+
+fn export(state: &mut State, folder: &Path) {
+    let derived = &state.derived;
+    if derived.shell.panels.is_empty() {
+        state.complain("There is nothing to export: the shell has no panels. Lay a course.");
+        return;
+    }
+    let files = zonewright_shop::export(&derived.shell, &derived.parts, &[]);
+    let files = match files {
+        Ok(files) => files,
+        Err(error) => return state.complain(error.to_string()),
+    };
+    let count = files.len();
+    match write_all(folder, files) {
+        Ok(()) => state.say(format!("{count} files were written into {}", folder.display())),
+        Err(text) => state.complain(text),
+    }
+}
+
+fn write_all(folder: &Path, files: Vec<(String, Vec<u8>)>) -> Result<(), String> {
+    let unwritten = |path: &Path, cause: std::io::Error| {
+        format!("Cannot write {}: {cause}. Choose another folder.", path.display())
+    };
+    std::fs::create_dir_all(folder).map_err(|cause| unwritten(folder, cause))?;
+    for (name, bytes) in files {
+        let path = folder.join(name);
+        document::write_whole(&path, &bytes).map_err(|cause| unwritten(&path, cause))?;
+    }
+    Ok(())
+}
+
+/// System dialogs may give a name without an ending.
+fn with_ending(path: PathBuf) -> PathBuf {
+    if path.extension().is_some() {
+        path
+    } else {
+        path.with_extension(ENDING)
+    }
+}
+
+/// The same text with a capital letter at its beginning.
+pub(crate) fn sentence(text: &str) -> String {
+    let mut letters = text.chars();
+    letters
+        .next()
+        .map_or_else(String::new, |first| first.to_uppercase().chain(letters).collect())
+}

@@ -1,0 +1,65 @@
+//! The executor: the only code that changes the state of the window.
+
+mod file;
+mod path;
+mod shape;
+mod splice;
+mod steps;
+mod view;
+
+pub(crate) use file::{ENDING, sentence};
+pub(crate) use splice::fresh_splice;
+pub(crate) use view::fit_when_pending;
+
+use super::{command::Command, state::State};
+
+/// Carries a command out.
+pub(super) fn run(state: &mut State, command: Command) {
+    match command {
+        Command::New(_)
+        | Command::Open
+        | Command::OpenPath(_)
+        | Command::OpenSample
+        | Command::Save
+        | Command::SaveAs
+        | Command::SaveTo(_)
+        | Command::Export
+        | Command::ExportTo(_)
+        | Command::Quit
+        | Command::Unsaved(_)
+        | Command::Show(..) => file::run(state, command),
+        Command::Undo => match state.history.undo() {
+            Some(label) => state.say(format!("Undone: {label}")),
+            None => state.say("Nothing to undo"),
+        },
+        Command::Redo => match state.history.redo() {
+            Some(label) => state.say(format!("Redone: {label}")),
+            None => state.say("Nothing to redo"),
+        },
+        Command::AddCourse => steps::add_course(state),
+        Command::RemoveCourse => steps::remove_course(state),
+        Command::LayUntilStill => steps::lay_until_still(state),
+        Command::AddStep(step) => steps::add(state, *step),
+        Command::SetStep(at, step) => steps::set(state, at, *step),
+        Command::MoveStep(from, to) => steps::shift(state, from, to),
+        Command::DeleteStep(at) => steps::delete(state, at),
+        Command::ToggleSplice(side, v) => splice::toggle(state, side, v),
+        Command::SetHand(hand) => state.view.hand = hand,
+        Command::SetKind(kind) => shape::set_kind(state, kind),
+        Command::SetStart(start, field) => shape::set_start(state, *start, field),
+        Command::FreePoints => shape::free_points(state),
+        Command::ShareGap => path::share_gap(state),
+        Command::Path(edit) => path::edit(state, edit),
+        Command::SetPlacement(placement) => shape::set_placement(state, placement),
+        Command::SetOutside(outside) => shape::set_outside(state, outside),
+        Command::FlipOutside => shape::flip_outside(state),
+        Command::SetUnits(units) => shape::set_units(state, units),
+        Command::SwapUnits => shape::swap_units(state),
+        Command::TypePath => {
+            if let Some(asked) = state.dialogs.waiting_for() {
+                state.dialogs.open_own(asked);
+            }
+        }
+        other => view::run(state, other),
+    }
+}

@@ -1,0 +1,107 @@
+//! The start, the placement, the outside, the unit.
+
+use zonewright_geometry::{Outside, Placement, Shape, Start, Vector};
+use zonewright_shop::text::Units;
+
+use super::path::refusal;
+use crate::window::{kinds, path_place, state::State};
+
+/// Changes the kind of start. The steps stay: they say so themselves when they find nothing.
+pub(super) fn set_kind(state: &mut State, word: &'static str) {
+    if state.shape().start.kind() == word {
+        return;
+    }
+    let kind = kinds::kind(word);
+    let start = if word == "zigzag" {
+        state
+            .shape()
+            .start
+            .to_free()
+            .map_or_else(|_| kind.usual(), Start::Zigzag)
+    } else {
+        kind.usual()
+    };
+    state.change(&format!("{} as the start", kind.name), None, |design| {
+        design.shape.start = start;
+        design.shape.outside = Outside::by_rule(&design.shape);
+    });
+    state.view.point = None;
+    state.fit_pending = true;
+    state.say(format!("The start is a {} now", kind.name.to_lowercase()));
+}
+
+/// Replaces the start after a parameter was edited.
+pub(super) fn set_start(state: &mut State, start: Start, field: &'static str) {
+    state.change(&format!("Change {field}"), Some(format!("start {field}")), |design| {
+        design.shape.start = start;
+    });
+}
+
+/// Turns the start into free points, where it stands.
+pub(super) fn free_points(state: &mut State) {
+    if matches!(state.shape().start, Start::Zigzag(_)) {
+        state.say("The start is free points already");
+        return;
+    }
+    match freed(state.shape()) {
+        Ok(shape) => {
+            state.change("Turn into free points", None, |design| design.shape = shape);
+            state.say("The start is free points now; undo brings its parameters back");
+        }
+        Err(text) => state.complain(text),
+    }
+}
+
+/// The same shape with free points. A kind that is lifted to the ground keeps its place: the lift goes into the origin.
+pub(super) fn freed(shape: &Shape) -> Result<Shape, String> {
+    let refused = |finding| refusal("The start cannot be turned into free points", &finding);
+    let mut freed = shape.to_free().map_err(refused)?;
+    let (shell, _) = zonewright_geometry::grow(shape);
+    let lift = path_place::lift(shape, &shell);
+    if let Start::Zigzag(path) = &mut freed.start
+        && lift != Vector::ZERO
+    {
+        path.origin += path_place::own_movement(&shape.placement, lift);
+    }
+    Ok(freed)
+}
+
+/// Moves, turns, scales or mirrors the shell.
+pub(super) fn set_placement(state: &mut State, placement: Placement) {
+    let usable = placement.scale.is_finite() && 0.0 < placement.scale;
+    if !usable {
+        state.say("The scale must be more than 0");
+        return;
+    }
+    state.change("Place the shell", Some("placement".to_owned()), |design| {
+        design.shape.placement = placement;
+    });
+}
+
+/// Sets which side is outside.
+pub(super) fn set_outside(state: &mut State, outside: Outside) {
+    state.change("Flip the outside", None, |design| design.shape.outside = outside);
+}
+
+/// Turns the shell inside out.
+pub(super) fn flip_outside(state: &mut State) {
+    let other = match state.shape().outside {
+        Outside::Grown => Outside::Reversed,
+        Outside::Reversed => Outside::Grown,
+    };
+    set_outside(state, other);
+}
+
+/// Sets the unit in which lengths are shown and typed.
+pub(super) fn set_units(state: &mut State, units: Units) {
+    state.change("Change the unit", None, |design| design.units = units);
+}
+
+/// Millimetres to inches and back.
+pub(super) fn swap_units(state: &mut State) {
+    let other = match state.units() {
+        Units::Mm => Units::Inch,
+        Units::Inch => Units::Mm,
+    };
+    set_units(state, other);
+}

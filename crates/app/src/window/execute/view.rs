@@ -1,0 +1,78 @@
+//! Where one looks from, and everything else that is not part of the design.
+
+use zonewright_geometry::Side;
+use zonewright_painter::{Bounds, Camera, View};
+
+use crate::window::{command::Command, state::State};
+
+/// Carries out a command that leaves the design alone.
+pub(super) fn run(state: &mut State, command: Command) {
+    let view = &mut state.view;
+    match command {
+        Command::Orbit(by) => state.camera.orbit(by.x, by.y),
+        Command::Pan(by) => state.camera.pan(by.x, by.y),
+        Command::Zoom(at, factor) => state.camera.zoom_at([at.x, at.y], factor),
+        Command::Resize(size) => {
+            state.camera.resize([size.x, size.y]);
+            fit_when_pending(state);
+        }
+        Command::Look(to) => look(state, to),
+        Command::SetProjection(projection) => {
+            view.projection = projection;
+            state.camera.projection = projection;
+        }
+        Command::SetFaces(faces) => view.faces = faces,
+        Command::HiddenEdges => view.hidden_edges = !view.hidden_edges,
+        Command::SetColour(colour) => view.colour = colour,
+        Command::SetDragRule(rule) => view.rule = rule,
+        Command::SetSide(side) => view.side = side,
+        Command::SwapSide => {
+            view.side = match view.side {
+                Side::Fore => Side::Aft,
+                Side::Aft => Side::Fore,
+            };
+        }
+        Command::ShowFinding(finding) => view.finding = finding,
+        Command::SelectPoint(point) => view.point = point,
+        Command::SwapTheme => view.dark = !view.dark,
+        Command::Find => state.search = Some(String::new()),
+        Command::Dismiss => dismiss(state),
+        _ => {}
+    }
+}
+
+/// Closes what is open: the search first, then a question, then a message, then what is picked.
+fn dismiss(state: &mut State) {
+    if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
+        return;
+    }
+    if state.message.take().is_none() {
+        state.view.finding = None;
+        state.view.point = None;
+    }
+}
+
+fn bounds(state: &State) -> Option<Bounds> {
+    let path = state.derived.path.iter().flat_map(|p| p.placed.iter().copied());
+    Bounds::of(&state.derived.shell).or_else(|| Bounds::of_points(path))
+}
+
+fn look(state: &mut State, to: View) {
+    let Some(bounds) = bounds(state) else { return };
+    if to == View::Fit {
+        state.camera.fit(&bounds);
+    } else {
+        state.camera = Camera::view(to, state.view.projection, &bounds, state.camera.size);
+    }
+}
+
+/// Fits the camera once there is something to fit it to and a picture to fit it into.
+pub(crate) fn fit_when_pending(state: &mut State) {
+    if state.fit_pending
+        && state.camera.size[0] > 1.0
+        && let Some(bounds) = bounds(state)
+    {
+        state.camera = Camera::view(View::Fit, state.view.projection, &bounds, state.camera.size);
+        state.fit_pending = false;
+    }
+}

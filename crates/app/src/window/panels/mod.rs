@@ -1,0 +1,97 @@
+//! The panels beside the picture.
+
+mod curve_fields;
+mod directions;
+mod findings_panel;
+mod path_table;
+mod placement_panel;
+mod readouts;
+mod star_fields;
+mod start_fields;
+mod start_panel;
+mod step_fields;
+mod steps_panel;
+
+use egui::{ScrollArea, Ui};
+
+use super::{command::Sender, state::State};
+
+/// What a panel reads, and where it sends commands.
+#[derive(Clone, Copy, Debug)]
+pub(super) struct Cx<'a> {
+    /// The state, to read.
+    pub state: &'a State,
+    /// Where commands go.
+    pub tx: &'a Sender,
+}
+
+/// The left panel: the start, its path, the steps, where the shell stands.
+pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
+    ScrollArea::vertical()
+        .auto_shrink(false)
+        .id_salt("left")
+        .show(ui, |ui| {
+            section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
+            section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
+            section(ui, "Steps", true, |ui| steps_panel::steps_ui(cx, ui));
+            section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
+            section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
+        });
+}
+
+/// The right panel: readouts and findings.
+pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
+    ScrollArea::vertical()
+        .auto_shrink(false)
+        .id_salt("right")
+        .show(ui, |ui| {
+            section(ui, "Readouts", true, |ui| readouts::readouts_ui(cx, ui));
+            section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
+        });
+}
+
+/// A section that can be folded away.
+fn section(ui: &mut Ui, title: &str, open: bool, contents: impl FnOnce(&mut Ui)) {
+    egui::CollapsingHeader::new(egui::RichText::new(title).heading())
+        .id_salt(title)
+        .default_open(open)
+        .show_unindented(ui, |ui| {
+            contents(ui);
+            ui.add_space(ui.spacing().item_spacing.y);
+        });
+}
+
+/// A small button whose accessible name is longer than its text.
+fn small(ui: &mut Ui, enabled: bool, text: &str, name: &str) -> bool {
+    let button = ui.add_enabled(enabled, egui::Button::new(text).small());
+    let button = button.on_hover_text(name).on_disabled_hover_text(name);
+    button.accessible_name(name).clicked()
+}
+
+/// What an icon button shows.
+#[derive(Clone, Copy, PartialEq, Eq, Debug)]
+enum Icon {
+    /// A triangle that points up.
+    Up,
+    /// A triangle that points down.
+    Down,
+}
+
+/// A small button with a drawn icon: the fonts have no arrows.
+fn icon(ui: &mut Ui, enabled: bool, icon: Icon, name: &str) -> bool {
+    let side = ui.spacing().interact_size.y * 0.8;
+    let button = egui::Button::new("").small().min_size(egui::vec2(side, side));
+    let button = ui.add_enabled(enabled, button).on_hover_text(name);
+    let colour = ui.style().interact(&button).text_color();
+    let colour = if enabled { colour } else { colour.gamma_multiply(0.4) };
+    let (middle, reach) = (button.rect.center(), side * 0.22);
+    let up = if icon == Icon::Up { -reach } else { reach };
+    let corners = vec![
+        middle + egui::vec2(0.0, up),
+        middle + egui::vec2(reach * 1.2, -up),
+        middle + egui::vec2(-reach * 1.2, -up),
+    ];
+    ui.painter()
+        .add(egui::Shape::convex_polygon(corners, colour, egui::Stroke::NONE));
+    button.accessible_name(name).clicked()
+}

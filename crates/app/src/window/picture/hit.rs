@@ -1,0 +1,46 @@
+//! What is under the pointer: a point of the path, or an open V.
+
+use zonewright_geometry::{OpenV, Point};
+
+use crate::window::state::State;
+
+/// How near the pointer must come to something small, in points.
+const REACH: f32 = 9.0;
+
+/// Something that the pointer is over.
+#[derive(Clone, Copy, PartialEq, Eq, Debug)]
+pub(super) enum Hit {
+    /// A point of the path.
+    Point(usize),
+    /// An open V of the live front, by its place among the open Vs.
+    V(usize),
+}
+
+/// Finds what is at a place of the picture. A point of the path goes before a V; the nearest goes first.
+pub(super) fn at(state: &State, pos: egui::Vec2) -> Option<Hit> {
+    let path = state.derived.path.as_ref();
+    let points = path.map_or(&[][..], |p| &p.placed);
+    let point = nearest(state, pos, points.iter().copied());
+    let vs = state.derived.open_on(state.view.side);
+    point
+        .map(Hit::Point)
+        .or_else(|| nearest(state, pos, vs.iter().map(middle)).map(Hit::V))
+}
+
+/// The middle of the panel that an open V would make: where its dot is.
+pub(super) fn middle(v: &OpenV) -> Point {
+    v.nodes[0] + (v.nodes[2] - v.nodes[0]) * 0.5
+}
+
+fn nearest(state: &State, pos: egui::Vec2, points: impl Iterator<Item = Point>) -> Option<usize> {
+    let lens = state.camera.lens();
+    let mut best: Option<(f32, usize)> = None;
+    for (index, point) in points.enumerate() {
+        let Some(seen) = lens.project(point) else { continue };
+        let far = (egui::Vec2::from(seen.pos) - pos).length();
+        if far <= REACH && best.is_none_or(|(least, _)| far < least) {
+            best = Some((far, index));
+        }
+    }
+    best.map(|(_, index)| index)
+}

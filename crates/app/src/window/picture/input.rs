@@ -1,0 +1,169 @@
+//! Pointer and keys on the picture.
+
+use egui::{Key, PointerButton, Pos2, Rect, Response, Ui, Vec2};
+use zonewright_geometry::{Point, Vector};
+
+use super::hit::{self, Hit};
+use crate::window::{
+    command::Command,
+    panels::Cx,
+    path_edit::PathEdit,
+    path_place::PlacedPath,
+    splice_marks::v_name,
+    widgets::{Drag, Widgets},
+};
+
+/// Points of scrolling that double the size.
+const WHEEL_DOUBLES: f32 = 250.0;
+
+/// Points that an arrow key turns or moves the camera by.
+const KEY_STEP: f32 = 24.0;
+
+/// Turns what pointer and keys do on the picture into commands.
+pub(super) fn handle(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response, widgets: &mut Widgets) {
+    let hovered = response.hover_pos().map(|pos| pos - rect.min);
+    let hit = hovered
+        .filter(|_| widgets.drag.is_none())
+        .and_then(|pos| hit::at(cx.state, pos));
+    if let Some(Hit::V(index)) = hit {
+        widgets.over_next = Some((cx.state.view.side, index));
+    }
+    if hit.is_some() {
+        ui.ctx().set_cursor_icon(egui::CursorIcon::PointingHand);
+    }
+    if response.clicked() {
+        clicked(cx, response, rect);
+    }
+    if response.drag_started() {
+        widgets.drag = begin(cx, ui, rect, response);
+    }
+    if let Some(drag) = widgets.drag {
+        if response.dragged() {
+            drag_on(cx, ui, response, drag);
+        } else {
+            widgets.drag = None;
+        }
+    }
+    if response.contains_pointer() {
+        wheel(cx, ui, rect, response);
+    }
+    if response.has_focus() {
+        keys(cx, ui, rect, response);
+    }
+}
+
+fn clicked(cx: Cx<'_>, response: &Response, rect: Rect) {
+    let Some(pos) = response.interact_pointer_pos() else {
+        return;
+    };
+    match hit::at(cx.state, pos - rect.min) {
+        Some(Hit::Point(point)) => {
+            let picked = cx.state.view.point == Some(point);
+            cx.tx.send(Command::SelectPoint((!picked).then_some(point)));
+        }
+        Some(Hit::V(index)) => {
+            if let Some(name) = v_name(cx.state, cx.state.view.side, index) {
+                cx.tx.send(Command::ToggleSplice(cx.state.view.side, name));
+            }
+        }
+        None => cx.tx.send(Command::SelectPoint(None)),
+    }
+}
+
+fn begin(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) -> Option<Drag> {
+    let shift = ui.input(|i| i.modifiers.shift);
+    if response.drag_started_by(PointerButton::Middle) || (shift && response.drag_started_by(PointerButton::Primary)) {
+        return Some(Drag::Pan);
+    }
+    if !response.drag_started_by(PointerButton::Primary) {
+        return None;
+    }
+    // Where the button went down: the pointer has moved on before it counts as a drag.
+    let from = ui
+        .input(|i| i.pointer.press_origin())
+        .or_else(|| response.interact_pointer_pos())?;
+    let Some(Hit::Point(point)) = hit::at(cx.state, from - rect.min) else {
+        return Some(Drag::Orbit);
+    };
+    let path = cx.state.derived.path.as_ref()?;
+    cx.tx.send(Command::SelectPoint(Some(point)));
+    Some(Drag::Point {
+        point,
+        own: *path.own.get(point)?,
+        placed: *path.placed.get(point)?,
+        from,
+    })
+}
+
+fn drag_on(cx: Cx<'_>, ui: &Ui, response: &Response, drag: Drag) {
+    let by = response.drag_delta();
+    match drag {
+        Drag::Orbit if by != Vec2::ZERO => cx.tx.send(Command::Orbit(by)),
+        Drag::Pan if by != Vec2::ZERO => cx.tx.send(Command::Pan(by)),
+        Drag::Point {
+            point,
+            own,
+            placed,
+            from,
+        } if by != Vec2::ZERO => {
+            let (Some(pos), Some(path)) = (response.interact_pointer_pos(), &cx.state.derived.path) else {
+                return;
+            };
+            let to = own + moved(cx, ui, path, placed, pos - from);
+            let rule = cx.state.view.rule;
+            cx.tx.send(Command::Path(PathEdit::Move { point, to, rule }));
+        }
+        _ => {}
+    }
+}
+
+/// The movement of a dragged point in the path's own frame; while x, y or z is held down, only along that axis.
+fn moved(cx: Cx<'_>, ui: &Ui, path: &PlacedPath, placed: Point, by: Vec2) -> Vector {
+    let across = cx.state.camera.move_in_view_plane(placed, by.x, by.y);
+    let own = path.own_movement(across);
+    let axes = [(Key::X, Vector::X), (Key::Y, Vector::Y), (Key::Z, Vector::Z)];
+    let held = axes.into_iter().find(|(key, _)| ui.input(|i| i.key_down(*key)));
+    held.map_or(own, |(_, axis)| axis * own.dot(axis))
+}
+
+fn wheel(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) {
+    let (scroll, pinch) = ui.input(|i| (i.smooth_scroll_delta().y, i.zoom_delta()));
+    let factor = (scroll / WHEEL_DOUBLES).exp2() * pinch;
+    if factor != 1.0
+        && let Some(pos) = response.hover_pos()
+    {
+        cx.tx.send(Command::Zoom((pos - rect.min).to_pos2(), factor));
+    }
+}
+
+/// Arrows turn, with shift they move along; plus and minus zoom.
+fn keys(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) {
+    ui.memory_mut(|m| {
+        let filter = egui::EventFilter {
+            horizontal_arrows: true,
+            vertical_arrows: true,
+            ..egui::EventFilter::default()
+        };
+        m.set_focus_lock_filter(response.id, filter);
+    });
+    let (by, zoom, shift) = ui.input(|i| {
+        let pressed = |key| {
+            if i.modifiers.command {
+                0.0
+            } else {
+                i.num_presses(key) as f32
+            }
+        };
+        let x = pressed(Key::ArrowRight) - pressed(Key::ArrowLeft);
+        let y = pressed(Key::ArrowDown) - pressed(Key::ArrowUp);
+        let zoom = pressed(Key::Plus) + pressed(Key::Equals) - pressed(Key::Minus);
+        (egui::vec2(x, y) * KEY_STEP, zoom, i.modifiers.shift)
+    });
+    if by != Vec2::ZERO {
+        cx.tx.send(if shift { Command::Pan(by) } else { Command::Orbit(by) });
+    }
+    if zoom != 0.0 {
+        let middle = Pos2::ZERO + rect.size() * 0.5;
+        cx.tx.send(Command::Zoom(middle, 1.25_f32.powf(zoom)));
+    }
+}

@@ -1,0 +1,124 @@
+//! Marks on the picture: points of the path, open Vs, the panel that a V would make, places of findings.
+
+use zonewright_geometry::{Place, Point, Shell, Side};
+use zonewright_painter::{Mark, MarkKind, Tone};
+
+use super::hit;
+use crate::window::{splice_marks, state::State};
+
+/// More marks than this would hide the picture and slow the window down.
+const MOST_MARKS: usize = 2000;
+
+/// All marks.
+pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
+    let mut marks = Vec::new();
+    path_marks(state, &mut marks);
+    v_marks(state, &mut marks);
+    if let Some((side, index)) = over
+        && let Some(v) = state.derived.open_on(side).get(index)
+    {
+        let at = vec![v.nodes[0], v.nodes[1], v.nodes[2], v.new];
+        marks.push(mark(at.clone(), MarkKind::Polygon, Tone::Preview));
+        let outline = [&at[..], &at[..1]].concat();
+        marks.push(line(outline, 1.5, Tone::Preview));
+    }
+    if let Some(finding) = state.view.finding.and_then(|at| state.derived.findings.get(at)) {
+        finding_marks(
+            &state.derived.shell,
+            &finding.place,
+            Tone::Finding(finding.level()),
+            &mut marks,
+        );
+    }
+    marks
+}
+
+const fn mark(at: Vec<Point>, kind: MarkKind, tone: Tone) -> Mark {
+    Mark { at, kind, tone }
+}
+
+const fn line(at: Vec<Point>, width: f32, tone: Tone) -> Mark {
+    mark(at, MarkKind::Line { width, dashed: false }, tone)
+}
+
+fn path_marks(state: &State, marks: &mut Vec<Mark>) {
+    let Some(path) = &state.derived.path else { return };
+    let points: Vec<Point> = path.placed.iter().copied().take(MOST_MARKS).collect();
+    let mut outline = points.clone();
+    if path.closed {
+        outline.extend(points.first().copied());
+    }
+    marks.push(line(outline, 1.5, Tone::Mark));
+    marks.push(mark(points, MarkKind::Dot { radius: 4.0 }, Tone::Mark));
+    if let Some(picked) = state.view.point.and_then(|at| path.placed.get(at)) {
+        let ring = MarkKind::Ring {
+            radius: 7.5,
+            width: 2.0,
+        };
+        marks.push(mark(vec![*picked], ring, Tone::Selection));
+    }
+}
+
+fn v_marks(state: &State, marks: &mut Vec<Mark>) {
+    let vs = state.derived.open_on(state.view.side);
+    let spliced = splice_marks::spliced(state, state.view.side);
+    let mut open = Vec::new();
+    let mut fresh = Vec::new();
+    for (index, v) in vs.iter().enumerate().take(MOST_MARKS) {
+        let dots = if spliced.contains(&index) {
+            &mut fresh
+        } else {
+            &mut open
+        };
+        dots.push(hit::middle(v));
+    }
+    marks.push(mark(
+        open,
+        MarkKind::Ring {
+            radius: 3.5,
+            width: 1.3,
+        },
+        Tone::Preview,
+    ));
+    marks.push(mark(fresh, MarkKind::Dot { radius: 4.0 }, Tone::Preview));
+}
+
+fn finding_marks(shell: &Shell, place: &Place, tone: Tone, marks: &mut Vec<Mark>) {
+    let points = |of: &[u32]| -> Vec<Point> {
+        of.iter()
+            .take(MOST_MARKS)
+            .filter_map(|v| shell.points.get(*v as usize).copied())
+            .collect()
+    };
+    match place {
+        Place::Vertices(vertices) => {
+            let ring = MarkKind::Ring {
+                radius: 9.0,
+                width: 2.5,
+            };
+            marks.push(mark(points(vertices), ring, tone));
+        }
+        Place::Edges(edges) => {
+            for edge in edges
+                .iter()
+                .take(MOST_MARKS)
+                .filter_map(|e| shell.edges.get(*e as usize))
+            {
+                marks.push(line(points(&edge.ends), 3.5, tone));
+            }
+        }
+        Place::Panels(panels) => {
+            for panel in panels
+                .iter()
+                .take(MOST_MARKS)
+                .filter_map(|p| shell.panels.get(*p as usize))
+            {
+                let corners = points(&panel.corners);
+                let outline = [&corners[..], &corners[..1.min(corners.len())]].concat();
+                marks.push(mark(corners, MarkKind::Polygon, tone));
+                marks.push(line(outline, 2.0, tone));
+            }
+        }
+        Place::Design | Place::Parameter(_) | Place::Step(_) => {}
+    }
+}

@@ -1,0 +1,99 @@
+//! Questions and messages: unsaved changes, what went wrong, waiting for the system.
+
+use egui::{Frame, Modal, Ui};
+
+use super::{
+    command::{Command, Unsaved},
+    panels::Cx,
+};
+
+/// A question in the middle of the window, with room round its words.
+pub(super) fn question(ui: &Ui, id: &'static str) -> Modal {
+    Modal::new(egui::Id::unique(id)).frame(Frame::popup(ui.style()).inner_margin(16))
+}
+
+/// Asks about unsaved changes, while something waits for the answer.
+pub(super) fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
+    if cx.state.waiting.is_none() {
+        return;
+    }
+    let modal = question(ui, "unsaved").show(ui.ctx(), |ui| {
+        ui.set_width(380.0);
+        ui.heading("Unsaved changes");
+        ui.label(format!("{} has changes that no file holds.", cx.state.file_name()));
+        ui.add_space(4.0);
+        ui.horizontal(|ui| {
+            for (text, answer) in [
+                ("Save and go on", Unsaved::Save),
+                ("Discard the changes", Unsaved::Discard),
+                ("Stay", Unsaved::Stay),
+            ] {
+                if ui.button(text).clicked() {
+                    cx.tx.send(Command::Unsaved(answer));
+                }
+            }
+        });
+    });
+    if modal.should_close() {
+        cx.tx.send(Command::Unsaved(Unsaved::Stay));
+    }
+}
+
+/// Banners above the picture: what went wrong, and that the system's dialog is open.
+pub(super) fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
+    let colours = cx.state.colours();
+    if let Some(message) = &cx.state.message {
+        let frame = Frame::new()
+            .fill(colours.field())
+            .stroke((1.5, colours.stop()))
+            .corner_radius(4)
+            .inner_margin(8);
+        frame.show(ui, |ui| {
+            ui.with_layout(egui::Layout::right_to_left(egui::Align::Center), |ui| {
+                if ui.button("Close").accessible_name("Close the message").clicked() {
+                    cx.tx.send(Command::Dismiss);
+                }
+                ui.with_layout(
+                    egui::Layout::left_to_right(egui::Align::Center).with_main_wrap(true),
+                    |ui| {
+                        ui.label(&message.text);
+                    },
+                );
+            });
+        });
+    }
+    if let Some(asked) = cx.state.dialogs.waiting_for() {
+        let frame = Frame::new()
+            .fill(colours.field())
+            .stroke((1.0, colours.accent()))
+            .corner_radius(4)
+            .inner_margin(8);
+        frame.show(ui, |ui| {
+            ui.horizontal_wrapped(|ui| {
+                ui.label(format!(
+                    "{}: waiting for the system's dialog, or type a path.",
+                    asked.heading()
+                ));
+                if ui.button("Type a path").clicked() {
+                    cx.tx.send(Command::TypePath);
+                }
+                if ui.button("Cancel").clicked() {
+                    cx.tx.send(Command::Dismiss);
+                }
+            });
+        });
+    }
+}
+
+/// The bar at the bottom: what was done last, and how the pointer works.
+pub(super) fn status_ui(cx: Cx<'_>, ui: &mut Ui) {
+    ui.horizontal(|ui| {
+        let hints = "Drag turns · shift-drag moves · wheel zooms · x, y, z lock an axis";
+        ui.with_layout(egui::Layout::right_to_left(egui::Align::Center), |ui| {
+            ui.weak(hints);
+            ui.with_layout(egui::Layout::left_to_right(egui::Align::Center), |ui| {
+                ui.add(egui::Label::new(&cx.state.status).truncate());
+            });
+        });
+    });
+}

@@ -1,0 +1,143 @@
+//! What the executor changes and what the widgets read.
+
+use std::{path::PathBuf, sync::Arc};
+
+use zonewright_geometry::Shape;
+use zonewright_painter::Camera;
+use zonewright_shop::text::Units;
+
+use super::{
+    command::Command, derived::Derived, dialogs::Dialogs, history::History, theme::Theme, view::ViewState,
+    worker::Worker,
+};
+use crate::document::Design;
+
+/// Something to be said to the user, above the picture, until it is closed.
+#[derive(Clone, PartialEq, Eq, Debug)]
+pub struct Message {
+    /// What went wrong, where, and what to do.
+    pub text: String,
+}
+
+/// The state of the window.
+#[derive(Debug)]
+pub struct State {
+    /// The design and its past.
+    pub history: History,
+    /// The file that the design has.
+    pub path: Option<PathBuf>,
+    /// What is not saved with the design.
+    pub view: ViewState,
+    /// Where one looks from.
+    pub camera: Camera,
+    /// Whether the camera is to be fitted as soon as there is a shell and a size.
+    pub fit_pending: bool,
+    /// What follows from the design.
+    pub derived: Derived,
+    /// Slow stages.
+    pub worker: Worker,
+    /// Questions to the system.
+    pub dialogs: Dialogs,
+    /// What is to be said.
+    pub message: Option<Message>,
+    /// One line about what was done last.
+    pub status: String,
+    /// What waits for the answer about unsaved changes.
+    pub waiting: Option<Box<Command>>,
+    /// What the save that is going on will be followed by.
+    pub after_save: Option<Box<Command>>,
+    /// The text of the command search, while it is open.
+    pub search: Option<String>,
+    /// Whether the window is to close.
+    pub closing: bool,
+    /// Where the session is remembered; none in tests that do not ask for it.
+    pub session: Option<PathBuf>,
+    /// Colours and sizes.
+    pub theme: Theme,
+}
+
+impl State {
+    /// A window on a design.
+    #[must_use]
+    pub fn new(design: Design, path: Option<PathBuf>, worker: Worker) -> Self {
+        let view = ViewState::default();
+        Self {
+            history: History::new(design, true),
+            path,
+            camera: super::picture::first_camera(view.projection),
+            fit_pending: true,
+            view,
+            derived: Derived::new(),
+            worker,
+            dialogs: Dialogs::default(),
+            message: None,
+            status: "Ready".to_owned(),
+            waiting: None,
+            after_save: None,
+            search: None,
+            closing: false,
+            session: None,
+            theme: Theme::bundled(),
+        }
+    }
+
+    /// The design as it is.
+    #[must_use]
+    pub const fn design(&self) -> &Arc<Design> {
+        self.history.now()
+    }
+
+    /// The shape of the design as it is.
+    #[must_use]
+    pub fn shape(&self) -> &Shape {
+        &self.design().shape
+    }
+
+    /// The unit of lengths.
+    #[must_use]
+    pub fn units(&self) -> Units {
+        self.design().units
+    }
+
+    /// Colours of the look that is on.
+    #[must_use]
+    pub const fn colours(&self) -> &super::theme::Colours {
+        self.theme.colours(self.view.dark)
+    }
+
+    /// The title of the window: the file's name, and a dot while something is unsaved.
+    #[must_use]
+    pub fn title(&self) -> String {
+        let name = self.file_name();
+        let dot = if self.history.unsaved() { " •" } else { "" };
+        format!("{name}{dot} – zonewright")
+    }
+
+    /// The name of the file, or what stands for it.
+    #[must_use]
+    pub fn file_name(&self) -> String {
+        let file = self.path.as_ref().and_then(|p| p.file_name());
+        match file {
+            Some(file) => file.to_string_lossy().into_owned(),
+            None if self.design().name.is_empty() => "Untitled".to_owned(),
+            None => self.design().name.clone(),
+        }
+    }
+
+    /// Changes the design: a new undo step, or part of the last one with the same key.
+    pub fn change(&mut self, label: &str, key: Option<String>, edit: impl FnOnce(&mut Design)) {
+        let mut design = Design::clone(self.design());
+        edit(&mut design);
+        self.history.change(design, label, key);
+    }
+
+    /// Says one line in the status bar.
+    pub fn say(&mut self, text: impl Into<String>) {
+        self.status = text.into();
+    }
+
+    /// Says what went wrong; it stays until it is closed.
+    pub fn complain(&mut self, text: impl Into<String>) {
+        self.message = Some(Message { text: text.into() });
+    }
+}

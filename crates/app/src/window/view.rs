@@ -1,0 +1,77 @@
+//! What is not part of the design: where one looks from, what is picked, what is in hand.
+
+use zonewright_geometry::{Direction, Side, Vector, start::DragRule};
+use zonewright_painter::{ColourBy, Faces, Projection, View};
+
+use super::command::Words;
+
+/// What a splice inserts.
+#[derive(Clone, PartialEq, Debug)]
+pub struct Hand {
+    /// The directions, in order.
+    pub directions: Vec<Direction>,
+}
+
+impl Default for Hand {
+    /// One vertical direction of 400 mm: it shows at once, and is easy to edit.
+    fn default() -> Self {
+        Self {
+            directions: vec![Direction::Own(Vector::new(0.0, 0.0, 400.0))],
+        }
+    }
+}
+
+/// The state of the window that is not saved with the design.
+#[derive(Clone, PartialEq, Debug)]
+pub struct ViewState {
+    /// Perspective or parallel.
+    pub projection: Projection,
+    /// How faces are drawn.
+    pub faces: Faces,
+    /// Whether edges behind faces are drawn.
+    pub hidden_edges: bool,
+    /// What colours say.
+    pub colour: ColourBy,
+    /// The live front.
+    pub side: Side,
+    /// The directions in hand.
+    pub hand: Hand,
+    /// The picked point of the path.
+    pub point: Option<usize>,
+    /// What follows a dragged point.
+    pub rule: DragRule,
+    /// The finding that is shown in the picture.
+    pub finding: Option<usize>,
+    /// Whether the look is dark.
+    pub dark: bool,
+}
+
+impl Default for ViewState {
+    fn default() -> Self {
+        Self {
+            projection: Projection::Perspective,
+            faces: Faces::ShadedWithEdges,
+            hidden_edges: false,
+            colour: ColourBy::Zone,
+            side: Side::Fore,
+            hand: Hand::default(),
+            point: None,
+            rule: DragRule::Neighbours,
+            finding: None,
+            dark: false,
+        }
+    }
+}
+
+/// Words of the commands that look from a side.
+#[must_use]
+pub(super) const fn look_words(view: View) -> Words {
+    let (name, hint) = match view {
+        View::Plan => ("Plan", "Looks down from above."),
+        View::Front => ("Front", "Looks from the front, along y."),
+        View::Side => ("Side", "Looks from the side, along x."),
+        View::Iso => ("Iso", "Looks along the diagonal."),
+        View::Fit => ("Fit", "Brings the whole shell into the picture."),
+    };
+    Words { name, hint }
+}

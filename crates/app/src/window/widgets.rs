@@ -1,0 +1,69 @@
+//! What belongs to the widgets alone: half-typed texts, what the pointer is over, a drag that is going on.
+
+use std::path::PathBuf;
+
+use zonewright_geometry::{Point, Side};
+use zonewright_painter::Picture;
+
+/// A drag in the picture.
+#[derive(Clone, Copy, PartialEq, Debug)]
+pub(super) enum Drag {
+    /// The camera turns.
+    Orbit,
+    /// The camera moves along.
+    Pan,
+    /// A point of the path follows the pointer.
+    Point {
+        /// Which.
+        point: usize,
+        /// Where it was, in the path's own frame.
+        own: Point,
+        /// Where it was in the picture.
+        placed: Point,
+        /// Where the pointer was.
+        from: egui::Pos2,
+    },
+}
+
+/// The text of the path box and what it shows.
+#[derive(Debug, Default)]
+pub(super) struct PathText {
+    /// The box that this belongs to.
+    pub serial: u64,
+    /// What is typed.
+    pub text: String,
+    /// The folder whose entries are shown.
+    pub folder: PathBuf,
+    /// Its entries: name, and whether it is a folder.
+    pub entries: Vec<(String, bool)>,
+    /// Whether the typed file is there already.
+    pub exists: bool,
+}
+
+/// The picture as it was put together last, and from what.
+#[derive(Debug, Default)]
+pub(super) struct PictureCache {
+    /// What it was put together from.
+    pub key: Option<super::picture::Key>,
+    /// The picture.
+    pub picture: Picture,
+}
+
+/// State of the widgets.
+#[derive(Debug, Default)]
+pub(super) struct Widgets {
+    /// The path box.
+    pub path: PathText,
+    /// The command search.
+    pub search: String,
+    /// The drag that is going on.
+    pub drag: Option<Drag>,
+    /// The open V that the pointer is over, in the strip or in the picture: its side, and its place among the open Vs.
+    pub over: Option<(Side, usize)>,
+    /// The same, as it is found while this frame is drawn.
+    pub over_next: Option<(Side, usize)>,
+    /// The picture.
+    pub cache: PictureCache,
+    /// How often a picture was put together.
+    pub pictures: u64,
+}
