@@ -1,13 +1,16 @@
 //! Sheets that touch only at a point keep a vertex each.
 
-use super::{mesh::Mesh, unite::Sets};
-use crate::{NONE, Pinch, Tee};
+use super::{
+    mesh::{Mesh, as_index},
+    unite::Sets,
+};
+use crate::{NONE, Pinch};
 
 impl Mesh {
     /// Gives every fan of panels round a suspect vertex a vertex of its own; returns the touches.
     ///
     /// A fan is a set of panels connected by edges at the vertex. The fan of the lowest panel keeps the vertex.
-    pub(super) fn part_fans(&mut self, rims: &[u32], tees: &mut [Tee]) -> Vec<Pinch> {
+    pub(super) fn part_fans(&mut self, rims: &[u32]) -> Vec<Pinch> {
         let mut suspects = core::mem::take(&mut self.suspects);
         suspects.extend(self.busy_rim_vertices(rims));
         if suspects.is_empty() {
@@ -23,7 +26,7 @@ impl Mesh {
         for (panel, p) in (0_u32..).zip(&self.panels) {
             corners.extend(p.corners.iter().filter(|v| suspect(v)).map(|v| (*v, panel)));
         }
-        for tee in tees.iter() {
+        for tee in &self.tees {
             corners.extend(tee.vertices.iter().filter(|v| suspect(v)).map(|v| (*v, tee.panel)));
         }
         let mut ties: Vec<(u32, u32)> = Vec::new();
@@ -43,7 +46,7 @@ impl Mesh {
             let here = ties.next_if(|t| t[0].0 == vertex).unwrap_or_default();
             let panels: Vec<u32> = fan.iter().map(|(_, panel)| *panel).collect();
             let edges: Vec<u32> = here.iter().map(|(_, edge)| *edge).collect();
-            pinches.extend(self.part(vertex, &panels, &edges, tees));
+            pinches.extend(self.part(vertex, &panels, &edges));
         }
         pinches
     }
@@ -58,8 +61,8 @@ impl Mesh {
             .collect()
     }
 
-    fn part(&mut self, vertex: u32, panels: &[u32], edges: &[u32], tees: &mut [Tee]) -> Option<Pinch> {
-        let mut sets = Sets::new(panels.len());
+    fn part(&mut self, vertex: u32, panels: &[u32], edges: &[u32]) -> Option<Pinch> {
+        let mut sets = Sets::over((0..as_index(panels.len())).collect());
         let rank = |panel: u32| panels.binary_search(&panel).ok().and_then(|k| u32::try_from(k).ok());
         for &edge in edges {
             let more = self
@@ -96,7 +99,8 @@ impl Mesh {
             for corner in self.panels[panel as usize].corners.iter_mut().filter(|c| **c == vertex) {
                 *corner = copy;
             }
-            for inner in tees
+            for inner in self
+                .tees
                 .iter_mut()
                 .filter(|t| t.panel == panel)
                 .flat_map(|t| t.vertices.iter_mut())

@@ -7,9 +7,7 @@ use super::{
     place::Placed,
     rims,
 };
-use crate::{
-    Code, Finding, FinishAct, FirstWord, NONE, PanelName, Pinch, Place, Point, Seam, Shell, Side, Tee, Unit, measure,
-};
+use crate::{Code, Finding, FinishAct, FirstWord, NONE, PanelName, Pinch, Place, Point, Shell, Side, Unit, measure};
 
 /// Settles everything that growth left open, and places the shell.
 pub(super) fn finish(
@@ -39,13 +37,13 @@ pub(super) fn finish(
             findings.push(Finding::new(Code::NameLost, place).with(lost as f64, None, Unit::Count));
         }
     }
-    let (mut tees, mut seams) = mesh.split_seams(shape.tolerances.join_mm);
+    mesh.split_seams(shape.tolerances.join_mm);
     let mut border = mesh.rim_edges();
     if mesh.join_rims(&border, join_mm, findings) {
         border = mesh.rim_edges();
     }
-    let mut pinches = mesh.part_fans(&border, &mut tees);
-    compact(&mut mesh, &mut tees, &mut seams, &mut pinches);
+    let mut pinches = mesh.part_fans(&border);
+    compact(&mut mesh, &mut pinches);
     let (lowest, finite) = lowest(&mesh.points);
     if !finite {
         return Err(Finding::new(Code::NotFinite, Place::Design));
@@ -63,9 +61,9 @@ pub(super) fn finish(
         points: mesh.points,
         panels: mesh.panels,
         edges: mesh.edges,
-        tees,
+        tees: mesh.tees,
         crowded: mesh.crowded,
-        seams,
+        seams: mesh.seams,
         pinches,
         zones: alphabet.zones,
         letters: alphabet.letters,
@@ -171,7 +169,7 @@ fn drop_panels(mesh: &mut Mesh, names: &[PanelName], find: impl Fn(&crate::Lette
 }
 
 /// Leaves out vertices and edges that border no panel.
-fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut [Pinch]) {
+fn compact(mesh: &mut Mesh, pinches: &mut [Pinch]) {
     // Every vertex and edge is made with a panel, but for the loose ones.
     if !mesh.gaps && mesh.loose.iter().all(|e| mesh.edges[*e as usize].panels != [NONE; 2]) {
         return;
@@ -180,26 +178,35 @@ fn compact(mesh: &mut Mesh, tees: &mut [Tee], seams: &mut [Seam], pinches: &mut 
     for corner in mesh.panels.iter().flat_map(|p| p.corners) {
         used[corner as usize] = true;
     }
-    for vertex in tees.iter().flat_map(|t| &t.vertices) {
+    for vertex in mesh.tees.iter().flat_map(|t| &t.vertices) {
         used[*vertex as usize] = true;
+    }
+    // A panel names only vertices that were there when it was made, and makes at most one: vertex v is named by no panel before number
+    // v less the vertices made without a panel, and by no edge before twice that. Seams and parted fans do not keep to this.
+    let without_panel = mesh.points.len().saturating_sub(mesh.panels.len());
+    let in_order = mesh.tees.is_empty() && pinches.is_empty();
+    let vertices = fill_gaps(&mut mesh.points, |v, _| used[v]);
+    if !vertices.moved.is_empty() {
+        let first = if in_order {
+            (vertices.kept as usize).saturating_sub(without_panel)
+        } else {
+            0
+        };
+        let panels = first.min(mesh.panels.len());
+        let edges = (2 * first).min(mesh.edges.len());
+        let corners = mesh.panels[panels..].iter_mut().flat_map(|p| &mut p.corners);
+        for vertex in corners.chain(mesh.edges[edges..].iter_mut().flat_map(|e| &mut e.ends)) {
+            *vertex = vertices.of(*vertex);
+        }
     }
     let edges = fill_gaps(&mut mesh.edges, |_, e| e.panels != [NONE; 2]);
     for crowded in &mut mesh.crowded {
         crowded.edge = edges.of(crowded.edge);
     }
     mesh.crowded.sort_by_key(|c| c.edge);
-    let vertices = fill_gaps(&mut mesh.points, |v, _| used[v]);
-    if vertices.moved.is_empty() {
-        return;
-    }
-    let corners = mesh.panels.iter_mut().flat_map(|p| &mut p.corners);
-    let ends = mesh.edges.iter_mut().flat_map(|e| &mut e.ends);
-    let tees = tees.iter_mut().flat_map(|t| &mut t.vertices);
-    let seams = seams.iter_mut().flat_map(|s| &mut s.vertices);
+    let tees = mesh.tees.iter_mut().flat_map(|t| &mut t.vertices);
+    let seams = mesh.seams.iter_mut().flat_map(|s| &mut s.vertices);
     let pinches = pinches.iter_mut().flat_map(|p| &mut p.vertices);
-    for vertex in corners.chain(ends) {
-        *vertex = vertices.of(*vertex);
-    }
     for vertex in tees.chain(seams).chain(pinches) {
         *vertex = vertices.of(*vertex);
     }

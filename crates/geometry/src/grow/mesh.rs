@@ -1,7 +1,7 @@
 //! The mesh while it grows: vertices, panels and edges, and the debts that finishing settles.
 
 use crate::{
-    Edge, NONE, Panel, Point, Side,
+    Edge, NONE, Panel, Point, Seam, Side, Tee,
     shell::{Course, CrowdedEdge},
 };
 
@@ -25,6 +25,10 @@ pub(super) struct Mesh {
     pub(super) edge_links: Vec<[u32; 2]>,
     /// Edges that lie on one line: two before a slide, two after.
     pub(super) slides: Vec<[u32; 4]>,
+    /// Sides that are split, once they are.
+    pub(super) tees: Vec<Tee>,
+    /// Butted seams, once sides are split.
+    pub(super) seams: Vec<Seam>,
     /// Vertices where sheets may touch only at a point: those that a front passes more than once, and merged ones. Everywhere else
     /// a touch shows by four rim edges.
     pub(super) suspects: Vec<u32>,

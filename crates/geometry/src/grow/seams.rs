@@ -13,16 +13,16 @@ struct Stretch {
 }
 
 impl Mesh {
-    /// Splits the edges that lie on one line at each other's ends. Returns the panel sides that were split, and the seams.
+    /// Splits the edges that lie on one line at each other's ends.
     ///
     /// `within_mm`: ends nearer than this along the line are one vertex.
-    pub(super) fn split_seams(&mut self, within_mm: f64) -> (Vec<Tee>, Vec<Seam>) {
+    pub(super) fn split_seams(&mut self, within_mm: f64) {
         let slides = core::mem::take(&mut self.slides);
         if slides.is_empty() {
-            return (Vec::new(), Vec::new());
+            return;
         }
         self.gaps = true;
-        let mut sets = Sets::new(self.edges.len());
+        let mut sets = Sets::over(slides.iter().flatten().copied().collect());
         for [first, rest @ ..] in &slides {
             for other in rest {
                 sets.unite(*first, *other);
@@ -37,15 +37,13 @@ impl Mesh {
                 lines.entry(sets.find(edge)).or_default().push(edge);
             }
         }
-        let (mut tees, mut seams) = (Vec::new(), Vec::new());
         for line in lines.values() {
-            self.split_line(line, within_mm, &mut tees, &mut seams);
+            self.split_line(line, within_mm);
         }
-        tees.sort_by_key(|t| (t.panel, t.side));
-        (tees, seams)
+        self.tees.sort_by_key(|t| (t.panel, t.side));
     }
 
-    fn split_line(&mut self, line: &[u32], within_mm: f64, tees: &mut Vec<Tee>, seams: &mut Vec<Seam>) {
+    fn split_line(&mut self, line: &[u32], within_mm: f64) {
         let vertices = self.vertices_along(line, within_mm);
         let place = |v: u32| {
             vertices
@@ -76,7 +74,8 @@ impl Mesh {
                 if high - low > 1 {
                     has_tee = true;
                     let inner: Vec<u32> = (low + 1..high).map(|k| order[k].1).collect();
-                    tees.extend(self.tee(panel, stretch.edge, inner));
+                    let tee = self.tee(panel, stretch.edge, inner);
+                    self.tees.extend(tee);
                 }
                 for piece in low..high {
                     let ends = [order[piece].1, order[piece + 1].1];
@@ -93,7 +92,7 @@ impl Mesh {
             }
         }
         if has_tee {
-            seams.push(Seam {
+            self.seams.push(Seam {
                 vertices: order.into_iter().map(|(_, v)| v).collect(),
             });
         }
@@ -127,7 +126,7 @@ impl Mesh {
         self.merge_vertices(&pairs);
         if !pairs.is_empty() {
             // The lowest number of a set stands for it; ask an edge what became of its ends.
-            let mut sets = Sets::new(self.points.len());
+            let mut sets = Sets::over(pairs.iter().flatten().copied().collect());
             for [a, b] in pairs {
                 sets.unite(a, b);
             }

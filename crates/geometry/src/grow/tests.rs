@@ -431,6 +431,27 @@ fn linked_zones_count_as_one() {
     assert!(findings.iter().any(|f| f.code == Code::BrokenLink));
 }
 
+#[test]
+fn a_split_side_follows_its_vertices_when_rims_join() {
+    // Found by the property below: a fold that is crossed splits a side, then the rims join and the T's vertex gets another number.
+    let zig = |x: f64, y: f64, z: f64| (Vector::new(x, y, z), Role::Zig);
+    let (up, out) = (zig(0.0, 0.0, 1.0), zig(1.0, 1.0, 0.0));
+    let word = [zig(1.0, 0.0, 0.0), up, up, out, zig(-2.0, -2.0, 0.0), up];
+    let acts = vec![
+        Act::SetRoles(RoleRule::Alternate),
+        lay(1, Spurs::Retract),
+        Act::SetRoles(RoleRule::Alternate),
+        lay(2, Spurs::Cross),
+    ];
+    let mut shape = shape(open_word(&word), acts);
+    for step in &mut shape.steps {
+        step.side = Side::Aft;
+    }
+    let (shell, _) = grow(&shape);
+    assert_eq!(shell.check(0.001), Ok(()));
+    assert_eq!(shell.tees.len(), 1);
+}
+
 mod properties {
     use proptest::prelude::*;
 

@@ -3,20 +3,45 @@
 use super::mesh::{Mesh, as_index};
 use crate::NONE;
 
-/// A forest of sets over 0..n; the lowest member stands for each.
+/// A forest of sets over numbers, the lowest of which stands for each; numbers that were not named are alone.
 #[derive(Clone, Debug)]
 pub(super) struct Sets {
+    /// The numbers named, ascending.
+    members: Vec<u32>,
+    /// By rank.
     parent: Vec<u32>,
 }
 
 impl Sets {
-    pub(super) fn new(count: usize) -> Self {
-        Self {
-            parent: (0..as_index(count)).collect(),
+    /// Every number that is to be united with another must be among these.
+    pub(super) fn over(mut members: Vec<u32>) -> Self {
+        members.sort_unstable();
+        members.dedup();
+        let parent = (0..as_index(members.len())).collect();
+        Self { members, parent }
+    }
+
+    /// The number that stands for a number's set.
+    pub(super) fn find(&mut self, of: u32) -> u32 {
+        match self.members.binary_search(&of) {
+            Ok(rank) => {
+                let root = self.root(as_index(rank));
+                self.members[root as usize]
+            }
+            Err(_) => of,
         }
     }
 
-    pub(super) fn find(&mut self, of: u32) -> u32 {
+    pub(super) fn unite(&mut self, a: u32, b: u32) {
+        let [Ok(a), Ok(b)] = [a, b].map(|v| self.members.binary_search(&v)) else {
+            debug_assert!(false, "only members are united");
+            return;
+        };
+        let [a, b] = [a, b].map(|rank| self.root(as_index(rank)));
+        self.parent[a.max(b) as usize] = a.min(b);
+    }
+
+    fn root(&mut self, of: u32) -> u32 {
         let mut root = of;
         while self.parent[root as usize] != root {
             root = self.parent[root as usize];
@@ -27,11 +52,6 @@ impl Sets {
         }
         root
     }
-
-    pub(super) fn unite(&mut self, a: u32, b: u32) {
-        let [a, b] = [self.find(a), self.find(b)];
-        self.parent[a.max(b) as usize] = a.min(b);
-    }
 }
 
 impl Mesh {
@@ -40,7 +60,7 @@ impl Mesh {
         if pairs.is_empty() {
             return;
         }
-        let mut sets = Sets::new(self.points.len());
+        let mut sets = Sets::over(pairs.iter().flatten().copied().collect());
         for [a, b] in pairs {
             sets.unite(*a, *b);
         }
@@ -67,8 +87,10 @@ impl Mesh {
         }
         self.gaps = true;
         self.suspects.extend(pairs.iter().map(|[a, _]| *a));
-        for suspect in &mut self.suspects {
-            *suspect = sets.find(*suspect);
+        let on_tees = self.tees.iter_mut().flat_map(|t| &mut t.vertices);
+        let on_seams = self.seams.iter_mut().flat_map(|s| &mut s.vertices);
+        for vertex in self.suspects.iter_mut().chain(on_tees).chain(on_seams) {
+            *vertex = sets.find(*vertex);
         }
     }
 
@@ -108,7 +130,7 @@ impl Mesh {
         if links.is_empty() {
             return;
         }
-        let mut sets = Sets::new(self.edges.len());
+        let mut sets = Sets::over(links.iter().flatten().copied().collect());
         for link in &links {
             let [a, b] = link.map(|e| sets.find(e));
             if a != b {
