@@ -2,7 +2,7 @@
 
 use zonewright_geometry::{Start, Vector};
 
-/// Volume of the zonohedron: the sum of |det| over all triples (McMullen 1971; Shephard 1974; theory.md, section 1).
+/// Volume of the zonohedron: the sum of |det| over all triples (McMullen 1971; Shephard 1974; docs/checks.md).
 #[must_use]
 pub fn volume(generators: &[Vector]) -> f64 {
     let mut sum = 0.0;
@@ -15,7 +15,7 @@ pub fn volume(generators: &[Vector]) -> f64 {
     sum
 }
 
-/// Area of the zonohedron: twice the sum of |a x b| over all pairs (theory.md, section 1).
+/// Area of the zonohedron: twice the sum of |a x b| over all pairs (docs/checks.md).
 #[must_use]
 pub fn area(generators: &[Vector]) -> f64 {
     2.0 * pairs(generators, |a, b| a.cross(b).length())
@@ -31,7 +31,7 @@ pub fn pairs(generators: &[Vector], of: impl Fn(Vector, Vector) -> f64) -> f64 {
     sum
 }
 
-/// Width along x, y and z: the sum of the generators' shares (theory.md, section 1).
+/// Width along x, y and z: the sum of the generators' shares (docs/checks.md).
 #[must_use]
 pub fn size(generators: &[Vector]) -> Vector {
     generators.iter().map(|g| g.abs()).sum()

@@ -1,6 +1,6 @@
-//! The polar fixtures F1, F2 and F3 of theory.md, section 9: derived there, and checked against convex hulls.
+//! The polar fixtures F1, F2 and F3 of docs/checks.md: derived there, and checked against convex hulls.
 
-/// A fixture of theory.md, section 9; lengths, areas and volumes in its unit.
+/// A fixture of docs/checks.md; lengths, areas and volumes in its unit.
 pub struct Fixture {
     /// n.
     pub ribs: u32,

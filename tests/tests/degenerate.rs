@@ -1,6 +1,6 @@
 //! Spurs, folds, parallel letters, crowns started at one V and the rims that they leave.
 //!
-//! Source: the house plan, section 2 (degenerate Vs, worked cases of closing a rim); theory.md, section 6.
+//! Source: docs/checks.md, worked cases.
 
 use zonewright_geometry::{
     Act, Angle, Direction, Point, Role, Shape, Side, Sign, Spurs, Start, VName, Vector, Vs, grow,
@@ -119,7 +119,7 @@ fn opposite_and_equal_is_retracted_held_or_crossed() {
 
 #[test]
 fn parallel_letters_make_no_panel() {
-    // Zigs and zags of which one pair is parallel: every other pair makes its panel once (theory.md, section 6).
+    // Zigs and zags of which one pair is parallel: every other pair makes its panel once (docs/checks.md).
     let zigs = [Vector::new(3.0, 0.0, 0.0), Vector::new(0.0, 2.0, 1.0)];
     let zags = [Vector::new(5.0, 0.0, 0.0), Vector::new(1.0, 1.0, 4.0)];
     let mut path = open_path(&[zigs, zags].concat());

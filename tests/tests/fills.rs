@@ -1,7 +1,7 @@
 //! Fills, helicoids, helical solids, columns and curvature.
 //!
-//! Sources: Elnitsky (1997) and theory.md, section 6 (fills of words), section 5 (fixtures H6 and HP, derived), section 8
-//! (Gauss-Bonnet, figures derived); the house plan, section 2, for helical solids and columns.
+//! Sources: Elnitsky (1997) for fills of words; derived figures (docs/checks.md) for the fixtures H6 and HP and for Gauss-Bonnet; its worked
+//! cases for helical solids and columns.
 
 use core::f64::consts::{PI, TAU};
 
@@ -247,7 +247,7 @@ fn deficits_add_up_to_a_full_turn_times_the_euler_number() {
             vec![lay(courses, Spurs::Retract)],
         ))
     };
-    // Inside, in degrees; the rim has the rest of 360 (theory.md, section 8). Levels 1..5 hold half of the whole turn of 720.
+    // Inside, in degrees; the rim has the rest of 360 (docs/checks.md). Levels 1..5 hold half of the whole turn of 720.
     for (courses, inside) in [(3, 133.166_550_681_9), (5, 360.0), (8, 720.0)] {
         let shell = polar(courses);
         let deficits = measure::angle_deficits(&shell);

@@ -1,6 +1,6 @@
 //! The zonohedra with one kind of face, and the rhombic enneacontahedron, at edge 1 mm.
 //!
-//! Sources: Bilinski (1960), Gruenbaum (2010), and the figures of theory.md, section 3 (marked there as published or derived).
+//! Sources: Bilinski (1960), Gruenbaum (2010), and the figures of docs/checks.md (marked there as published or derived).
 //! Each solid is grown in every way the program has: as the solid of a star, from ribs, spliced, exchange by exchange.
 
 use std::collections::BTreeMap;
@@ -169,7 +169,7 @@ fn rhombic_triacontahedron_as_a_star_solid_and_spliced() {
 
 #[test]
 fn the_axis_spliced_the_wrong_way_has_the_counts_but_not_the_volume() {
-    // Counts alone prove nothing (the house plan, section 2).
+    // Counts alone prove nothing (docs/checks.md, worked cases).
     let up = Direction::Own(Vector::Z);
     let (shell, _) = grow(&spliced(up));
     assert_eq!(counts(&shell), TRIACONTAHEDRON.counts);
@@ -219,7 +219,7 @@ fn rhombic_enneacontahedron() {
 
 #[test]
 fn enneacontahedron_cells() {
-    // 120 cells in five classes of |det| (theory.md, section 3, derived from Shephard's paving).
+    // 120 cells in five classes of |det| (docs/checks.md, derived from Shephard's paving).
     let start = star_solid(Star::Icosahedral(vec![AxisClass::ThreeFold])).start;
     let g = closed_forms::zones_of(&start);
     let mut cells = Vec::new();
@@ -245,7 +245,7 @@ fn enneacontahedron_cells() {
 
 #[test]
 fn golden_rhombohedra_and_the_cube() {
-    // theory.md, sections 2 and 3.
+    // Derived.
     for (pitch, volume) in [
         (52.622_631_859_350_3, 0.760_845_213_0),
         (10.812_316_963_571_7, 0.470_228_201_8),
@@ -259,7 +259,7 @@ fn golden_rhombohedra_and_the_cube() {
 
 #[test]
 fn deficits_of_the_solids() {
-    // theory.md, section 8, printed to 6 decimals.
+    // docs/checks.md, printed to 6 decimals.
     let golden = whole(polar(5, golden_pitch()));
     for (shape, expected) in [
         (

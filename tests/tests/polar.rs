@@ -1,7 +1,7 @@
 //! Polar forms against published and derived figures.
 //!
-//! Sources: Ball and Coxeter (counts); Chilton and Coxeter, Polar zonohedra (1963), for the rings (from memory, as theory.md
-//! says); theory.md, sections 2, 8 and 9, for the closed forms and the fixtures F1, F2, F3, derived there and checked against
+//! Sources: Ball and Coxeter (counts); Chilton and Coxeter, Polar zonohedra (1963), for the rings (from
+//! memory); docs/checks.md, for the closed forms and the fixtures F1, F2, F3, derived there and checked against
 //! convex hulls. Fixtures are in metres there; here one unit of theirs is 1000 mm, so areas are divided by 1e6.
 
 use core::f64::consts::{FRAC_PI_2, PI, TAU};
@@ -223,7 +223,7 @@ fn f1_has_four_families_no_hands_and_five_bevels() {
 
 #[test]
 fn f1_deficits_and_what_they_add_up_to() {
-    // theory.md, section 8: the pole, then rings 1 to 4, then mirrored.
+    // docs/checks.md: the pole, then rings 1 to 4, then mirrored.
     let expected = [
         78.562_055_722_4,
         1.676_682_906_5,
@@ -280,7 +280,7 @@ fn ribs_of_many_counts_and_pitches_against_sums_of_determinants() {
 
 #[test]
 fn volume_at_a_given_edge_is_largest_at_one_pitch_whatever_the_ribs() {
-    // theory.md, section 2: atan(1 / sqrt 2), Vmax = L^3 n^2 cot(pi/n) / (3 sqrt 3): figures for L = 1.
+    // docs/checks.md: atan(1 / sqrt 2), Vmax = L^3 n^2 cot(pi/n) / (3 sqrt 3): figures for L = 1.
     let best = 0.5_f64.sqrt().atan().to_degrees();
     assert_near!(best, 35.264_389_682_8, PRINTED);
     for (n, most) in [
@@ -299,7 +299,7 @@ fn volume_at_a_given_edge_is_largest_at_one_pitch_whatever_the_ribs() {
 
 #[test]
 fn square_levels_and_equal_areas() {
-    // theory.md, section 2: level k is square at cos t = 1 / (sqrt 2 s_k).
+    // docs/checks.md: level k is square at cos t = 1 / (sqrt 2 s_k).
     for (n, level, pitch) in [
         (6, 2, 35.264_389_682_8),
         (9, 4, 44.109_159_048_7),
@@ -333,7 +333,7 @@ fn square_levels_and_equal_areas() {
 
 #[test]
 fn five_ribs_at_one_pitch_touch_a_sphere() {
-    // theory.md, section 2, derived: cos^2 t = 2 - 3 / sqrt 5; distance 1.0913216780 L, V, A.
+    // docs/checks.md, derived: cos^2 t = 2 - 3 / sqrt 5; distance 1.0913216780 L, V, A.
     let pitch = (2.0 - 3.0 / 5_f64.sqrt()).sqrt().acos().to_degrees();
     assert_near!(pitch, 35.767_707_562_0, PRINTED);
     let shell = polar(5, pitch, 1.0);
@@ -351,7 +351,7 @@ fn five_ribs_at_one_pitch_touch_a_sphere() {
 
 #[test]
 fn open_domes_have_the_derived_counts() {
-    // theory.md, section 2: levels 1..m: V = 1 + n(m+1), E = n(2m+1), F = nm, one rim of 2n edges.
+    // docs/checks.md: levels 1..m: V = 1 + n(m+1), E = n(2m+1), F = nm, one rim of 2n edges.
     for (n, m) in [(9, 3), (9, 5), (6, 1), (12, 7)] {
         let shell = grown(&shape(Start::Polar(form(n, 38.0, 300.0)), vec![lay(m, Spurs::Retract)]));
         let (n, m) = (n as usize, m as usize);

@@ -1,6 +1,6 @@
 //! The record: names survive edits, steps switch and come back, a start becomes free points, a shell is placed.
 //!
-//! Source: the house plan, section 2. Answers are planted: an edit is made and undone, or its effect is known beforehand.
+//! Source: docs/checks.md, worked cases. Answers are planted: an edit is made and undone, or its effect is known beforehand.
 
 use std::collections::BTreeSet;
 

@@ -1,6 +1,6 @@
 //! Solids of the icosahedral and cubic stars.
 //!
-//! Sources: theory.md, section 4 (counts from plane multiplicities and convex hulls, derived there; rows of a single class and the
+//! Sources: docs/checks.md (counts from plane multiplicities and convex hulls, derived there; rows of a single class and the
 //! truncated icosidodecahedron published), at edge 1 mm. The hull is also taken by a library that is not ours (crate chull,
 //! exact integers), from the grown vertices alone.
 
@@ -25,7 +25,7 @@ fn solid(star: Star) -> Shape {
 
 #[test]
 fn all_icosahedral_classes_belong_to_one_icosahedron() {
-    // Acute angles between axes in degrees, and pairs (theory.md, section 4); the 5-3 row tells the two orientations apart.
+    // Acute angles between axes in degrees, and pairs (docs/checks.md); the 5-3 row tells the two orientations apart.
     let axes = |class| Star::Icosahedral(vec![class]).directions().expect("a class has axes");
     let between = |a: &[Vector], b: &[Vector], same: bool| {
         let mut found = Vec::new();

@@ -1,7 +1,7 @@
 //! General zonohedra, grown from free paths.
 //!
 //! Sources: Coxeter, Regular Polytopes, 2.8; Ball and Coxeter, Mathematical Recreations and Essays (counts); McMullen, On
-//! zonotopes (1971), and Shephard (1974) (volume by determinants); theory.md, section 1, for the fixtures and for what is
+//! zonotopes (1971), and Shephard (1974) (volume by determinants); docs/checks.md, for the fixtures and for what is
 //! marked derived there.
 
 use core::f64::consts::TAU;
@@ -31,7 +31,7 @@ fn z5() -> Vec<Vector> {
 
 #[test]
 fn z5_has_the_derived_counts_volume_area_and_size() {
-    // Fixture Z5 of theory.md, section 1 (integers, derived there).
+    // Fixture Z5 of docs/checks.md (integers, derived there).
     let shell = grown(&zonohedron(&z5(), VIEW));
     assert_eq!(counts(&shell), [22, 40, 20]);
     assert_eq!(degrees(&shell), [(3, 10), (4, 10), (5, 2)].into());
@@ -63,7 +63,7 @@ fn z5_has_each_pair_of_zones_twice_with_the_listed_areas() {
 
 #[test]
 fn three_coplanar_generators_make_hexagons() {
-    // Fixture Z5c: 20, 34, 16 after merging, 14 parallelograms and 2 hexagons; volume 38 (theory.md, section 1, derived).
+    // Fixture Z5c: 20, 34, 16 after merging, 14 parallelograms and 2 hexagons; volume 38 (docs/checks.md, derived).
     let g = vectors(&[[2, 0, 0], [0, 1, 0], [1, 1, 0], [0, 1, 2], [1, 0, 3]]);
     let shell = grown(&zonohedron(&g, VIEW));
     let faces = merged(&shell);
@@ -77,7 +77,7 @@ fn three_coplanar_generators_make_hexagons() {
 
 #[test]
 fn parallel_generators_add_up() {
-    // Fixture "parallel pair": a box of 3 by 1 by 1 (theory.md, section 1).
+    // Fixture "parallel pair": a box of 3 by 1 by 1 (docs/checks.md).
     let g = vectors(&[[1, 0, 0], [2, 0, 0], [0, 1, 0], [0, 0, 1]]);
     let shell = grown(&zonohedron(&g, VIEW));
     assert_eq!(merged(&shell).counts, [8, 12, 6]);
@@ -149,7 +149,7 @@ proptest! {
         let totals = measure::totals(&shell);
         prop_assert!((totals.area_mm2 - area).abs() < 1e-11 * area);
         prop_assert!((totals.size - closed_forms::size(&g)).length() < 1e-9);
-        // Convex: no fold is a valley; and the folds round every zone are a full turn (theory.md, section 1).
+        // Convex: no fold is a valley; and the folds round every zone are a full turn (docs/checks.md).
         prop_assert!(totals.dihedrals.is_some_and(|d| d.most < core::f64::consts::PI));
         for folds in look::folds_by_zone(&shell) {
             prop_assert!((folds - TAU).abs() < 1e-9, "{}", folds);
@@ -160,7 +160,7 @@ proptest! {
     #[test]
     fn closing_both_fronts_of_a_silhouette(g in general_position(3..=5)) {
         // The surface that closes a rim need not lie on the hull, so the volume is only bounded by it; the panels are
-        // those of the pairs whichever surface it is (theory.md, section 6).
+        // those of the pairs whichever surface it is (docs/checks.md).
         let n = g.len();
         let acts = vec![(Side::Fore, Act::CloseRim), (Side::Aft, Act::CloseRim)];
         let (shell, findings) = grow(&two_sided(closed_silhouette(&g), acts));

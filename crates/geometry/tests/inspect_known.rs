@@ -20,7 +20,7 @@ fn crossing_pairs(quads: &[Quad]) -> Vec<[u32; 2]> {
 /// The pitch at which the ribs are the edges of a cube seen along its diagonal.
 const CUBE_PITCH: f64 = 0.615_479_708_670_387_3;
 
-/// V, E, F of the helical solids: the house plan, section 2.
+/// V, E, F of the helical solids: docs/checks.md, worked cases.
 #[test]
 fn helical_solids_have_their_counts() {
     for (n, r, counts) in [
@@ -37,7 +37,7 @@ fn helical_solids_have_their_counts() {
     }
 }
 
-/// The house plan, section 2: 15 pairs of panels of (5, 2) cross, 10 of them share a corner.
+/// docs/checks.md, worked cases: 15 pairs of panels of (5, 2) cross, 10 of them share a corner.
 #[test]
 fn helical_five_two_crosses_fifteen_times() {
     for pitch in [0.2, CUBE_PITCH, 1.1] {
@@ -50,7 +50,7 @@ fn helical_five_two_crosses_fifteen_times() {
     }
 }
 
-/// The house plan, section 2: r divides n and 2 r is not n, or they cross; 2 r = n doubles panels.
+/// docs/checks.md, worked cases: r divides n and 2 r is not n, or they cross; 2 r = n doubles panels.
 #[test]
 fn helical_solids_cross_unless_turns_divide_ribs() {
     for (n, r) in [(3, 1), (4, 1), (5, 1), (6, 2), (8, 2), (9, 3), (10, 2), (12, 3)] {

@@ -70,7 +70,7 @@ pub const fn bevel_deg(dihedral_deg: f64) -> f64 {
 mod tests {
     use super::*;
 
-    /// trade.md 10.2: dihedral angles of classic solids and the saw tilt; dodecahedron [V], the others derived.
+    /// Dihedral angles of classic solids and the saw tilt; the dodecahedron as makers publish it, the others derived.
     #[test]
     fn bevels_of_classic_solids() {
         let golden = (1.0 + 5_f64.sqrt()) / 2.0;
@@ -88,7 +88,7 @@ mod tests {
             assert!((bevel_deg(dihedral) - bevel).abs() < 5e-5, "{bevel}");
             assert_eq!(EdgeKind::of_dihedral(dihedral), EdgeKind::Ridge);
         }
-        // The rhombic icosahedron's second ring: 108 degrees (trade.md 10.2, derived).
+        // The rhombic icosahedron's second ring: 108 degrees (derived).
         assert!((bevel_deg(108.0) - 36.0).abs() < 1e-12);
     }
 

@@ -178,7 +178,7 @@ mod tests {
             }
         }
         assert!(balance.values().all(|&n| n == 0));
-        // theory.md F1 (derived): 1.1485745425 m3; f32 has about seven digits.
+        // Fixture F1 (derived): 1.1485745425 m3; f32 has about seven digits.
         assert!((volume / 1e9 - 1.148_574_542_5).abs() < 1e-6, "{volume}");
     }
 

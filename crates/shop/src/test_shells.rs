@@ -75,7 +75,7 @@ pub(crate) fn shell_of(
     shell
 }
 
-/// The polar form of n ribs of this length at this pitch (degrees), closed: theory.md, section 2.
+/// The polar form of n ribs of this length at this pitch (degrees), closed: docs/checks.md.
 ///
 /// Level k has n rhombi, spanned by ribs i and i + k; ring j has the vertices `e_i + .. + e_(i+j-1)`.
 pub(crate) fn polar(n: u32, pitch: f64, length: f64) -> Shell {

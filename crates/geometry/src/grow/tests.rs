@@ -276,7 +276,7 @@ fn helical(n: u32, r: u32) -> Shape {
 
 #[test]
 fn helical_solids_come_back_to_their_first_front() {
-    // Edge-joined counts of the house plan; (3,1) is the cube, (4,1) the rhombic dodecahedron.
+    // Edge-joined counts of docs/checks.md, worked cases; (3,1) is the cube, (4,1) the rhombic dodecahedron.
     let known = [
         (3, 1, [8, 12, 6]),
         (4, 1, [14, 24, 12]),

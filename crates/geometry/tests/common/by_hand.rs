@@ -157,7 +157,7 @@ fn rims(shell: &mut Shell) {
 }
 
 /// The panels of a helical solid of edge 1: n ribs at pitch t, the first r of them zig, the rest zag; exchange until still; the
-/// first r again; until the front is the first front again (the house plan, section 2).
+/// first r again; until the front is the first front again (docs/checks.md, worked cases).
 pub fn helical(n: usize, r: usize, t: f64) -> Vec<Quad> {
     let turn = std::f64::consts::TAU / n as f64;
     let rib = |i: usize| {

@@ -33,7 +33,7 @@ fn sort(parts: &[Vec<Side>]) -> (Vec<u32>, Vec<Kind>) {
     (kinds, sorter.kinds().to_vec())
 }
 
-/// trade.md 3.3, derived: which panels are handed.
+/// Derived: which panels are handed.
 #[test]
 fn hands_of_plain_shapes() {
     let hand = |part: &[Side]| sort(&[part.to_vec()]).1[0].hand;

@@ -47,7 +47,7 @@ fn near(a: f64, b: f64, within: f64) -> bool {
 fn panels_of_the_polar_nine() {
     let [panels, edges, families] = lists(&polar(9, 38.0, 300.0)).map(|l| rows(&l));
     assert_eq!((panels.len(), edges.len(), families.len()), (72, 144, 4));
-    // theory.md F1 (derived): level 3, and its bevels 9.76 towards level 2 and 13.59 towards level 4.
+    // Fixture F1 (derived): level 3, and its bevels 9.76 towards level 2 and 13.59 towards level 4.
     let row = panels.iter().find(|r| r["mark"] == "F03P07").unwrap();
     assert!(near(number(row, "acute_deg"), 86.0687990795, 5e-5));
     assert!(near(number(row, "long_diagonal_mm"), 438.566465, 5e-4));
@@ -68,7 +68,7 @@ fn panels_of_the_polar_nine() {
     {
         assert!(near(*bevel, expected, 5e-5));
     }
-    // theory.md F1: edges 43.2 m in all, area 5.4579091310 m2.
+    // Fixture F1: edges 43.2 m in all, area 5.4579091310 m2.
     assert!(near(edges.iter().map(|r| number(r, "length_mm")).sum(), 43_200.0, 1e-6));
     assert!(near(
         families.iter().map(|r| number(r, "area_total_m2")).sum(),
@@ -85,7 +85,7 @@ fn panels_of_the_polar_nine() {
     );
 }
 
-/// trade.md 10.3, derived: 800 x 500 at 60 degrees.
+/// Derived: 800 x 500 at 60 degrees.
 #[test]
 fn a_handed_pair() {
     let [panels, _, families] = lists(&mirror_pair()).map(|l| rows(&l));
@@ -101,7 +101,7 @@ fn a_handed_pair() {
     assert_eq!(panels[1]["course"], "-1");
 }
 
-/// trade.md 10.3, derived: 600 rhombi at 70.5288 and 63.4349 degrees.
+/// Derived: 600 rhombi at 70.5288 and 63.4349 degrees.
 #[test]
 fn rhombi() {
     let [_, _, dodecahedron] = lists(&polar(4, 0.5_f64.sqrt().atan().to_degrees(), 600.0)).map(|l| rows(&l));

@@ -19,7 +19,7 @@ fn bevels(parts: &Parts) -> Vec<f64> {
     all
 }
 
-/// theory.md, fixture F1 (derived, checked against a hull): n 9, pitch 38, edge 300.
+/// Fixture F1 (derived, checked against a hull): n 9, pitch 38, edge 300.
 #[test]
 fn polar_nine() {
     let parts = parts(&polar(9, 38.0, 300.0));
@@ -54,7 +54,7 @@ fn polar_nine() {
     assert_eq!(parts.panels[71].part_mark, "P1");
 }
 
-/// trade.md 3.3, derived: ceil(n/2) different bevels on a polar form.
+/// Derived: ceil(n/2) different bevels on a polar form.
 #[test]
 fn polar_forms_have_half_as_many_bevels_as_ribs() {
     for n in [5, 6, 7, 8, 10, 12, 13] {
@@ -66,7 +66,7 @@ fn polar_forms_have_half_as_many_bevels_as_ribs() {
     }
 }
 
-/// trade.md 10.2 and 10.6, derived: bevel 30 all round, one part, its own mirror image.
+/// Derived: bevel 30 all round, one part, its own mirror image.
 #[test]
 fn rhombic_dodecahedron() {
     let parts = parts(&polar(4, 0.5_f64.sqrt().atan().to_degrees(), 600.0));
@@ -88,7 +88,7 @@ fn rhombic_dodecahedron() {
     }
 }
 
-/// trade.md 10.2, derived: cube 45, rhombic icosahedron 18 and 36.
+/// Derived: cube 45, rhombic icosahedron 18 and 36.
 #[test]
 fn other_solids() {
     let cube = parts(&polar(3, 0.5_f64.sqrt().atan().to_degrees(), 600.0));

@@ -114,7 +114,7 @@ fn numbers_for_reading() {
     assert_eq!(degrees(-7.3453, 2), "-7.35\u{b0}");
     assert_eq!(square_metres(5_457_909.131), "5.458 m\u{b2}");
     assert_eq!(cubic_metres(1_148_574_542.5), "1.149 m\u{b3}");
-    // trade.md 10.1: a 2440 x 1220 sheet, 18 mm at 685 kg/m3 [V].
+    // A 2440 x 1220 sheet, 18 mm at 685 kg/m3: a published data sheet.
     assert_eq!(kilograms(2.44 * 1.22 * 0.018 * 685.0), "36.7 kg");
     assert_eq!(metres(1200.15), "1.200 m");
 }
