@@ -2,11 +2,16 @@
 //!
 //! The baseline projects each vertex once, shades each panel and pushes the same kinds of item into the same kinds of array; it
 //! orders nothing and divides nothing. Building the order is measured apart.
+//!
+//! `cargo bench -p zonewright-painter --bench turn`
+
+#![expect(clippy::print_stdout, reason = "a bench prints its figures")]
 
 #[path = "../tests/common/mod.rs"]
 mod common;
 
-use divan::{Bencher, black_box};
+use std::{hint::black_box, time::Instant};
+
 use zonewright_geometry::{NONE, Shell, Vector};
 use zonewright_painter::{Bounds, Camera, Colour, Faces, Item, Look, Paint, Picture, Projection, Scene, Tints, View};
 
@@ -70,78 +75,66 @@ fn unordered(shell: &Shell, camera: &Camera, edges: bool, picture: &mut Picture)
     }
 }
 
-fn turn(bencher: Bencher<'_, '_>, name: &str, faces: Option<Faces>, edges: bool) {
-    let shell = shell(name);
-    let scene = Scene::exact(&shell);
-    let mut camera = camera(&shell);
+/// Median seconds of a frame while the camera turns: in depth order, or the baseline.
+fn frame(shell: &Shell, scene: &Scene, look: &Look, edges: bool, ordered: bool, camera: &mut Camera) -> f64 {
     let mut picture = Picture::default();
-    let mut look = Look::default();
-    bencher.bench_local(|| {
+    median(41, || {
         camera.orbit(3.0, 0.2);
-        match faces {
-            None => unordered(&shell, &camera, edges, &mut picture),
-            Some(faces) => {
-                look.faces = faces;
-                scene.picture_into(&shell, &camera, &look, &Tints::default(), &[], &mut picture);
-            }
+        if ordered {
+            scene.picture_into(shell, camera, look, &Tints::default(), &[], &mut picture);
+        } else {
+            unordered(shell, camera, edges, &mut picture);
         }
-        black_box(picture.items.len())
-    });
+        black_box(picture.items.len());
+    })
 }
 
-#[divan::bench(args = SHELLS)]
-fn fills_baseline(bencher: Bencher<'_, '_>, name: &str) {
-    turn(bencher, name, None, false);
-}
-
-#[divan::bench(args = SHELLS)]
-fn fills_in_order(bencher: Bencher<'_, '_>, name: &str) {
-    turn(bencher, name, Some(Faces::Shaded), false);
-}
-
-#[divan::bench(args = SHELLS)]
-fn with_edges_baseline(bencher: Bencher<'_, '_>, name: &str) {
-    turn(bencher, name, None, true);
-}
-
-#[divan::bench(args = SHELLS)]
-fn with_edges_in_order(bencher: Bencher<'_, '_>, name: &str) {
-    turn(bencher, name, Some(Faces::ShadedWithEdges), true);
-}
-
-#[divan::bench(args = SHELLS, sample_count = 5, sample_size = 1)]
-fn build_exact(bencher: Bencher<'_, '_>, name: &str) {
-    let shell = shell(name);
-    bencher.bench_local(|| Scene::exact(black_box(&shell)).piece_count());
-}
-
-#[divan::bench(args = SHELLS, sample_count = 10, sample_size = 1)]
-fn build_quick(bencher: Bencher<'_, '_>, name: &str) {
-    let shell = shell(name);
-    bencher.bench_local(|| Scene::quick(black_box(&shell)).piece_count());
-}
-
-/// A frame while dragging: the scene is built and drawn each time.
-#[divan::bench(args = SHELLS)]
-fn quick_frame(bencher: Bencher<'_, '_>, name: &str) {
-    let shell = shell(name);
-    let camera = camera(&shell);
-    let mut picture = Picture::default();
-    bencher.bench_local(|| {
-        let scene = Scene::quick(&shell);
-        scene.picture_into(&shell, &camera, &Look::default(), &Tints::default(), &[], &mut picture);
-        black_box(picture.items.len())
-    });
+fn median(runs: usize, mut work: impl FnMut()) -> f64 {
+    let mut times: Vec<f64> = (0..runs)
+        .map(|_| {
+            let start = Instant::now();
+            work();
+            start.elapsed().as_secs_f64()
+        })
+        .collect();
+    times.sort_by(f64::total_cmp);
+    times[runs / 2]
 }
 
 fn main() {
     for name in SHELLS {
         let shell = shell(name);
-        let (panels, pieces) = (shell.panels.len(), Scene::exact(&shell).piece_count());
-        #[expect(clippy::print_stdout, reason = "a bench tells what it measures")]
-        {
-            println!("{name}: {panels} panels in {pieces} pieces");
+        let scene = Scene::exact(&shell);
+        let panels = shell.panels.len();
+        println!("{name}: {panels} panels in {} pieces", scene.piece_count());
+        for (what, faces, edges) in [
+            ("fills", Faces::Shaded, false),
+            ("fills and edges", Faces::ShadedWithEdges, true),
+        ] {
+            let look = Look {
+                faces,
+                ..Look::default()
+            };
+            let mut camera = camera(&shell);
+            let baseline = frame(&shell, &scene, &look, edges, false, &mut camera);
+            let ordered = frame(&shell, &scene, &look, edges, true, &mut camera);
+            println!(
+                "  turning, {what:<16} in order {:6.1} ms  baseline {:6.1} ms  ratio {:5.2}",
+                ordered * 1e3,
+                baseline * 1e3,
+                ordered / baseline
+            );
         }
+        let exact = median(5, || {
+            black_box(Scene::exact(&shell).piece_count());
+        });
+        let quick = median(11, || {
+            black_box(Scene::quick(&shell).piece_count());
+        });
+        println!(
+            "  building the exact order {:.0} ms, the quick one {:.1} ms",
+            exact * 1e3,
+            quick * 1e3
+        );
     }
-    divan::main();
 }
