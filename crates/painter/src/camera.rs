@@ -226,19 +226,7 @@ impl Camera {
     /// The points that lie under a place on the picture.
     #[must_use]
     pub fn ray(&self, pos: [f32; 2]) -> Ray {
-        let lens = self.lens();
-        let x = (f64::from(pos[0]) - lens.centre[0]) / lens.focal;
-        let y = (lens.centre[1] - f64::from(pos[1])) / lens.focal;
-        match self.projection {
-            Projection::Perspective => Ray {
-                from: lens.eye,
-                along: (lens.forward + lens.right * x + lens.up * y).normalize(),
-            },
-            Projection::Parallel => Ray {
-                from: lens.eye + (lens.right * x + lens.up * y) * self.distance,
-                along: lens.forward,
-            },
-        }
+        self.lens().ray(pos)
     }
 
     /// The scale at a point, for lengths across the view. A point behind the eye counts as just before it.
@@ -345,6 +333,23 @@ impl Lens {
             pos: self.onto(seen),
             depth: seen.z,
         })
+    }
+
+    /// The points that lie under a place on the picture.
+    #[must_use]
+    pub fn ray(&self, pos: [f32; 2]) -> Ray {
+        let x = (f64::from(pos[0]) - self.centre[0]) / self.focal;
+        let y = (self.centre[1] - f64::from(pos[1])) / self.focal;
+        match self.projection {
+            Projection::Perspective => Ray {
+                from: self.eye,
+                along: (self.forward + self.right * x + self.up * y).normalize(),
+            },
+            Projection::Parallel => Ray {
+                from: self.eye + (self.right * x + self.up * y) * self.distance,
+                along: self.forward,
+            },
+        }
     }
 
     /// On which side of a plane the eye is: positive on the side that `normal` points to.

@@ -4,6 +4,7 @@ use zonewright_geometry::{NONE, Point, Shell, Vector};
 
 use crate::{
     Anchor, Camera, Colour, ColourBy, Faces, Lens, Look, Mark, MarkKind, Paint, Picture, Scene, Text, Tints,
+    brink::Brink,
     clip::{Clip, GUARD},
     picture::{Item, index},
     tint::Paints,
@@ -13,6 +14,9 @@ use crate::{
 const MARGIN: f32 = 16.0;
 /// How opaque a marked polygon is, of 255.
 const PREVIEW_ALPHA: u8 = 120;
+
+/// How much wider edges are that tell something by their colour.
+const WIDE: f32 = 1.6;
 
 const LEFT: u8 = 1;
 const RIGHT: u8 = 2;
@@ -147,7 +151,10 @@ impl<'a> Emitter<'a> {
         self.picture.points.reserve(expected);
         self.picture.items.reserve(scene.piece_count() + left.len());
         let (lens, shell) = (self.lens, self.shell);
-        scene.walk(&lens, shell, |piece| {
+        // Wide enough for every stroke of an edge.
+        let reach = f64::from(self.look.edge_width * WIDE).max(self.look.rim_width.into()) * 0.5;
+        let slimmest = if edges { scene.slimmest(&lens, reach) } else { 0.0 };
+        scene.walk(&lens, shell, slimmest, |piece, brinks| {
             let range = scene.first[piece] as usize..scene.first[piece + 1] as usize;
             let panel = scene.piece_panel[piece];
             let colour = colours[panel as usize];
@@ -171,7 +178,7 @@ impl<'a> Emitter<'a> {
                     true
                 };
                 if left[segment] == 0 && shows {
-                    self.segment(segment, false);
+                    self.segment(segment, false, brinks);
                 }
             }
         });
@@ -216,7 +223,7 @@ impl<'a> Emitter<'a> {
         }
     }
 
-    fn segment(&mut self, segment: usize, dashed: bool) {
+    fn segment(&mut self, segment: usize, dashed: bool, brinks: &[Brink]) {
         let crate::scene::Segment { ends, edge } = self.scene.segments[segment];
         let rim = self.scene.rim[edge as usize];
         let width = if rim { self.look.rim_width } else { self.look.edge_width };
@@ -225,10 +232,11 @@ impl<'a> Emitter<'a> {
             None if rim => self.look.palette.rim,
             None => self.look.palette.edge,
         };
-        let wide = if self.edge_colours.is_some() && !rim { 1.6 } else { 1.0 };
+        let wide = if self.edge_colours.is_some() && !rim { WIDE } else { 1.0 };
+        // Dashes over what is drawn already stay within its width: where an edge is visible they do not show.
+        let width = width * if dashed { 0.8 } else { 1.0 } * wide;
         let paint = Paint::Stroke {
-            // Dashes over what is drawn already stay within its width: where an edge is visible they do not show.
-            width: width * if dashed { 0.8 } else { 1.0 } * wide,
+            width,
             dashed,
             closed: false,
             edge,
@@ -237,7 +245,14 @@ impl<'a> Emitter<'a> {
         if a & b & OUT != 0 || (a | b) & NOWHERE != 0 {
             return;
         }
-        if (a | b) & TO_CUT == 0 {
+        if !brinks.is_empty() {
+            let ends = ends.map(|v| self.lens.to_camera(self.point(v)));
+            if let Some(ends) = self.clip.line(ends) {
+                let reach = f64::from(width) * 0.5;
+                let places = self.scene.held_back(self.shell, &self.lens, brinks, ends, reach);
+                self.picture.push(places, colour, paint);
+            }
+        } else if (a | b) & TO_CUT == 0 {
             let places = ends.map(|v| self.places[v as usize]);
             self.picture.push(places, colour, paint);
         } else {
@@ -254,18 +269,12 @@ impl<'a> Emitter<'a> {
 
     fn all_edges(&mut self, dashed: bool) {
         for edge in 0..self.shell.edges.len().min(self.scene.segments.len()) {
-            self.segment(edge, dashed);
+            self.segment(edge, dashed, &[]);
         }
     }
 
     fn point(&self, vertex: u32) -> Point {
-        let vertex = vertex as usize;
-        let own = self.shell.points.len();
-        if vertex < own {
-            self.shell.points[vertex]
-        } else {
-            Point(self.scene.extra[vertex - own])
-        }
+        self.scene.vertex(self.shell, vertex)
     }
 
     fn mark(&mut self, mark: &Mark) {

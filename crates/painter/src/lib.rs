@@ -7,6 +7,7 @@
 //! Picture positions are pixels from the top left corner, x right and y down.
 
 mod bounds;
+mod brink;
 mod camera;
 mod clip;
 mod colour;

@@ -1,5 +1,6 @@
 //! The order of a shell's panels from back to front.
 
+mod cast;
 mod split;
 mod tree;
 
@@ -7,7 +8,7 @@ use std::collections::BTreeMap;
 
 use zonewright_geometry::{NONE, Panel, Shell, Vector};
 
-use crate::{Bounds, Lens, picture::index};
+use crate::{Bounds, Lens, brink::Brink, picture::index};
 use tree::{Grower, Node};
 
 /// A panel's plane: `normal . p = offset`, the normal pointing outside, of length 1; zero for a panel without area.
@@ -58,6 +59,19 @@ pub struct Scene {
     /// Whether the shell is closed and its outside is outside.
     pub(crate) encloses: bool,
     exact: bool,
+}
+
+/// What is due when the walk comes to an entry of its stack.
+#[derive(Clone, Copy)]
+enum Due {
+    /// All of the node.
+    Children,
+    /// The node's own pieces.
+    Pieces,
+    /// What lies beyond the node's plane, seen edge-on, is done; the rest comes.
+    Brink,
+    /// The rest is done too.
+    Leave,
 }
 
 impl Scene {
@@ -171,36 +185,58 @@ impl Scene {
         }
     }
 
-    /// Calls `paint` for each piece, from the farthest to the nearest.
-    pub(crate) fn walk(&self, lens: &Lens, shell: &Shell, mut paint: impl FnMut(usize)) {
+    /// Calls `paint` for each piece, from the farthest to the nearest, and tells it which planes seen edge-on have all of their
+    /// other side painted already. `slimmest` is how near to a plane the eye must be for that, as [`Lens::side`] tells it.
+    pub(crate) fn walk(&self, lens: &Lens, shell: &Shell, slimmest: f64, mut paint: impl FnMut(usize, &[Brink])) {
         if self.nodes.is_empty() {
             for (_, piece) in self.by_middle(lens, shell) {
-                paint(piece as usize);
+                paint(piece as usize, &[]);
             }
             return;
         }
-        // An entry is a node to be entered, or, marked, one whose own pieces are due.
-        const DUE: u32 = 1 << 31;
-        let mut stack = vec![0_u32];
-        while let Some(entry) = stack.pop() {
-            let node = &self.nodes[(entry & !DUE) as usize];
-            if entry & DUE == 0 && node.children != [NONE; 2] {
-                let eye_before = lens.side(node.normal, node.offset) > 0.0;
-                let [before, behind] = node.children;
-                let [near, far] = if eye_before { [before, behind] } else { [behind, before] };
-                if near != NONE {
-                    stack.push(near);
+        // An entry is a node to be entered, or one of which something else is due.
+        let mut stack = vec![(0_u32, Due::Children)];
+        let mut brinks = Vec::new();
+        while let Some((id, due)) = stack.pop() {
+            let node = &self.nodes[id as usize];
+            match due {
+                Due::Children if node.children != [NONE; 2] => {
+                    let side = lens.side(node.normal, node.offset);
+                    let [before, behind] = node.children;
+                    let [near, far] = if side > 0.0 { [before, behind] } else { [behind, before] };
+                    let brink = side.abs() < slimmest && far != NONE;
+                    if brink {
+                        stack.push((id, Due::Leave));
+                    }
+                    if near != NONE {
+                        stack.push((near, Due::Children));
+                    }
+                    if node.count > 0 {
+                        stack.push((id, Due::Pieces));
+                    }
+                    if brink {
+                        stack.push((id, Due::Brink));
+                    }
+                    if far != NONE {
+                        stack.push((far, Due::Children));
+                    }
                 }
-                if node.count > 0 {
-                    stack.push(entry | DUE);
+                Due::Children | Due::Pieces => {
+                    for piece in node.first..node.first + node.count {
+                        paint(piece as usize, &brinks);
+                    }
                 }
-                if far != NONE {
-                    stack.push(far);
+                Due::Brink => {
+                    let sign = if lens.side(node.normal, node.offset) > 0.0 {
+                        1.0
+                    } else {
+                        -1.0
+                    };
+                    brinks.push(Brink::new(lens, node.normal * sign, node.offset * sign));
                 }
-                continue;
-            }
-            for piece in node.first..node.first + node.count {
-                paint(piece as usize);
+                Due::Leave => {
+                    brinks.pop();
+                }
             }
         }
     }

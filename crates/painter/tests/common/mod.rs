@@ -163,7 +163,7 @@ pub(crate) fn turned_waves(n: usize) -> Shell {
 }
 
 /// Whether a point is in a polygon, by crossings of a ray to the right; points on the border belong to one side only.
-fn inside(polygon: &[[f32; 2]], x: f64, y: f64) -> bool {
+pub(crate) fn covers(polygon: &[[f32; 2]], x: f64, y: f64) -> bool {
     let mut odd = false;
     for (k, a) in polygon.iter().enumerate() {
         // The same order of ends for both neighbours of a line, so that rounding is the same for both.
@@ -191,7 +191,7 @@ pub(crate) fn rasterise(picture: &Picture) -> Vec<u32> {
         };
         for y in range(1, h) {
             for x in range(0, w) {
-                if inside(polygon, x as f64 + 0.5, y as f64 + 0.5) {
+                if covers(polygon, x as f64 + 0.5, y as f64 + 0.5) {
                     pixels[y * w + x] = panel;
                 }
             }
