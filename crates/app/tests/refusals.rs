@@ -35,7 +35,6 @@ fn starts_that_cannot_be_used_make_no_file() {
         "polar --ribs 9 --pitch 40 --edge -5",
         "polar --ribs 9 --pitch 40 --edge inf",
         "polar --ribs 9 --pitch 40 --edge 1e400",
-        "polar --ribs 9 --pitch 40",
         "polar --ribs 9 --pitch 40 --edge 600 --width 5000",
         "polar --ribs 9 --pitch 40 --edge 600 --courses -1",
         "polar --ribs 9 --pitch 40 --edge 600 --courses 0",

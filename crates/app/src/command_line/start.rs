@@ -24,7 +24,7 @@ pub(super) enum Kind {
     Zigzag(Zigzag),
     /// A path moved along a path.
     Translation(Translation),
-    /// Ribs round a pole: give two of --pitch, --edge, --width, --height.
+    /// Ribs round a pole: give two of --pitch, --edge, --width, --height; with one, the pitch is 35 or the edge 1 m.
     Polar(Polar),
     /// A closed zigzag that grows into a tube.
     Loop(Loop),
@@ -72,8 +72,8 @@ enum SpurWord {
 
 #[derive(Args, Debug)]
 pub(super) struct Zigzag {
-    /// The points: "0,0,0 300,0,200 ..."; with `;` between them where lengths have spaces.
-    #[arg(long, value_parser = parse_points, allow_hyphen_values = true, required_unless_present = "from")]
+    /// The points: "0,0,0 300,0,200 ..."; with `;` between them where lengths have spaces. Without it, a zigzag of three Vs.
+    #[arg(long, value_parser = parse_points, allow_hyphen_values = true)]
     points: Option<Points>,
     /// Read the path from a CSV, DXF or SVG file.
     #[arg(long, value_name = "FILE", conflicts_with = "points")]
@@ -90,10 +90,10 @@ pub(super) struct Zigzag {
 
 #[derive(Args, Debug)]
 pub(super) struct Translation {
-    #[arg(long, value_name = "CURVE", value_parser = curve_words::curve, help = curve_words::CURVE_HELP)]
+    #[arg(long, value_name = "CURVE", default_value = "arc span=4000 rise=900 parts=10", value_parser = curve_words::curve, help = curve_words::CURVE_HELP)]
     zig: Curve,
     /// The second curve, in the same words.
-    #[arg(long, value_name = "CURVE", value_parser = curve_words::curve)]
+    #[arg(long, value_name = "CURVE", default_value = "arc span=3000 rise=600 parts=8 azimuth=90", value_parser = curve_words::curve)]
     zag: Curve,
     #[command(flatten)]
     common: Common,
@@ -102,7 +102,7 @@ pub(super) struct Translation {
 #[derive(Args, Debug)]
 pub(super) struct Polar {
     /// How many ribs.
-    #[arg(long, value_name = "N", value_parser = values::count, allow_hyphen_values = true)]
+    #[arg(long, value_name = "N", default_value = "12", value_parser = values::count, allow_hyphen_values = true)]
     ribs: u32,
     /// Pitch of the ribs, from the horizontal.
     #[arg(long, value_name = "ANGLE", value_parser = values::angle, allow_hyphen_values = true)]
@@ -123,14 +123,14 @@ pub(super) struct Polar {
 #[derive(Args, Debug)]
 pub(super) struct Loop {
     /// How many points each of the two rings has.
-    #[arg(long, value_name = "N", value_parser = values::count, allow_hyphen_values = true, required_unless_present = "from")]
-    sides: Option<u32>,
+    #[arg(long, value_name = "N", value_parser = values::count, allow_hyphen_values = true, default_value = "12")]
+    sides: u32,
     /// Radius of both rings.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true, required_unless_present = "from")]
-    radius: Option<f64>,
+    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true, default_value = "600mm")]
+    radius: f64,
     /// Height of the upper ring above the lower.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true, required_unless_present = "from")]
-    rise: Option<f64>,
+    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true, default_value = "300mm")]
+    rise: f64,
     /// Move a point of the zigzag, as in 3:0,0,50; may be given again.
     #[arg(long = "move", value_name = "NODE:x,y,z", value_parser = values::moved, allow_hyphen_values = true)]
     moved: Vec<(u32, Vector)>,
@@ -147,16 +147,16 @@ pub(super) struct Loop {
 #[derive(Args, Debug)]
 pub(super) struct Ribbon {
     /// How many ribs.
-    #[arg(long, value_name = "N", value_parser = values::count, allow_hyphen_values = true)]
+    #[arg(long, value_name = "N", default_value = "12", value_parser = values::count, allow_hyphen_values = true)]
     ribs: u32,
     /// Turn from rib to rib, about the vertical.
-    #[arg(long, value_name = "ANGLE", value_parser = values::angle, allow_hyphen_values = true)]
+    #[arg(long, value_name = "ANGLE", default_value = "20", value_parser = values::angle, allow_hyphen_values = true)]
     turn: Angle,
     /// Pitch of the ribs, from the horizontal.
-    #[arg(long, value_name = "ANGLE", value_parser = values::angle, allow_hyphen_values = true)]
+    #[arg(long, value_name = "ANGLE", default_value = "30", value_parser = values::angle, allow_hyphen_values = true)]
     pitch: Angle,
     /// Length of the ribs.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true)]
+    #[arg(long, value_name = "LENGTH", default_value = "300mm", value_parser = values::length, allow_hyphen_values = true)]
     edge: f64,
     /// Where the first word runs: along the outer edge, or in a zigzag across the ribbon.
     #[arg(long, value_enum, default_value = "edge")]
@@ -174,16 +174,16 @@ enum FromWord {
 #[derive(Args, Debug)]
 pub(super) struct Column {
     /// How many zigs, and how many zags.
-    #[arg(long, value_name = "N", value_parser = values::count, allow_hyphen_values = true)]
+    #[arg(long, value_name = "N", default_value = "12", value_parser = values::count, allow_hyphen_values = true)]
     ribs: u32,
     /// Horizontal run of the zags.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true)]
+    #[arg(long, value_name = "LENGTH", default_value = "300mm", value_parser = values::length, allow_hyphen_values = true)]
     zag_run: f64,
     /// Horizontal run of the zigs.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true)]
+    #[arg(long, value_name = "LENGTH", default_value = "200mm", value_parser = values::length, allow_hyphen_values = true)]
     zig_run: f64,
     /// Rise of each.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true)]
+    #[arg(long, value_name = "LENGTH", default_value = "300mm", value_parser = values::length, allow_hyphen_values = true)]
     rise: f64,
     /// How many times round the zigs turn while the zags turn once; 1 oscillates, others spiral.
     #[arg(long, value_name = "M", default_value = "1", allow_hyphen_values = true)]
@@ -195,16 +195,16 @@ pub(super) struct Column {
 #[derive(Args, Debug)]
 pub(super) struct Helical {
     /// How many ribs.
-    #[arg(long, value_name = "N", value_parser = values::count, allow_hyphen_values = true)]
+    #[arg(long, value_name = "N", default_value = "12", value_parser = values::count, allow_hyphen_values = true)]
     ribs: u32,
     /// How many letters are zig; it should divide --ribs.
-    #[arg(long, value_name = "R", value_parser = values::count, allow_hyphen_values = true)]
+    #[arg(long, value_name = "R", default_value = "3", value_parser = values::count, allow_hyphen_values = true)]
     turn: u32,
     /// Pitch of the ribs, from the horizontal.
-    #[arg(long, value_name = "ANGLE", value_parser = values::angle, allow_hyphen_values = true)]
+    #[arg(long, value_name = "ANGLE", default_value = "35", value_parser = values::angle, allow_hyphen_values = true)]
     pitch: Angle,
     /// Length of the ribs.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true)]
+    #[arg(long, value_name = "LENGTH", default_value = "1m", value_parser = values::length, allow_hyphen_values = true)]
     edge: f64,
     #[command(flatten)]
     common: Common,
@@ -212,13 +212,13 @@ pub(super) struct Helical {
 
 #[derive(Args, Debug)]
 pub(super) struct Along {
-    #[arg(long, value_parser = star_words::star, help = star_words::STAR_HELP)]
+    #[arg(long, default_value = "6", value_parser = star_words::star, help = star_words::STAR_HELP)]
     star: Star,
     /// Length of golden step 0.
     #[arg(long, value_name = "LENGTH", default_value = "300", value_parser = values::length, allow_hyphen_values = true)]
     unit: f64,
     /// The letters: sign and axis, then ^ and a golden step or = and a length: "+0 -3^1 +5=250mm". Axes count from 0.
-    #[arg(long, value_parser = parse_letters, allow_hyphen_values = true)]
+    #[arg(long, default_value = "+0 +1 +2 +3 +4 +5", value_parser = parse_letters, allow_hyphen_values = true)]
     letters: Letters,
     /// The path is meant to close.
     #[arg(long)]
@@ -229,14 +229,20 @@ pub(super) struct Along {
 
 #[derive(Args, Debug)]
 pub(super) struct Solid {
-    #[arg(long, value_parser = star_words::star, help = star_words::STAR_HELP)]
+    #[arg(long, default_value = "6", value_parser = star_words::star, help = star_words::STAR_HELP)]
     star: Star,
     /// Length of the edges.
-    #[arg(long, value_name = "LENGTH", value_parser = values::length, allow_hyphen_values = true)]
+    #[arg(long, value_name = "LENGTH", default_value = "1m", value_parser = values::length, allow_hyphen_values = true)]
     edge: f64,
     #[command(flatten)]
     common: Common,
 }
+
+/// The zigzag of a `start zigzag` without points: three Vs.
+const USUAL_POINTS: &str = "0,0,0 400,0,-150 800,100,0 1200,60,-180 1600,180,0 2000,100,-150 2400,160,0";
+
+/// The pitch of a polar form that is not told one, in degrees, and the edge of one that is not told that, in millimetres.
+const USUAL: (f64, f64) = (35.0, 1000.0);
 
 /// Lists in types of their own, because a plain list would be taken as an option given several times.
 #[derive(Clone, Debug)]
@@ -284,7 +290,7 @@ impl Kind {
                 let path = match (o.points, o.from) {
                     (Some(Points(points)), _) => free_path(&points, o.closed)?,
                     (None, Some(file)) => imported(&file, o.tolerance, o.closed)?,
-                    (None, None) => return Err("give --points or --from".to_owned()),
+                    (None, None) => free_path(&values::points(USUAL_POINTS)?, o.closed)?,
                 };
                 (Start::Zigzag(path), o.common)
             }
@@ -294,15 +300,14 @@ impl Kind {
                 (Start::Polar(PolarForm { ribs: o.ribs, by }), o.common)
             }
             Self::Loop(o) => {
-                let start = match (o.from, o.sides, o.radius, o.rise) {
-                    (Some(file), ..) => Start::Zigzag(imported(&file, o.tolerance, true)?),
-                    (None, Some(sides), Some(radius_mm), Some(rise_mm)) => Start::Loop(LoopForm {
-                        sides,
-                        radius_mm,
-                        rise_mm,
+                let start = match o.from {
+                    Some(file) => Start::Zigzag(imported(&file, o.tolerance, true)?),
+                    None => Start::Loop(LoopForm {
+                        sides: o.sides,
+                        radius_mm: o.radius,
+                        rise_mm: o.rise,
                         moved: o.moved,
                     }),
-                    _ => return Err("give --sides, --radius and --rise, or --from".to_owned()),
                 };
                 (start, o.common)
             }
@@ -374,7 +379,24 @@ fn refused(finding: &Finding) -> String {
 }
 
 fn polar_by(o: &Polar) -> Result<PolarBy, String> {
+    let usual_pitch = Angle::from_degrees(USUAL.0);
     Ok(match (o.pitch, o.edge, o.width, o.height) {
+        (pitch, None, None, None) => PolarBy::PitchEdge {
+            pitch: pitch.unwrap_or(usual_pitch),
+            edge_mm: USUAL.1,
+        },
+        (None, Some(edge_mm), None, None) => PolarBy::PitchEdge {
+            pitch: usual_pitch,
+            edge_mm,
+        },
+        (None, None, Some(width_mm), None) => PolarBy::PitchWidth {
+            pitch: usual_pitch,
+            width_mm,
+        },
+        (None, None, None, Some(height_mm)) => PolarBy::PitchHeight {
+            pitch: usual_pitch,
+            height_mm,
+        },
         (Some(pitch), Some(edge_mm), None, None) => PolarBy::PitchEdge { pitch, edge_mm },
         (Some(pitch), None, Some(width_mm), None) => PolarBy::PitchWidth { pitch, width_mm },
         (Some(pitch), None, None, Some(height_mm)) => PolarBy::PitchHeight { pitch, height_mm },
@@ -383,7 +405,7 @@ fn polar_by(o: &Polar) -> Result<PolarBy, String> {
         (None, None, Some(width_mm), Some(height_mm)) => PolarBy::WidthHeight { width_mm, height_mm },
         _ => {
             return Err(
-                "a polar form is fixed by two measures; give exactly two of --pitch, --edge, --width, --height"
+                "a polar form is fixed by two measures; give two of --pitch, --edge, --width, --height, no more"
                     .to_owned(),
             );
         }
