@@ -15,26 +15,27 @@ const NEARER: f64 = 8.0;
 /// A plane seen edge-on, one side of which is drawn already.
 #[derive(Clone, Copy, Debug)]
 pub(crate) struct Brink {
-    /// In camera coordinates, towards the side that is being drawn.
+    /// In camera coordinates, towards the side that is being drawn; as long as a move across the picture of length 1, away from
+    /// the plane, raises by 1.
     normal: Vector,
-    /// The height of the eye's place above the plane, in millimetres.
+    /// The height of the eye's place above the plane, in the same measure.
     eye: f64,
 }
 
 impl Brink {
     /// The plane where `normal . p = offset`; what lies where `normal` points to is drawn last.
     pub(crate) fn new(lens: &Lens, normal: Vector, offset: f64) -> Self {
+        let seen = Vector::new(normal.dot(lens.right), normal.dot(lens.up), normal.dot(lens.forward));
+        let across = seen.x.hypot(seen.y);
         Self {
-            normal: Vector::new(normal.dot(lens.right), normal.dot(lens.up), normal.dot(lens.forward)),
-            eye: normal.dot(lens.eye.0) - offset,
+            normal: seen / across,
+            eye: (normal.dot(lens.eye.0) - offset) / across,
         }
     }
 
-    /// How far a point is from the plane on the picture, in pixels, and the direction on the picture away from it.
-    fn away(&self, lens: &Lens, seen: Vector) -> (f64, [f64; 2]) {
-        let across = self.normal.x.hypot(self.normal.y);
-        let away = (self.normal.dot(seen) + self.eye) * lens.scale(seen.z) / across;
-        (away, [self.normal.x / across, -self.normal.y / across])
+    /// How far a point is from the plane across the picture, in millimetres.
+    fn away(&self, seen: Vector) -> f64 {
+        self.normal.dot(seen) + self.eye
     }
 }
 
@@ -63,26 +64,25 @@ impl Scene {
         ends: [Vector; 2],
         reach: f64,
     ) -> [[f32; 2]; 2] {
-        let places = ends.map(|seen| lens.onto(seen));
-        let mut moved = places;
+        let mut moved = ends.map(|seen| lens.onto(seen));
+        let reaches = ends.map(|seen| reach / lens.scale(seen.z));
         for brink in brinks {
-            let aways = ends.map(|seen| brink.away(lens, seen));
-            let touches = aways.map(|(away, _)| away < reach);
+            let aways = ends.map(|seen| brink.away(seen));
+            let touches = [aways[0] < reaches[0], aways[1] < reaches[1]];
             if touches == [false; 2] {
                 continue;
             }
+            let away = [brink.normal.x, -brink.normal.y];
+            // The middle of what comes out beyond the plane.
             let hidden = |seen: Vector| {
-                let (away, [x, y]) = brink.away(lens, seen);
-                let across = (reach + away) * 0.5;
-                self.hides(shell, lens, seen, [-x * across, -y * across], NEARER * reach)
+                let across = (reach + brink.away(seen) * lens.scale(seen.z)) * -0.5;
+                self.hides(shell, lens, seen, away.map(|x| x * across), NEARER * reach)
             };
             let middle = touches == [true; 2] && hidden((ends[0] + ends[1]) * 0.5);
             for k in 0..2 {
-                let (away, direction) = aways[k];
                 if touches[k] && (middle || hidden(ends[k])) {
-                    for axis in 0..2 {
-                        moved[k][axis] += pixels(direction[axis] * (reach - away));
-                    }
+                    let by = (reaches[k] - aways[k]) * lens.scale(ends[k].z);
+                    moved[k] = [0, 1].map(|axis| moved[k][axis] + pixels(away[axis] * by));
                 }
             }
         }
@@ -96,10 +96,10 @@ impl Scene {
         let along = ray.along.dot(lens.forward);
         let first = match lens.projection {
             crate::Projection::Perspective => lens.near,
-            crate::Projection::Parallel => self.bounds.map_or(0.0, |bounds| {
-                let depths = bounds.corners().map(|corner| lens.to_camera(corner).z);
-                depths.into_iter().fold(f64::MAX, f64::min) - bounds.diagonal()
-            }),
+            // Before all of the shell, also where that begins behind the eye.
+            crate::Projection::Parallel => self
+                .bounds
+                .map_or(0.0, |bounds| lens.to_camera(bounds.centre()).z - bounds.diagonal()),
         };
         let last = seen.z - nearer / lens.scale(seen.z);
         self.meets(shell, &ray, [first / along, last / along])

@@ -118,17 +118,9 @@ fn far_corners_do_not_show_when_seen_level() {
     check("polar", &polar(12), View::Front, Projection::Perspective, &turns);
 }
 
-/// Nor from above, where upright walls are edge-on, nor aslant.
-#[test]
-fn far_corners_do_not_show_from_above_and_aslant() {
-    let turns = [[-90.0, 90.0], [20.0, 90.0], [30.0, 35.0]];
-    check("polar", &polar(12), View::Plan, Projection::Parallel, &turns);
-}
-
 /// Two half rings of level courses, at different heights: the level edges of one half lie, with their whole length, in walls that
-/// cut through the middles of the other half's panels.
-#[test]
-fn far_level_edges_do_not_show() {
+/// cut through the middles of the other half's panels. `place` puts it into space.
+fn stack(place: impl Fn(Vector) -> Vector) -> Shell {
     let (sides, courses) = (14, 12);
     let at = |k: usize| {
         let (sin, cos) = (k as f64 / sides as f64 * core::f64::consts::TAU).sin_cos();
@@ -141,10 +133,60 @@ fn far_level_edges_do_not_show() {
         for k in 0..sides {
             let lift = if k < sides / 2 { 0.0 } else { 22.0 };
             let base = Vector::new(start, f64::from(course) * 5.0, f64::from(course) * 60.0 + lift);
-            panels.push([at(k) + base, at(k + 1) - at(k), Vector::new(lean, 5.0, 60.0)]);
+            panels.push([at(k) + base, at(k + 1) - at(k), Vector::new(lean, 5.0, 60.0)].map(&place));
         }
     }
-    let shell = shell(&panels);
+    shell(&panels)
+}
+
+#[test]
+fn far_level_edges_do_not_show() {
     let turns = [[-90.0, 0.0], [10.0, 0.0], [80.0, 0.0], [100.0, 0.01], [-80.0, -0.01]];
-    check("stack", &shell, View::Front, Projection::Parallel, &turns);
+    check("stack", &stack(|p| p), View::Front, Projection::Parallel, &turns);
+}
+
+/// The same lying on its side, from above: now upright walls are seen edge-on.
+#[test]
+fn far_edges_do_not_show_from_above() {
+    let turns = [[-90.0, 90.0], [20.0, 90.0], [20.0, 89.99], [30.0, -90.0], [30.0, 35.0]];
+    let lying = stack(|p| Vector::new(p.z, p.x, p.y));
+    check("stack", &lying, View::Plan, Projection::Parallel, &turns);
+}
+
+/// What can be seen stays in its place: on a convex shell, each edge between two panels that face the eye.
+#[test]
+fn near_edges_are_not_moved() {
+    let shell = polar(12);
+    let bounds = Bounds::of(&shell).unwrap();
+    let mut seen = 0;
+    for (azimuth, elevation) in [(-90.0, 0.0), (13.0, 0.0), (20.0, 90.0)] {
+        let mut camera = Camera::view(View::Front, Projection::Parallel, &bounds, SIZE);
+        camera.azimuth = Angle::from_degrees(azimuth);
+        camera.elevation = Angle::from_degrees(elevation);
+        let lens = camera.lens();
+        let picture = Scene::exact(&shell).picture(&shell, &camera, &Look::default(), &Tints::default(), &[]);
+        for item in &picture.items {
+            let Paint::Stroke { edge, .. } = item.paint else {
+                continue;
+            };
+            let edge = &shell.edges[edge as usize];
+            if edge
+                .panels
+                .iter()
+                .any(|&p| shell.area_vector(p).dot(lens.forward) > -1e-6)
+            {
+                continue;
+            }
+            let [from, to] = edge.ends.map(|v| camera.project(shell.points[v as usize]).unwrap().pos);
+            for &place in picture.points_of(item) {
+                // Positions are f32, rounded by up to 6e-5 at 1400 pixels.
+                assert!(
+                    away(from, to, place) < 1e-3,
+                    "{edge:?} at {place:?} from {azimuth} {elevation}"
+                );
+            }
+            seen += 1;
+        }
+    }
+    assert!(seen > 100, "{seen}");
 }
