@@ -3,6 +3,8 @@
 //! The order is held against a ray cast that knows nothing of the painter: at each pixel's centre a ray is sent at every panel, in
 //! f64, by solving for the panel's own coordinates. Derived; no figure comes from the painter.
 
+#![expect(clippy::unwrap_used, reason = "a test may")]
+
 use std::collections::BTreeMap;
 
 use zonewright::{

@@ -1,5 +1,7 @@
 //! What a kind of start is not told has a usual value, and the forms of the first acceptance run grow from the command line.
 
+#![expect(clippy::unwrap_used, reason = "a test may")]
+
 mod program;
 
 use program::{done, run, status};
