@@ -161,6 +161,7 @@ impl App {
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
         state.derived.follow(&design, state.history.revision(), now);
+        execute::keep_picked(state);
         if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
         }

@@ -95,6 +95,7 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     state.path = path;
     state.message = None;
     state.view.point = None;
+    state.view.panel = None;
     state.view.finding = None;
     state.fit_pending = true;
     remember(state);

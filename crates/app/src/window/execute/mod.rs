@@ -1,6 +1,7 @@
 //! The executor: the only code that changes the state of the window.
 
 mod file;
+mod finish;
 mod path;
 mod shape;
 mod splice;
@@ -8,6 +9,7 @@ mod steps;
 mod view;
 
 pub(crate) use file::{ENDING, sentence};
+pub(crate) use finish::keep_picked;
 pub(crate) use splice::fresh_splice;
 pub(crate) use view::fit_when_pending;
 
@@ -43,6 +45,10 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetStep(at, step) => steps::set(state, at, *step),
         Command::MoveStep(from, to) => steps::shift(state, from, to),
         Command::DeleteStep(at) => steps::delete(state, at),
+        Command::LeaveOut(panel) => finish::leave_out(state, panel),
+        Command::SetFinish(at, step) => finish::set(state, at, *step),
+        Command::PutBack(at, panel) => finish::put_back(state, at, panel),
+        Command::DeleteFinish(at) => finish::delete(state, at),
         Command::ToggleSplice(side, v) => splice::toggle(state, side, v),
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),

@@ -33,7 +33,17 @@ pub(super) fn run(state: &mut State, command: Command) {
             };
         }
         Command::ShowFinding(finding) => view.finding = finding,
-        Command::SelectPoint(point) => view.point = point,
+        Command::SelectPoint(point) => {
+            view.point = point;
+            view.panel = None;
+        }
+        Command::SelectPanel(panel) => {
+            let shell = &state.derived.shell;
+            view.point = None;
+            view.panel = panel
+                .filter(|p| (*p as usize) < shell.panels.len())
+                .map(|p| (p, shell.panel_name(p)));
+        }
         Command::SwapTheme => view.dark = !view.dark,
         Command::Find => state.search = Some(String::new()),
         Command::Dismiss => dismiss(state),
@@ -49,6 +59,7 @@ fn dismiss(state: &mut State) {
     if state.message.take().is_none() {
         state.view.finding = None;
         state.view.point = None;
+        state.view.panel = None;
     }
 }
 

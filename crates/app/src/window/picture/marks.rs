@@ -12,6 +12,7 @@ const MOST_MARKS: usize = 2000;
 /// All marks.
 pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     let mut marks = Vec::new();
+    panel_marks(state, &mut marks);
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
     if let Some((side, index)) = over
@@ -39,6 +40,17 @@ const fn mark(at: Vec<Point>, kind: MarkKind, tone: Tone) -> Mark {
 
 const fn line(at: Vec<Point>, width: f32, tone: Tone) -> Mark {
     mark(at, MarkKind::Line { width, dashed: false }, tone)
+}
+
+fn panel_marks(state: &State, marks: &mut Vec<Mark>) {
+    let Some((panel, _)) = &state.view.panel else { return };
+    let shell = &state.derived.shell;
+    if let Some(panel) = shell.panels.get(*panel as usize) {
+        let corners = panel.corners.map(|v| shell.points[v as usize]);
+        marks.push(mark(corners.to_vec(), MarkKind::Polygon, Tone::Selection));
+        let outline = [&corners[..], &corners[..1]].concat();
+        marks.push(line(outline, 2.0, Tone::Selection));
+    }
 }
 
 fn path_marks(state: &State, marks: &mut Vec<Mark>) {
