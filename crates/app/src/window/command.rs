@@ -23,6 +23,10 @@ pub enum Command {
     OpenPath(PathBuf),
     /// Opens the design that comes with the program.
     OpenSample,
+    /// Imports a path as the start: asks which.
+    Import,
+    /// Imports the path in this file as the start.
+    ImportPath(PathBuf),
     /// Saves under the name that the design has; asks when it has none.
     Save,
     /// Saves under another name: asks which.
@@ -157,6 +161,7 @@ impl Command {
         all.extend([
             Self::Open,
             Self::OpenSample,
+            Self::Import,
             Self::Save,
             Self::SaveAs,
             Self::Export,
@@ -195,6 +200,10 @@ impl Command {
             Self::New(kind) => return super::kinds::new_words(kind),
             Self::Open | Self::OpenPath(_) => ("Open…", "Opens a design from a file."),
             Self::OpenSample => ("Open the sample", "Opens the design that comes with the program."),
+            Self::Import | Self::ImportPath(_) => (
+                "Import a path…",
+                "Makes the path in a CSV, DXF or SVG file the start of the design.",
+            ),
             Self::Save | Self::SaveTo(_) => ("Save", "Saves the design under its name."),
             Self::SaveAs => ("Save as…", "Saves the design under another name."),
             Self::Export | Self::ExportTo(_) => ("Export…", "Writes lists, models and drawings into a folder."),

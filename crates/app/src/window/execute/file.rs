@@ -41,6 +41,9 @@ fn run_saved(state: &mut State, command: Command) {
             .dialogs
             .ask(Asked::Open, state.path.as_deref(), &state.file_name()),
         Command::OpenPath(path) => open(state, &path),
+        Command::Import => state
+            .dialogs
+            .ask(Asked::Import, state.path.as_deref(), &state.file_name()),
         Command::OpenSample => match session::sample() {
             Ok(design) => show(state, design, None),
             Err(text) => state.complain(text),

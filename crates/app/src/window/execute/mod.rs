@@ -22,6 +22,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         | Command::Open
         | Command::OpenPath(_)
         | Command::OpenSample
+        | Command::Import
         | Command::Save
         | Command::SaveAs
         | Command::SaveTo(_)
@@ -53,6 +54,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),
         Command::SetStart(start, field) => shape::set_start(state, *start, field),
+        Command::ImportPath(path) => shape::import_path(state, &path),
         Command::FreePoints => shape::free_points(state),
         Command::ShareGap => path::share_gap(state),
         Command::Path(edit) => path::edit(state, edit),
