@@ -1,7 +1,7 @@
 //! Marks on the picture: points of the path, open Vs, the panel that a V would make, places of findings.
 
 use zonewright_geometry::{Place, Point, Shell, Side};
-use zonewright_painter::{Mark, MarkKind, Tone};
+use zonewright_painter::{Colour, Mark, MarkKind, Tone};
 
 use super::hit;
 use crate::window::{splice_marks, state::State};
@@ -76,9 +76,12 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     let spliced = splice_marks::spliced(state, state.view.side);
     let mut open = Vec::new();
     let mut fresh = Vec::new();
+    let mut held = Vec::new();
     for (index, v) in vs.iter().enumerate().take(MOST_MARKS) {
         let dots = if spliced.contains(&index) {
             &mut fresh
+        } else if v.degenerate {
+            &mut held
         } else {
             &mut open
         };
@@ -92,6 +95,12 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
         },
         Tone::Preview,
     ));
+    let [r, g, b, a] = state.colours().text_weak().to_array();
+    let quiet = MarkKind::Ring {
+        radius: 2.5,
+        width: 1.0,
+    };
+    marks.push(mark(held, quiet, Tone::Own(Colour { r, g, b, a })));
     marks.push(mark(fresh, MarkKind::Dot { radius: 4.0 }, Tone::Preview));
 }
 
