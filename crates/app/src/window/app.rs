@@ -172,6 +172,7 @@ impl App {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
         }
         execute::fit_when_pending(state);
+        execute::refit(state, ctx.input(|i| i.pointer.any_down() || i.pointer.any_released()));
     }
 }
 

@@ -11,7 +11,7 @@ mod view;
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use splice::fresh_splice;
-pub(crate) use view::fit_when_pending;
+pub(crate) use view::{fit_when_pending, refit};
 
 use super::{command::Command, state::State};
 
