@@ -8,7 +8,7 @@ use zonewright_shop::text::{self, Units};
 use super::path::refusal;
 use crate::{
     import::import,
-    window::{kinds, path_place, state::State},
+    window::{kinds, state::State},
 };
 
 /// How far the chords of an imported curve may be from it, in millimetres: a tenth, as on the command line.
@@ -93,11 +93,8 @@ pub(super) fn freed(shape: &Shape) -> Result<Shape, String> {
     let refused = |finding| refusal("The start cannot be turned into free points", &finding);
     let mut freed = shape.to_free().map_err(refused)?;
     let (shell, _) = zonewright_geometry::grow(shape);
-    let lift = path_place::lift(shape, &shell);
-    if let Start::Zigzag(path) = &mut freed.start
-        && lift != Vector::ZERO
-    {
-        path.origin += path_place::own_movement(&shape.placement, lift);
+    if let Start::Zigzag(path) = &mut freed.start {
+        path.origin += Vector::Z * shell.lift_mm;
     }
     Ok(freed)
 }
