@@ -144,3 +144,20 @@ fn one_of_two_doubled_panels_is_left_out_by_its_finding() {
     harness.run();
     assert_eq!((doubled(&harness), panels(&harness)), (count - 1, all - 1));
 }
+
+#[test]
+fn a_grounded_start_whose_panels_are_all_left_out_still_has_its_path() {
+    let mut harness = open(one_course());
+    for _ in 0..8 {
+        harness.state().send(Command::LeaveOut(0));
+        harness.run();
+    }
+    let derived = &harness.state().state().derived;
+    assert_eq!(derived.totals.panels, 0);
+    let path = derived.path.as_ref().unwrap();
+    assert!(
+        path.placed.iter().all(|p| p.0.abs().max_element() < 1e5),
+        "{:?}",
+        path.placed
+    );
+}

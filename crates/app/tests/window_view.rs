@@ -1,7 +1,5 @@
 //! The camera that follows the growth, and the strip's count, without a display.
 
-#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
-
 use std::path::Path;
 
 use egui_kittest::{Harness, kittest::Queryable};

@@ -50,7 +50,12 @@ pub(super) fn finish(
     if !mesh.points.iter().map(|p| p.0).sum::<crate::Vector>().is_finite() {
         return Err(Finding::new(Code::NotFinite, Place::Design));
     }
-    let lift = if word.grounded { -lowest(&mesh.points) } else { 0.0 };
+    // With every panel left out there is no lowest point, and nothing to put on the ground.
+    let lift = if word.grounded && !mesh.points.is_empty() {
+        -lowest(&mesh.points)
+    } else {
+        0.0
+    };
     let placed = Placed::new(&shape.placement, lift);
     if !placed.is_nothing() {
         for point in &mut mesh.points {
