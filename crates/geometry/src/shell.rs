@@ -202,6 +202,8 @@ pub struct Shell {
     pub fronts: [FrontState; 2],
     /// By how much a front that is meant to close misses, in millimetres; 0 when it closes, none on an open one.
     pub closing_gap: Option<f64>,
+    /// By how much the shell was lifted along z before it was placed, in millimetres: a grounded start is put on z = 0.
+    pub lift_mm: f64,
 }
 
 impl Shell {

@@ -7,6 +7,7 @@ use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
 use super::{
     command::{Command, Sender},
     derived::Counts,
+    dialogs::Asked,
     execute, menu,
     panels::{self, Cx},
     path_box, picture, prompts, search,
@@ -125,7 +126,12 @@ impl App {
                 .find(|p| !p.as_os_str().is_empty())
         });
         if let Some(path) = dropped {
-            self.sender.send(Command::OpenPath(path));
+            let is_path = path_box::fits_ending(&path, Asked::Import.endings());
+            self.sender.send(if is_path {
+                Command::ImportPath(path)
+            } else {
+                Command::OpenPath(path)
+            });
         }
         if ctx.input(|i| i.viewport().close_requested()) && !self.state.closing && self.state.history.unsaved() {
             ctx.send_viewport_cmd(ViewportCommand::CancelClose);
@@ -161,10 +167,12 @@ impl App {
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
         state.derived.follow(&design, state.history.revision(), now);
+        execute::keep_picked(state);
         if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
         }
         execute::fit_when_pending(state);
+        execute::refit(state, ctx.input(|i| i.pointer.any_down() || i.pointer.any_released()));
     }
 }
 

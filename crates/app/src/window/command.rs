@@ -5,7 +5,7 @@
 use std::path::PathBuf;
 
 use egui::{Key, KeyboardShortcut, Modifiers};
-use zonewright_geometry::{Outside, Placement, Side, Start, Step, VName, start::DragRule};
+use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
@@ -23,6 +23,10 @@ pub enum Command {
     OpenPath(PathBuf),
     /// Opens the design that comes with the program.
     OpenSample,
+    /// Imports a path as the start: asks which.
+    Import,
+    /// Imports the path in this file as the start.
+    ImportPath(PathBuf),
     /// Saves under the name that the design has; asks when it has none.
     Save,
     /// Saves under another name: asks which.
@@ -53,6 +57,14 @@ pub enum Command {
     MoveStep(usize, usize),
     /// Deletes the step at this place.
     DeleteStep(usize),
+    /// Leaves this panel of the shell out, in a finishing step.
+    LeaveOut(u32),
+    /// Replaces the finishing step at this place.
+    SetFinish(usize, Box<Finish>),
+    /// Puts a panel back: the finishing step, and the panel's place in its list.
+    PutBack(usize, usize),
+    /// Deletes the finishing step at this place.
+    DeleteFinish(usize),
     /// Splices the directions in hand at an open V, or takes that splice away again.
     ToggleSplice(Side, VName),
     /// Takes other directions in hand.
@@ -105,6 +117,8 @@ pub enum Command {
     ShowFinding(Option<usize>),
     /// Picks a point of the path; none picks nothing.
     SelectPoint(Option<usize>),
+    /// Picks a panel of the shell; none picks nothing.
+    SelectPanel(Option<u32>),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -147,6 +161,7 @@ impl Command {
         all.extend([
             Self::Open,
             Self::OpenSample,
+            Self::Import,
             Self::Save,
             Self::SaveAs,
             Self::Export,
@@ -185,6 +200,10 @@ impl Command {
             Self::New(kind) => return super::kinds::new_words(kind),
             Self::Open | Self::OpenPath(_) => ("Open…", "Opens a design from a file."),
             Self::OpenSample => ("Open the sample", "Opens the design that comes with the program."),
+            Self::Import | Self::ImportPath(_) => (
+                "Import a path…",
+                "Makes the path in a CSV, DXF or SVG file the start of the design.",
+            ),
             Self::Save | Self::SaveTo(_) => ("Save", "Saves the design under its name."),
             Self::SaveAs => ("Save as…", "Saves the design under another name."),
             Self::Export | Self::ExportTo(_) => ("Export…", "Writes lists, models and drawings into a folder."),
@@ -198,6 +217,10 @@ impl Command {
             Self::SetStep(..) => ("Change a step", "Changes what a step does."),
             Self::MoveStep(..) => ("Move a step", "Moves a step up or down in the record."),
             Self::DeleteStep(_) => ("Delete a step", "Takes a step out of the record."),
+            Self::LeaveOut(_) => ("Leave this panel out", "Takes the panel out of the finished shell."),
+            Self::SetFinish(..) => ("Change a finishing step", "Changes a finishing step."),
+            Self::PutBack(..) => ("Put a panel back", "Brings a panel that was left out back."),
+            Self::DeleteFinish(_) => ("Delete a finishing step", "Brings all panels of a finishing step back."),
             Self::ToggleSplice(..) => (
                 "Splice here",
                 "Splices the directions in hand at an open V, or takes them out.",
@@ -236,6 +259,7 @@ impl Command {
             Self::SetSide(_) | Self::SwapSide => ("The other front", "Works on the other of the two fronts."),
             Self::ShowFinding(_) => ("Show a finding", "Marks where a finding is."),
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
+            Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

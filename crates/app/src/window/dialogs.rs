@@ -16,11 +16,16 @@ use super::{command::Command, execute::ENDING};
 /// 4 ms without one.
 const NO_SERVICE: Duration = Duration::from_millis(100);
 
+/// The endings of files that paths are imported from, without the dot.
+pub(crate) const IMPORTS: [&str; 3] = ["csv", "dxf", "svg"];
+
 /// What is asked for.
 #[derive(Clone, Copy, PartialEq, Eq, Debug)]
 pub enum Asked {
     /// A design to open.
     Open,
+    /// A path to import.
+    Import,
     /// A name to save the design under.
     Save,
     /// A folder to export into.
@@ -33,6 +38,7 @@ impl Asked {
     pub const fn heading(self) -> &'static str {
         match self {
             Self::Open => "Open a design",
+            Self::Import => "Import a path",
             Self::Save => "Save the design as",
             Self::Export => "Export into a folder",
         }
@@ -43,8 +49,19 @@ impl Asked {
     pub const fn action(self) -> &'static str {
         match self {
             Self::Open => "Open",
+            Self::Import => "Import",
             Self::Save => "Save",
             Self::Export => "Export",
+        }
+    }
+
+    /// The endings of the files that it is about, without the dot; none when it is about a folder.
+    #[must_use]
+    pub const fn endings(self) -> &'static [&'static str] {
+        match self {
+            Self::Open | Self::Save => &[ENDING],
+            Self::Import => &IMPORTS,
+            Self::Export => &[],
         }
     }
 
@@ -53,6 +70,7 @@ impl Asked {
     pub fn command(self, path: PathBuf) -> Command {
         match self {
             Self::Open => Command::OpenPath(path),
+            Self::Import => Command::ImportPath(path),
             Self::Save => Command::SaveTo(path),
             Self::Export => Command::ExportTo(path),
         }
@@ -103,7 +121,7 @@ impl Dialogs {
         let stem = name.strip_suffix(&format!(".{ENDING}")).unwrap_or(name);
         let name = match asked {
             Asked::Save => format!("{}.{ENDING}", stem.to_lowercase().replace(' ', "-")),
-            Asked::Open | Asked::Export => String::new(),
+            Asked::Open | Asked::Import | Asked::Export => String::new(),
         };
         self.start = (folder, name);
         self.own = None;
@@ -169,6 +187,7 @@ impl Dialogs {
                 let dialog = rfd::FileDialog::new().set_title(asked.heading()).set_directory(folder);
                 let path = match asked {
                     Asked::Open => dialog.add_filter("Designs", &[ENDING]).pick_file(),
+                    Asked::Import => dialog.add_filter("Paths", &IMPORTS).pick_file(),
                     Asked::Save => dialog.add_filter("Designs", &[ENDING]).set_file_name(name).save_file(),
                     Asked::Export => dialog.pick_folder(),
                 };

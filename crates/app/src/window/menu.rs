@@ -15,7 +15,7 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                     named(cx, ui, kind.name, Command::New(kind.word));
                 }
             });
-            items(cx, ui, [Command::Open, Command::OpenSample]);
+            items(cx, ui, [Command::Open, Command::OpenSample, Command::Import]);
             ui.separator();
             items(cx, ui, [Command::Save, Command::SaveAs, Command::Export]);
             ui.separator();

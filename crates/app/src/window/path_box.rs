@@ -90,13 +90,19 @@ fn look_up(path: &mut PathText, asked: Asked) {
         .filter_map(|entry| {
             let is_folder = entry.path().is_dir();
             let name = entry.file_name().into_string().ok()?;
-            let fits = is_folder || (asked != Asked::Export && name.ends_with(&format!(".{ENDING}")));
+            let fits = is_folder || fits_ending(Path::new(&name), asked.endings());
             (fits && !name.starts_with('.')).then_some((name, is_folder))
         })
         .collect();
     entries.sort_by(|a, b| b.1.cmp(&a.1).then_with(|| a.0.cmp(&b.0)));
     entries.truncate(MOST_ENTRIES);
     path.entries = entries;
+}
+
+/// Whether a file has one of these endings, in letters of either case.
+pub(super) fn fits_ending(file: &Path, endings: &[&str]) -> bool {
+    let ending = file.extension().unwrap_or_default();
+    endings.iter().any(|e| ending.eq_ignore_ascii_case(e))
 }
 
 fn entries_ui(ui: &mut Ui, path: &mut PathText, asked: Asked) {

@@ -1,10 +1,10 @@
 //! Where the path of the start stands in the picture.
 //!
 //! The path has its own frame; the shell is placed, and some kinds lift it to the ground. One affine map leads from the
-//! one to the other: it is found by placing, and by the difference between a grown node and the same node of the path.
+//! one to the other: the lift, which the shell keeps, and then the placing.
 
 use glam::{DMat3, DVec3};
-use zonewright_geometry::{Placement, Point, Role, Shape, Shell, Start, Vector, grow};
+use zonewright_geometry::{Placement, Point, Role, Shape, Shell, Start, Vector};
 
 /// The start's path where it stands.
 #[derive(Clone, PartialEq, Debug)]
@@ -34,7 +34,7 @@ impl PlacedPath {
         }
         let placement = shape.placement;
         // The own frame is the one that the path has once it is free: a drag that frees it goes on in the same frame.
-        let lifted = own_movement(&placement, lift(shape, shell));
+        let lifted = Vector::Z * shell.lift_mm;
         for point in &mut own {
             *point += lifted;
         }
@@ -71,23 +71,4 @@ fn turned(placement: &Placement) -> DMat3 {
     let mirror = if placement.mirrored { -1.0 } else { 1.0 };
     let scale = DMat3::from_diagonal(DVec3::new(mirror, 1.0, 1.0) * placement.scale);
     DMat3::from_rotation_z(z) * DMat3::from_rotation_y(y) * DMat3::from_rotation_x(x) * scale
-}
-
-/// By how much growing lifts a start to the ground, in the placed frame: the difference to the same path as free points,
-/// which is never lifted.
-#[must_use]
-pub(super) fn lift(shape: &Shape, shell: &Shell) -> Vector {
-    let grounded = shape.start.first_word().is_ok_and(|word| word.grounded);
-    let free = if grounded { shape.to_free().ok() } else { None };
-    let Some(free) = free else { return Vector::ZERO };
-    let (other, _) = grow(&free);
-    // Both grow alike, so that their first vertices belong together; without a panel there are only the fronts' nodes.
-    let first = |shell: &Shell| {
-        let node = shell.fronts.iter().find_map(|front| front.nodes.first());
-        shell.points.first().or(node).copied()
-    };
-    match (first(shell), first(&other)) {
-        (Some(lifted), Some(plain)) => lifted - plain,
-        _ => Vector::ZERO,
-    }
 }

@@ -3,7 +3,7 @@
 use std::{path::PathBuf, sync::Arc};
 
 use zonewright_geometry::Shape;
-use zonewright_painter::Camera;
+use zonewright_painter::{Bounds, Camera};
 use zonewright_shop::text::Units;
 
 use super::{
@@ -32,6 +32,10 @@ pub struct State {
     pub camera: Camera,
     /// Whether the camera is to be fitted as soon as there is a shell and a size.
     pub fit_pending: bool,
+    /// Whether the user has turned, moved or zoomed the camera since it was last fitted: it is then left where it is.
+    pub camera_moved: bool,
+    /// The box of the shell that the camera was last fitted to, or that was left as it came.
+    pub fitted: Option<Bounds>,
     /// What follows from the design.
     pub derived: Derived,
     /// Slow stages.
@@ -66,6 +70,8 @@ impl State {
             path,
             camera: super::picture::first_camera(view.projection),
             fit_pending: true,
+            camera_moved: false,
+            fitted: None,
             view,
             derived: Derived::new(),
             worker,

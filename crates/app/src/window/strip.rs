@@ -41,11 +41,24 @@ fn head_ui(cx: Cx<'_>, ui: &mut Ui) {
         front.letters.len(),
         if front.closed { ", closed" } else { "" }
     ));
-    ui.weak(match cx.state.derived.open_on(side).len() {
-        0 => "still: no open V".to_owned(),
+    ui.add(egui::Label::new(egui::RichText::new(stands(cx, side)).weak()).wrap());
+}
+
+/// How far a front is: how many Vs can be filled, and how many are spurs, which make no panel.
+fn stands(cx: Cx<'_>, side: Side) -> String {
+    let vs = cx.state.derived.open_on(side);
+    let held = vs.iter().filter(|v| v.degenerate).count();
+    let open = match vs.len() - held {
+        0 if held == 0 => return "still: no open V".to_owned(),
+        0 => "still".to_owned(),
         1 => "1 open V".to_owned(),
         n => format!("{n} open Vs"),
-    });
+    };
+    match held {
+        0 => open,
+        1 => format!("{open}: 1 spur held"),
+        n => format!("{open}: {n} spurs held"),
+    }
 }
 
 fn front(cx: Cx<'_>, side: Side) -> &FrontState {
@@ -114,7 +127,9 @@ fn notch(
     let side = cx.state.view.side;
     let fresh = spliced.contains(&index);
     let response = ui.interact(around, ui.scope_id().with(("v", index)), Sense::click());
-    let name = format!("Open V {}", index + 1);
+    let held = cx.state.derived.open_on(side)[index].degenerate;
+    let what = if held { "Held spur" } else { "Open V" };
+    let name = format!("{what} {}", index + 1);
     response.widget_info(|| WidgetInfo::selected(AccessRole::CheckBox, true, fresh, &name));
     if response.hovered() || response.has_focus() {
         widgets.over_next = Some((side, index));
@@ -126,12 +141,21 @@ fn notch(
     }
     let over = widgets.over == Some((side, index));
     let colours = cx.state.colours();
-    let fill = if over { colours.preview() } else { colours.accent_weak() };
-    ui.painter()
-        .add(Shape::convex_polygon(corners.to_vec(), fill, Stroke::NONE));
+    let fill = match (over, held) {
+        (true, _) => Some(colours.preview()),
+        (false, true) => None,
+        (false, false) => Some(colours.accent_weak()),
+    };
+    if let Some(fill) = fill {
+        ui.painter()
+            .add(Shape::convex_polygon(corners.to_vec(), fill, Stroke::NONE));
+    }
     let tip = corners[1] + vec2(0.0, 6.0);
     if fresh {
         ui.painter().circle_filled(tip, 3.5, colours.preview());
+    } else if held {
+        ui.painter()
+            .circle_stroke(tip, 2.0, Stroke::new(1.0, colours.text_weak()));
     } else {
         ui.painter()
             .circle_stroke(tip, 3.0, Stroke::new(1.3, colours.preview()));

@@ -1,6 +1,6 @@
 //! What is not part of the design: where one looks from, what is picked, what is in hand.
 
-use zonewright_geometry::{Direction, Side, Vector, start::DragRule};
+use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 
 use super::command::Words;
@@ -38,6 +38,8 @@ pub struct ViewState {
     pub hand: Hand,
     /// The picked point of the path.
     pub point: Option<usize>,
+    /// The picked panel, by its index in the shell and by its name.
+    pub panel: Option<(u32, PanelName)>,
     /// What follows a dragged point.
     pub rule: DragRule,
     /// The finding that is shown in the picture.
@@ -56,6 +58,7 @@ impl Default for ViewState {
             side: Side::Fore,
             hand: Hand::default(),
             point: None,
+            panel: None,
             rule: DragRule::Neighbours,
             finding: None,
             dark: false,

@@ -70,6 +70,7 @@ pub(super) fn finish(
         courses: mesh.courses,
         fronts: states,
         closing_gap,
+        lift_mm: lift,
     };
     report(&shell, findings);
     Ok(shell)

@@ -41,6 +41,9 @@ fn run_saved(state: &mut State, command: Command) {
             .dialogs
             .ask(Asked::Open, state.path.as_deref(), &state.file_name()),
         Command::OpenPath(path) => open(state, &path),
+        Command::Import => state
+            .dialogs
+            .ask(Asked::Import, state.path.as_deref(), &state.file_name()),
         Command::OpenSample => match session::sample() {
             Ok(design) => show(state, design, None),
             Err(text) => state.complain(text),
@@ -95,6 +98,7 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     state.path = path;
     state.message = None;
     state.view.point = None;
+    state.view.panel = None;
     state.view.finding = None;
     state.fit_pending = true;
     remember(state);

@@ -1,6 +1,7 @@
 //! The executor: the only code that changes the state of the window.
 
 mod file;
+mod finish;
 mod path;
 mod shape;
 mod splice;
@@ -8,8 +9,9 @@ mod steps;
 mod view;
 
 pub(crate) use file::{ENDING, sentence};
+pub(crate) use finish::keep_picked;
 pub(crate) use splice::fresh_splice;
-pub(crate) use view::fit_when_pending;
+pub(crate) use view::{fit_when_pending, refit};
 
 use super::{command::Command, state::State};
 
@@ -20,6 +22,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         | Command::Open
         | Command::OpenPath(_)
         | Command::OpenSample
+        | Command::Import
         | Command::Save
         | Command::SaveAs
         | Command::SaveTo(_)
@@ -43,10 +46,15 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetStep(at, step) => steps::set(state, at, *step),
         Command::MoveStep(from, to) => steps::shift(state, from, to),
         Command::DeleteStep(at) => steps::delete(state, at),
+        Command::LeaveOut(panel) => finish::leave_out(state, panel),
+        Command::SetFinish(at, step) => finish::set(state, at, *step),
+        Command::PutBack(at, panel) => finish::put_back(state, at, panel),
+        Command::DeleteFinish(at) => finish::delete(state, at),
         Command::ToggleSplice(side, v) => splice::toggle(state, side, v),
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),
         Command::SetStart(start, field) => shape::set_start(state, *start, field),
+        Command::ImportPath(path) => shape::import_path(state, &path),
         Command::FreePoints => shape::free_points(state),
         Command::ShareGap => path::share_gap(state),
         Command::Path(edit) => path::edit(state, edit),

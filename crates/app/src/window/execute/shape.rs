@@ -1,10 +1,18 @@
 //! The start, the placement, the outside, the unit.
 
-use zonewright_geometry::{Outside, Placement, Shape, Start, Vector};
-use zonewright_shop::text::Units;
+use std::path::Path;
+
+use zonewright_geometry::{Outside, Placement, Shape, Start, Vector, start::FreePath};
+use zonewright_shop::text::{self, Units};
 
 use super::path::refusal;
-use crate::window::{kinds, path_place, state::State};
+use crate::{
+    import::import,
+    window::{kinds, state::State},
+};
+
+/// How far the chords of an imported curve may be from it, in millimetres: a tenth, as on the command line.
+const FLATTENING_MM: f64 = 0.1;
 
 /// Changes the kind of start. The steps stay: they say so themselves when they find nothing.
 pub(super) fn set_kind(state: &mut State, word: &'static str) {
@@ -52,16 +60,41 @@ pub(super) fn free_points(state: &mut State) {
     }
 }
 
+/// Makes the path in a file the start, as free points. The steps stay: they say so themselves when they find nothing.
+pub(super) fn import_path(state: &mut State, file: &Path) {
+    let kept = "The design in the window was kept.";
+    let path = match import(file, FLATTENING_MM) {
+        Ok(path) => path,
+        Err(error) => return state.complain(super::sentence(&format!("{error}. {kept}"))),
+    };
+    let (count, closed) = (path.points.len(), path.closed);
+    let start = match FreePath::from_points(&path.points, closed) {
+        Ok(start) => Start::Zigzag(start),
+        Err(finding) => {
+            let what = format!("{} cannot be the start", file.display());
+            return state.complain(format!("{} {kept}", refusal(&what, &finding)));
+        }
+    };
+    state.change("Import a path", None, |design| {
+        design.shape.start = start;
+        design.shape.outside = Outside::by_rule(&design.shape);
+    });
+    state.view.point = None;
+    state.fit_pending = true;
+    let way = if closed { "a closed" } else { "an open" };
+    let within = text::millimetres(FLATTENING_MM, 1);
+    state.say(format!(
+        "Imported {way} path of {count} points; curves became chords within {within}"
+    ));
+}
+
 /// The same shape with free points. A kind that is lifted to the ground keeps its place: the lift goes into the origin.
 pub(super) fn freed(shape: &Shape) -> Result<Shape, String> {
     let refused = |finding| refusal("The start cannot be turned into free points", &finding);
     let mut freed = shape.to_free().map_err(refused)?;
     let (shell, _) = zonewright_geometry::grow(shape);
-    let lift = path_place::lift(shape, &shell);
-    if let Start::Zigzag(path) = &mut freed.start
-        && lift != Vector::ZERO
-    {
-        path.origin += path_place::own_movement(&shape.placement, lift);
+    if let Start::Zigzag(path) = &mut freed.start {
+        path.origin += Vector::Z * shell.lift_mm;
     }
     Ok(freed)
 }

@@ -7,6 +7,9 @@ use crate::window::{command::Command, state::State};
 
 /// Carries out a command that leaves the design alone.
 pub(super) fn run(state: &mut State, command: Command) {
+    if matches!(command, Command::Orbit(_) | Command::Pan(_) | Command::Zoom(..)) {
+        state.camera_moved = true;
+    }
     let view = &mut state.view;
     match command {
         Command::Orbit(by) => state.camera.orbit(by.x, by.y),
@@ -33,7 +36,17 @@ pub(super) fn run(state: &mut State, command: Command) {
             };
         }
         Command::ShowFinding(finding) => view.finding = finding,
-        Command::SelectPoint(point) => view.point = point,
+        Command::SelectPoint(point) => {
+            view.point = point;
+            view.panel = None;
+        }
+        Command::SelectPanel(panel) => {
+            let shell = &state.derived.shell;
+            view.point = None;
+            view.panel = panel
+                .filter(|p| (*p as usize) < shell.panels.len())
+                .map(|p| (p, shell.panel_name(p)));
+        }
         Command::SwapTheme => view.dark = !view.dark,
         Command::Find => state.search = Some(String::new()),
         Command::Dismiss => dismiss(state),
@@ -49,6 +62,7 @@ fn dismiss(state: &mut State) {
     if state.message.take().is_none() {
         state.view.finding = None;
         state.view.point = None;
+        state.view.panel = None;
     }
 }
 
@@ -59,6 +73,8 @@ fn bounds(state: &State) -> Option<Bounds> {
 
 fn look(state: &mut State, to: View) {
     let Some(bounds) = bounds(state) else { return };
+    state.camera_moved = false;
+    state.fitted = Some(bounds);
     if to == View::Fit {
         state.camera.fit(&bounds);
     } else {
@@ -74,5 +90,23 @@ pub(crate) fn fit_when_pending(state: &mut State) {
     {
         state.camera = Camera::view(View::Fit, state.view.projection, &bounds, state.camera.size);
         state.fit_pending = false;
+        state.camera_moved = false;
+        state.fitted = Some(bounds);
+    }
+}
+
+/// Fits the camera again when the shell's box is another one and the user has left the camera alone. While something is
+/// dragged, and for what it leaves behind, the camera stays: a dragged point must stay under the pointer.
+pub(crate) fn refit(state: &mut State, dragging: bool) {
+    let bounds = bounds(state);
+    if state.fitted == bounds {
+        return;
+    }
+    state.fitted = bounds;
+    if let Some(bounds) = bounds
+        && !dragging
+        && !state.camera_moved
+    {
+        state.camera.fit(&bounds);
     }
 }

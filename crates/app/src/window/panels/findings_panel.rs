@@ -1,7 +1,7 @@
 //! What is to be said about the design; a click shows the place.
 
 use egui::{RichText, Ui};
-use zonewright_geometry::{Finding, Level, Place};
+use zonewright_geometry::{Code, Finding, Level, Place};
 
 use super::Cx;
 use crate::window::{command::Command, derived::MOST_SHOWN};
@@ -45,8 +45,25 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, finding: &Finding) {
                 cx.tx.send(Command::ShowFinding((!shown).then_some(at)));
             }
         }
+        if let Some(panel) = spare(finding) {
+            let name = format!("Leave one panel of finding {} out", at + 1);
+            if super::small(ui, true, "Leave one out", &name) {
+                cx.tx.send(Command::LeaveOut(panel));
+            }
+        }
         ui.label(said);
     });
+}
+
+/// The panel to leave out of two that lie on the same place: the later one.
+fn spare(finding: &Finding) -> Option<u32> {
+    match (&finding.code, &finding.place) {
+        (Code::DoubledPanel, Place::Panels(panels)) => match panels[..] {
+            [_, later] => Some(later),
+            _ => None,
+        },
+        _ => None,
+    }
 }
 
 /// Whether a finding has a place that can be shown in the picture.

@@ -3,6 +3,8 @@
 mod curve_fields;
 mod directions;
 mod findings_panel;
+mod finish_panel;
+mod panel_panel;
 mod path_table;
 mod placement_panel;
 mod readouts;
@@ -33,18 +35,24 @@ pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
         .show(ui, |ui| {
             section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
             section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
-            section(ui, "Steps", true, |ui| steps_panel::steps_ui(cx, ui));
+            section(ui, "Steps", true, |ui| {
+                steps_panel::steps_ui(cx, ui);
+                finish_panel::finish_ui(cx, ui);
+            });
             section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
             section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
         });
 }
 
-/// The right panel: readouts and findings.
+/// The right panel: the picked panel, readouts and findings.
 pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
     ScrollArea::vertical()
         .auto_shrink(false)
         .id_salt("right")
         .show(ui, |ui| {
+            if let Some((panel, _)) = &cx.state.view.panel {
+                section(ui, "Panel", true, |ui| panel_panel::panel_ui(cx, ui, *panel));
+            }
             section(ui, "Readouts", true, |ui| readouts::readouts_ui(cx, ui));
             section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
         });

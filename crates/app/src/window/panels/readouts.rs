@@ -10,15 +10,20 @@ use super::Cx;
 pub(super) fn readouts_ui(cx: Cx<'_>, ui: &mut Ui) {
     ui.spacing_mut().item_spacing.y = 3.0;
     for (name, value) in rows(cx) {
-        ui.horizontal(|ui| {
-            ui.weak(name);
-            ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
-                let shown = ui.add(Label::new(&value).truncate());
-                // The value is read together with its name.
-                shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("{name}: {value}")));
-            });
-        });
+        readout(ui, name, &value);
     }
+}
+
+/// One name and its value.
+pub(super) fn readout(ui: &mut Ui, name: &str, value: &str) {
+    ui.horizontal(|ui| {
+        ui.weak(name);
+        ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
+            let shown = ui.add(Label::new(value).truncate());
+            // The value is read together with its name.
+            shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("{name}: {value}")));
+        });
+    });
 }
 
 /// Names and values of all readouts, as they are shown.

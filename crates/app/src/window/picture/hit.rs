@@ -1,11 +1,15 @@
 //! What is under the pointer: a point of the path, or an open V.
 
-use zonewright_geometry::{OpenV, Point};
+use zonewright_geometry::{NONE, OpenV, Point};
+use zonewright_painter::{Pick, pick};
 
 use crate::window::state::State;
 
 /// How near the pointer must come to something small, in points.
 const REACH: f32 = 9.0;
+
+/// How near the pointer must come to an edge that is picked before the panel there: only when it is exactly on it.
+const EXACT: f32 = 0.0;
 
 /// Something that the pointer is over.
 #[derive(Clone, Copy, PartialEq, Eq, Debug)]
@@ -30,6 +34,22 @@ pub(super) fn at(state: &State, pos: egui::Vec2) -> Option<Hit> {
 /// The middle of the panel that an open V would make: where its dot is.
 pub(super) fn middle(v: &OpenV) -> Point {
     v.nodes[0] + (v.nodes[2] - v.nodes[0]) * 0.5
+}
+
+/// The panel at a place of the picture; exactly on an edge it is one of the edge's panels.
+pub(super) fn panel_at(state: &State, pos: egui::Vec2) -> Option<u32> {
+    let (scene, shell) = (&state.derived.scene, &state.derived.shell);
+    match pick(scene, shell, &state.camera, [pos.x, pos.y], EXACT)? {
+        Pick::Panel(panel) => Some(panel),
+        Pick::Edge(edge) => {
+            let panels = shell.edges.get(edge as usize)?.panels;
+            panels.into_iter().find(|p| *p != NONE)
+        }
+        Pick::Vertex(vertex) => {
+            let at = shell.panels.iter().position(|p| p.corners.contains(&vertex))?;
+            u32::try_from(at).ok()
+        }
+    }
 }
 
 fn nearest(state: &State, pos: egui::Vec2, points: impl Iterator<Item = Point>) -> Option<usize> {

@@ -66,7 +66,11 @@ fn clicked(cx: Cx<'_>, response: &Response, rect: Rect) {
                 cx.tx.send(Command::ToggleSplice(cx.state.view.side, name));
             }
         }
-        None => cx.tx.send(Command::SelectPoint(None)),
+        None => {
+            let picked = cx.state.view.panel.as_ref().map(|(panel, _)| *panel);
+            let panel = hit::panel_at(cx.state, pos - rect.min);
+            cx.tx.send(Command::SelectPanel(panel.filter(|p| picked != Some(*p))));
+        }
     }
 }
 

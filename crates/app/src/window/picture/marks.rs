@@ -1,7 +1,7 @@
 //! Marks on the picture: points of the path, open Vs, the panel that a V would make, places of findings.
 
 use zonewright_geometry::{Place, Point, Shell, Side};
-use zonewright_painter::{Mark, MarkKind, Tone};
+use zonewright_painter::{Colour, Mark, MarkKind, Tone};
 
 use super::hit;
 use crate::window::{splice_marks, state::State};
@@ -12,6 +12,7 @@ const MOST_MARKS: usize = 2000;
 /// All marks.
 pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     let mut marks = Vec::new();
+    panel_marks(state, &mut marks);
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
     if let Some((side, index)) = over
@@ -41,6 +42,17 @@ const fn line(at: Vec<Point>, width: f32, tone: Tone) -> Mark {
     mark(at, MarkKind::Line { width, dashed: false }, tone)
 }
 
+fn panel_marks(state: &State, marks: &mut Vec<Mark>) {
+    let Some((panel, _)) = &state.view.panel else { return };
+    let shell = &state.derived.shell;
+    if let Some(panel) = shell.panels.get(*panel as usize) {
+        let corners = panel.corners.map(|v| shell.points[v as usize]);
+        marks.push(mark(corners.to_vec(), MarkKind::Polygon, Tone::Selection));
+        let outline = [&corners[..], &corners[..1]].concat();
+        marks.push(line(outline, 2.0, Tone::Selection));
+    }
+}
+
 fn path_marks(state: &State, marks: &mut Vec<Mark>) {
     let Some(path) = &state.derived.path else { return };
     let points: Vec<Point> = path.placed.iter().copied().take(MOST_MARKS).collect();
@@ -64,9 +76,12 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     let spliced = splice_marks::spliced(state, state.view.side);
     let mut open = Vec::new();
     let mut fresh = Vec::new();
+    let mut held = Vec::new();
     for (index, v) in vs.iter().enumerate().take(MOST_MARKS) {
         let dots = if spliced.contains(&index) {
             &mut fresh
+        } else if v.degenerate {
+            &mut held
         } else {
             &mut open
         };
@@ -80,6 +95,12 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
         },
         Tone::Preview,
     ));
+    let [r, g, b, a] = state.colours().text_weak().to_array();
+    let quiet = MarkKind::Ring {
+        radius: 2.5,
+        width: 1.0,
+    };
+    marks.push(mark(held, quiet, Tone::Own(Colour { r, g, b, a })));
     marks.push(mark(fresh, MarkKind::Dot { radius: 4.0 }, Tone::Preview));
 }
 

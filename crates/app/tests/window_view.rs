@@ -1,0 +1,69 @@
+//! The camera that follows the growth, and the strip's count, without a display.
+
+use std::path::Path;
+
+use egui_kittest::{Harness, kittest::Queryable};
+use zonewright::{
+    document::{Design, new_design, read_design},
+    window::{App, Command},
+};
+use zonewright_geometry::{
+    Angle, Spurs, Start,
+    start::{PolarBy, PolarForm},
+};
+
+fn open(design: Design) -> Harness<'static, App> {
+    let mut harness = Harness::builder()
+        .with_size([1280.0, 800.0])
+        .with_max_steps(20)
+        .build_eframe(move |cc| App::new_headless(&cc.egui_ctx, design));
+    harness.run();
+    harness
+}
+
+#[test]
+fn the_camera_follows_growth_until_the_user_moves_it() {
+    let form = PolarForm {
+        ribs: 8,
+        by: PolarBy::PitchEdge {
+            pitch: Angle::from_degrees(35.0),
+            edge_mm: 500.0,
+        },
+    };
+    let mut harness = open(new_design(Start::Polar(form), Some(1), Spurs::default()).unwrap());
+    let camera = |h: &Harness<'_, App>| h.state().state().camera;
+    let first = camera(&harness);
+    for _ in 0..2 {
+        harness.state().send(Command::AddCourse);
+        harness.run();
+    }
+    let grown = camera(&harness);
+    assert_ne!(grown, first);
+    // The same place as a fit by hand.
+    harness.state().send(Command::Look(zonewright_painter::View::Fit));
+    harness.run();
+    assert_eq!(camera(&harness), grown);
+    harness.state().send(Command::Orbit(egui::vec2(30.0, 5.0)));
+    harness.run();
+    let own = camera(&harness);
+    harness.state().send(Command::AddCourse);
+    harness.run();
+    assert_eq!(camera(&harness), own, "moved by the user: left alone");
+}
+
+#[test]
+fn held_spurs_are_told_from_open_vs() {
+    let file = Path::new(env!("CARGO_MANIFEST_DIR")).join("../../assets/designs/market-lantern.ron");
+    let mut harness = open(read_design(&file).unwrap());
+    let state = harness.state().state();
+    let vs = state.derived.open_on(state.view.side);
+    assert!(!vs.is_empty() && vs.iter().all(|v| v.degenerate), "held spurs only");
+    let steps = state.shape().steps.len();
+    harness.get_by_label(&format!("still: {} spurs held", vs.len()));
+    harness.get_by_label("Held spur 1").click();
+    harness.run();
+    assert!(
+        harness.state().state().shape().steps.len() > steps,
+        "a click splices there too"
+    );
+}
