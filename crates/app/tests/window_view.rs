@@ -53,7 +53,7 @@ fn the_camera_follows_growth_until_the_user_moves_it() {
 
 #[test]
 fn held_spurs_are_told_from_open_vs() {
-    let file = Path::new(env!("CARGO_MANIFEST_DIR")).join("../../assets/designs/market-lantern.ron");
+    let file = Path::new(env!("CARGO_MANIFEST_DIR")).join("../../assets/designs/pier-head-housing.ron");
     let mut harness = open(read_design(&file).unwrap());
     let state = harness.state().state();
     let vs = state.derived.open_on(state.view.side);

@@ -13,8 +13,8 @@ pub const fn bundled() -> &'static [(&'static str, &'static str)] {
             include_str!("../../../../assets/designs/ferry-steps-canopy.ron"),
         ),
         (
-            "Market lantern",
-            include_str!("../../../../assets/designs/market-lantern.ron"),
+            "Pier head housing",
+            include_str!("../../../../assets/designs/pier-head-housing.ron"),
         ),
         (
             "Tide column",
