@@ -22,7 +22,7 @@ pub struct FreePath {
 #[derive(Clone, Copy, PartialEq, Debug, Serialize, Deserialize)]
 #[serde(deny_unknown_fields)]
 pub struct FreeLetter {
-    /// Its id: unique in the path, never used again.
+    /// Its id: unique in the path. Only the highest one can come again, once its letter is deleted; see [`FreePath::next_id`].
     pub id: u32,
     /// Where its vector comes from.
     pub vector: FreeVector,
