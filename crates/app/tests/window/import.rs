@@ -1,40 +1,17 @@
 //! Importing a path in the window, without a display.
 
-#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
+use egui_kittest::kittest::Queryable;
+use zonewright::window::Command;
+use zonewright_geometry::{Point, Start};
 
-use egui_kittest::{Harness, kittest::Queryable};
-use zonewright::{
-    document::new_design,
-    window::{App, Command},
-};
-use zonewright_geometry::{
-    Angle, Point, Spurs, Start,
-    start::{PolarBy, PolarForm},
-};
-
-fn open() -> Harness<'static, App> {
-    let form = PolarForm {
-        ribs: 8,
-        by: PolarBy::PitchEdge {
-            pitch: Angle::from_degrees(35.0),
-            edge_mm: 500.0,
-        },
-    };
-    let design = new_design(Start::Polar(form), Some(1), Spurs::default()).unwrap();
-    let mut harness = Harness::builder()
-        .with_size([1280.0, 800.0])
-        .with_max_steps(20)
-        .build_eframe(move |cc| App::new_headless(&cc.egui_ctx, design));
-    harness.run();
-    harness
-}
+use crate::common::{open, polar};
 
 #[test]
 fn a_path_typed_into_the_box_becomes_the_start_in_one_undo_step() {
     let folder = tempfile::tempdir().unwrap();
     let file = folder.path().join("saddle.csv");
     std::fs::write(&file, "0,0,0\n300,0,-400\n600,0,0\n600,300,-400\n600,600,0\n").unwrap();
-    let mut harness = open();
+    let mut harness = open(polar(Some(1)));
     let before = harness.state().state().design().clone();
     harness.state().send(Command::Import);
     harness.run();
@@ -62,7 +39,7 @@ fn a_path_typed_into_the_box_becomes_the_start_in_one_undo_step() {
 #[test]
 fn a_path_that_cannot_be_read_keeps_the_design() {
     let folder = tempfile::tempdir().unwrap();
-    let mut harness = open();
+    let mut harness = open(polar(Some(1)));
     let before = harness.state().state().design().clone();
     for (name, text) in [
         ("one.csv", "0,0,0\n"),

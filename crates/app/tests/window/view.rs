@@ -4,33 +4,15 @@ use std::path::Path;
 
 use egui_kittest::{Harness, kittest::Queryable};
 use zonewright::{
-    document::{Design, new_design, read_design},
+    document::read_design,
     window::{App, Command},
 };
-use zonewright_geometry::{
-    Angle, Spurs, Start,
-    start::{PolarBy, PolarForm},
-};
 
-fn open(design: Design) -> Harness<'static, App> {
-    let mut harness = Harness::builder()
-        .with_size([1280.0, 800.0])
-        .with_max_steps(20)
-        .build_eframe(move |cc| App::new_headless(&cc.egui_ctx, design));
-    harness.run();
-    harness
-}
+use crate::common::{open, polar};
 
 #[test]
 fn the_camera_follows_growth_until_the_user_moves_it() {
-    let form = PolarForm {
-        ribs: 8,
-        by: PolarBy::PitchEdge {
-            pitch: Angle::from_degrees(35.0),
-            edge_mm: 500.0,
-        },
-    };
-    let mut harness = open(new_design(Start::Polar(form), Some(1), Spurs::default()).unwrap());
+    let mut harness = open(polar(Some(1)));
     let camera = |h: &Harness<'_, App>| h.state().state().camera;
     let first = camera(&harness);
     for _ in 0..2 {

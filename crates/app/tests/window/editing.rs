@@ -1,85 +1,15 @@
 //! The window, driven by its accessible names, without a display.
 
-#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
-
 use std::path::PathBuf;
 
-use egui_kittest::{Harness, kittest::Queryable};
+use egui_kittest::kittest::Queryable;
 use zonewright::{
-    document::{Design, new_design, read_design},
-    window::{App, Command, PICTURE},
+    document::{new_design, read_design},
+    window::{App, Command},
 };
-use zonewright_geometry::{
-    Act, Angle, Point, Role, Side, Spurs, Start, Vector,
-    start::{FreeLetter, FreePath, FreeVector, PolarBy, PolarForm},
-};
+use zonewright_geometry::{Act, Angle, Side, Spurs, Start, Vector};
 
-fn open(design: Design) -> Harness<'static, App> {
-    let mut harness = Harness::builder()
-        .with_size([1280.0, 800.0])
-        .with_max_steps(20)
-        .build_eframe(move |cc| App::new_headless(&cc.egui_ctx, design));
-    harness.run();
-    harness
-}
-
-/// A start of four edges: zig (3, 0, -4), zag (3, 0, 4), zig (0, 3, -4), zag (0, 3, 4), in units of 100 mm.
-fn zigzag() -> Design {
-    let edges = [
-        (300.0, 0.0, -400.0, Role::Zig),
-        (300.0, 0.0, 400.0, Role::Zag),
-        (0.0, 300.0, -400.0, Role::Zig),
-        (0.0, 300.0, 400.0, Role::Zag),
-    ];
-    let letters = (0..).zip(edges).map(|(id, (x, y, z, role))| FreeLetter {
-        id,
-        vector: FreeVector::Own(Vector::new(x, y, z)),
-        role,
-    });
-    let path = FreePath {
-        origin: Point::ORIGIN,
-        closed: false,
-        letters: letters.collect(),
-    };
-    new_design(Start::Zigzag(path), Some(1), Spurs::default()).unwrap()
-}
-
-fn polar() -> Design {
-    let form = PolarForm {
-        ribs: 8,
-        by: PolarBy::PitchEdge {
-            pitch: Angle::from_degrees(35.0),
-            edge_mm: 500.0,
-        },
-    };
-    new_design(Start::Polar(form), None, Spurs::default()).unwrap()
-}
-
-fn point(app: &App, at: usize) -> Point {
-    let Start::Zigzag(path) = &app.state().shape().start else {
-        panic!("free points")
-    };
-    path.first_word().unwrap().nodes()[at]
-}
-
-fn picture_place(harness: &Harness<'_, App>, point: Point) -> egui::Pos2 {
-    let corner = harness.get_by_label(PICTURE).rect().min;
-    let seen = harness.state().state().camera.project(point).unwrap();
-    corner + egui::Vec2::from(seen.pos)
-}
-
-fn drag(harness: &mut Harness<'_, App>, from: egui::Pos2, by: egui::Vec2) {
-    harness.hover_at(from);
-    harness.run_steps(1);
-    harness.drag_at(from);
-    harness.run_steps(1);
-    for step in 1..=10 {
-        harness.hover_at(from + by * (step as f32 / 10.0));
-        harness.run_steps(2);
-    }
-    harness.drop_at(from + by);
-    harness.run();
-}
+use crate::common::{drag, open, picture_place, point, polar, zigzag};
 
 /// Heron-free area of two parallelograms on three edges: |a x b| each (derived).
 fn area(edges: [Vector; 4]) -> f64 {
@@ -114,7 +44,7 @@ fn a_dragged_vertex_changes_the_readouts_by_the_computed_amount_and_is_one_undo_
 
 #[test]
 fn dragging_a_point_of_a_parametric_start_frees_it_in_one_undo_step() {
-    let design = polar();
+    let design = polar(None);
     let mut harness = open(design.clone());
     let state = harness.state().state();
     let path = state.derived.path.clone().unwrap();
@@ -138,7 +68,7 @@ fn dragging_a_point_of_a_parametric_start_frees_it_in_one_undo_step() {
 
 #[test]
 fn turning_into_free_points_leaves_the_shell_where_it_is() {
-    let mut harness = open(polar());
+    let mut harness = open(polar(None));
     let before = harness.state().state().derived.shell.points.clone();
     harness.get_by_label("Turn into free points").click();
     harness.run();
@@ -178,7 +108,7 @@ fn a_click_on_an_open_v_splices_and_the_next_one_takes_it_away() {
 fn all_is_undone_all_is_redone_saved_and_reopened_with_the_same_numbers() {
     let folder = tempfile::tempdir().unwrap();
     let file = folder.path().join("a design.ron");
-    let first = polar();
+    let first = polar(None);
     let mut harness = open(first.clone());
     for command in [Command::RemoveCourse, Command::RemoveCourse, Command::FreePoints] {
         harness.state().send(command);
@@ -241,7 +171,7 @@ fn lengths_are_typed_in_inches_with_fractions() {
 
 #[test]
 fn an_idle_window_works_nothing_out() {
-    let mut harness = open(polar());
+    let mut harness = open(polar(None));
     harness.run();
     let (counts, pictures) = (harness.state().counts(), harness.state().pictures());
     assert!(counts.grown >= 1 && counts.inspected >= 1 && pictures >= 1);
@@ -252,7 +182,7 @@ fn an_idle_window_works_nothing_out() {
 
 #[test]
 fn a_change_works_each_stage_out_once() {
-    let mut harness = open(polar());
+    let mut harness = open(polar(None));
     let before = harness.state().counts();
     harness.state().send(Command::RemoveCourse);
     harness.run();
@@ -364,7 +294,7 @@ fn the_search_finds_a_command_and_enter_sends_it() {
 #[test]
 fn export_writes_the_files_that_the_shop_makes() {
     let folder = tempfile::tempdir().unwrap();
-    let mut harness = open(polar());
+    let mut harness = open(polar(None));
     harness.state().send(Command::ExportTo(folder.path().join("bench")));
     harness.run();
     assert_eq!(harness.state().state().message, None);

@@ -1,37 +1,13 @@
 //! Panels in the window: picked, left out, put back; by accessible names, without a display.
 
-#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
-
 use egui_kittest::{Harness, kittest::Queryable};
 use zonewright::{
-    document::{Design, new_design},
+    document::new_design,
     window::{App, Command, PICTURE},
 };
-use zonewright_geometry::{
-    Angle, Code, FinishAct, Point, Spurs, Start,
-    start::{HelicalForm, PolarBy, PolarForm},
-};
+use zonewright_geometry::{Angle, Code, FinishAct, Point, Spurs, Start, start::HelicalForm};
 
-fn open(design: Design) -> Harness<'static, App> {
-    let mut harness = Harness::builder()
-        .with_size([1280.0, 800.0])
-        .with_max_steps(20)
-        .build_eframe(move |cc| App::new_headless(&cc.egui_ctx, design));
-    harness.run();
-    harness
-}
-
-/// A dome of eight ribs with one course: eight panels round the pole, none of which hides another's middle.
-fn one_course() -> Design {
-    let form = PolarForm {
-        ribs: 8,
-        by: PolarBy::PitchEdge {
-            pitch: Angle::from_degrees(35.0),
-            edge_mm: 500.0,
-        },
-    };
-    new_design(Start::Polar(form), Some(1), Spurs::default()).unwrap()
-}
+use crate::common::{open, polar};
 
 fn middle(app: &App, panel: u32) -> Point {
     let [a, _, c, _] = app.state().derived.shell.corner_points(panel);
@@ -61,7 +37,7 @@ fn panels(harness: &Harness<'_, App>) -> usize {
 
 #[test]
 fn a_clicked_panel_is_shown_left_out_and_put_back() {
-    let mut harness = open(one_course());
+    let mut harness = open(polar(Some(1)));
     harness.state().send(Command::Look(zonewright_painter::View::Plan));
     harness.run();
     let before = harness.state().state().design().clone();
@@ -107,7 +83,7 @@ fn a_clicked_panel_is_shown_left_out_and_put_back() {
 
 #[test]
 fn a_second_click_and_escape_let_a_panel_go() {
-    let mut harness = open(one_course());
+    let mut harness = open(polar(Some(1)));
     harness.state().send(Command::Look(zonewright_painter::View::Plan));
     harness.run();
     click_panel(&mut harness, 2);
@@ -147,7 +123,7 @@ fn one_of_two_doubled_panels_is_left_out_by_its_finding() {
 
 #[test]
 fn a_grounded_start_whose_panels_are_all_left_out_still_has_its_path() {
-    let mut harness = open(one_course());
+    let mut harness = open(polar(Some(1)));
     for _ in 0..8 {
         harness.state().send(Command::LeaveOut(0));
         harness.run();

@@ -1,0 +1,9 @@
+//! The window, driven by its accessible names, without a display. One file a subject.
+
+#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
+
+mod common;
+mod editing;
+mod import;
+mod panels;
+mod view;
