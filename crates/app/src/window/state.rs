@@ -7,8 +7,8 @@ use zonewright_painter::{Bounds, Camera};
 use zonewright_shop::text::Units;
 
 use super::{
-    command::Command, derived::Derived, dialogs::Dialogs, history::History, theme::Theme, view::ViewState,
-    worker::Worker,
+    command::Command, derived::Derived, dialogs::Dialogs, history::History, readings::Remembered, theme::Theme,
+    view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -56,6 +56,8 @@ pub struct State {
     pub closing: bool,
     /// Where the session is remembered; none in tests that do not ask for it.
     pub session: Option<PathBuf>,
+    /// The state that the readouts are compared with.
+    pub remembered: Option<Remembered>,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -83,6 +85,7 @@ impl State {
             search: None,
             closing: false,
             session: None,
+            remembered: None,
             theme: Theme::bundled(),
         }
     }

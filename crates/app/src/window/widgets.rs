@@ -64,6 +64,8 @@ pub(super) struct Widgets {
     pub over_next: Option<(Side, usize)>,
     /// The picture.
     pub cache: PictureCache,
+    /// How sides, angles and folds are spread.
+    pub spreads: super::panels::SpreadCache,
     /// How often a picture was put together.
     pub pictures: u64,
 }
