@@ -196,6 +196,8 @@ fn samples() -> Vec<Shape> {
 fn another(parameter: &Parameter, part: f64) -> f64 {
     let [least, most] = parameter.bounds;
     let reach = match parameter.kind {
+        // Rims are joined across gaps, not across panels.
+        ParameterKind::Length if parameter.key.ends_with(".within") => 1.0,
         ParameterKind::Length => 1000.0,
         ParameterKind::Angle => 90.0,
         ParameterKind::Factor => 2.0,
