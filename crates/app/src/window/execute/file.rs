@@ -102,7 +102,7 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     state.view.finding = None;
     state.view.shown = None;
     state.remembered = None;
-    state.fit_pending = true;
+    state.panes.start_afresh();
     remember(state);
     state.say(format!("{} is open", state.file_name()));
 }
