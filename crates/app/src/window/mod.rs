@@ -24,7 +24,6 @@ mod session;
 mod splice_marks;
 mod state;
 mod strip;
-mod strip_layout;
 mod theme;
 mod view;
 mod widgets;
@@ -40,6 +39,7 @@ pub use path_edit::PathEdit;
 pub use picture::NAME as PICTURE;
 pub use session::STATE_DIR;
 pub use state::State;
+pub use strip::{NAME as STRIP, Picks, Span, StripAct, StripFront, StripView};
 pub use view::{Hand, ViewState};
 
 use crate::document::{self, Design};

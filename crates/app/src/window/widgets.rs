@@ -62,6 +62,8 @@ pub(super) struct Widgets {
     pub over: Option<(Side, usize)>,
     /// The same, as it is found while this frame is drawn.
     pub over_next: Option<(Side, usize)>,
+    /// The front strip.
+    pub strip: super::strip::StripWidgets,
     /// The picture.
     pub cache: PictureCache,
     /// How often a picture was put together.

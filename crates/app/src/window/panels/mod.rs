@@ -14,6 +14,7 @@ mod start_panel;
 mod step_fields;
 mod steps_panel;
 
+pub(super) use directions::zone_name;
 use egui::{ScrollArea, Ui};
 
 use super::{command::Sender, state::State};

@@ -1,10 +1,13 @@
 //! Marks on the picture: points of the path, open Vs, the panel that a V would make, places of findings.
 
-use zonewright_geometry::{Place, Point, Shell, Side};
+use zonewright_geometry::{Place, Point, Shell, Side, ahead::spurs_of_splice};
 use zonewright_painter::{Colour, Mark, MarkKind, Tone};
 
 use super::hit;
-use crate::window::{splice_marks, state::State};
+use crate::window::{
+    state::State,
+    strip::{directions_at, previewed},
+};
 
 /// More marks than this would hide the picture and slow the window down.
 const MOST_MARKS: usize = 2000;
@@ -15,14 +18,8 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     panel_marks(state, &mut marks);
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
-    if let Some((side, index)) = over
-        && let Some(v) = state.derived.open_on(side).get(index)
-    {
-        let at = vec![v.nodes[0], v.nodes[1], v.nodes[2], v.new];
-        marks.push(mark(at.clone(), MarkKind::Polygon, Tone::Preview));
-        let outline = [&at[..], &at[..1]].concat();
-        marks.push(line(outline, 1.5, Tone::Preview));
-    }
+    letter_marks(state, &mut marks);
+    preview_marks(state, over, &mut marks);
     if let Some(finding) = state.view.finding.and_then(|at| state.derived.findings.get(at)) {
         finding_marks(
             &state.derived.shell,
@@ -73,14 +70,14 @@ fn path_marks(state: &State, marks: &mut Vec<Mark>) {
 
 fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     let vs = state.derived.open_on(state.view.side);
-    let spliced = splice_marks::spliced(state, state.view.side);
+    let strip = state.derived.strip_on(state.view.side);
     let mut open = Vec::new();
     let mut fresh = Vec::new();
     let mut held = Vec::new();
     for (index, v) in vs.iter().enumerate().take(MOST_MARKS) {
-        let dots = if spliced.contains(&index) {
+        let dots = if strip.fresh[index] {
             &mut fresh
-        } else if v.degenerate {
+        } else if strip.held[index] {
             &mut held
         } else {
             &mut open
@@ -102,6 +99,56 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     };
     marks.push(mark(held, quiet, Tone::Own(Colour { r, g, b, a })));
     marks.push(mark(fresh, MarkKind::Dot { radius: 4.0 }, Tone::Preview));
+}
+
+/// The panels that the act at hand would make, and, where it would splice, the spurs of the directions in hand.
+fn preview_marks(state: &State, over: Option<(Side, usize)>, marks: &mut Vec<Mark>) {
+    let (side, reached) = previewed(state, over);
+    let open = state.derived.open_on(side);
+    let fills = state.view.strip.span.is_some();
+    for r in reached.into_iter().take(MOST_MARKS / 2) {
+        let Some(v) = open.get(r.at) else { continue };
+        if !v.degenerate {
+            let at = vec![v.nodes[0], v.nodes[1], v.nodes[2], v.new];
+            marks.push(mark(at.clone(), MarkKind::Polygon, Tone::Preview));
+            let outline = [&at[..], &at[..1]].concat();
+            marks.push(line(outline, 1.5, Tone::Preview));
+        }
+        if fills || state.derived.strip_on(side).fresh[r.at] {
+            continue;
+        }
+        let directions = directions_at(state, side, r);
+        for spur in spurs_of_splice(&state.derived.shell, &state.shape().placement, v, &directions) {
+            let kind = MarkKind::Line {
+                width: 2.0,
+                dashed: true,
+            };
+            marks.push(mark(vec![v.nodes[1], v.nodes[1] + spur], kind, Tone::Selection));
+        }
+    }
+}
+
+/// The edge of the letter that is pointed at in the strip, and all edges of its zone.
+fn letter_marks(state: &State, marks: &mut Vec<Mark>) {
+    let Some((side, at)) = state.view.strip.letter else { return };
+    let shell = &state.derived.shell;
+    let front = &shell.fronts[usize::from(side == Side::Aft)];
+    let (Some(letter), Some(ends)) = (front.letters.get(at), front.nodes.get(at..at + 2)) else {
+        return;
+    };
+    let counts_as = |letter: u32| shell.zones[shell.zone_of(letter) as usize].counts_as;
+    let zone = counts_as(letter.letter);
+    let sides = shell.panels.iter().flat_map(|panel| {
+        // Sides 0 and 2 belong to the first letter, 1 and 3 to the second.
+        (0..4_usize)
+            .filter(move |side| counts_as(panel.letters[side % 2]) == zone)
+            .map(move |side| [panel.corners[side], panel.corners[(side + 1) % 4]])
+    });
+    for ends in sides.take(MOST_MARKS) {
+        let places = ends.map(|v| shell.points[v as usize]).to_vec();
+        marks.push(line(places, 2.0, Tone::Mark));
+    }
+    marks.push(line(ends.to_vec(), 5.0, Tone::Selection));
 }
 
 fn finding_marks(shell: &Shell, place: &Place, tone: Tone, marks: &mut Vec<Mark>) {
