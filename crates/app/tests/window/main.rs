@@ -6,5 +6,6 @@ mod common;
 mod editing;
 mod import;
 mod panels;
+mod panes;
 mod strip;
 mod view;
