@@ -9,5 +9,5 @@ mod tests;
 mod turn;
 
 pub use panel::{PanelAhead, panels_of_splice, spurs_of_splice};
-pub use rank::{Rank, ranks};
+pub use rank::{Rank, ranks, ranks_of_letters};
 pub use turn::{TURN_FIT, Turn, turned};

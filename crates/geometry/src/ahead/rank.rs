@@ -20,18 +20,28 @@ impl Rank {
     /// Whether "every k-th from there" takes this one, round a closed front or both ways along an open one.
     #[must_use]
     pub const fn is_kth(self, from: Self, k: u32, closed: bool) -> bool {
+        if self.family != from.family || k == 0 {
+            return false;
+        }
         let steps = if closed {
             (self.rank + self.of - from.rank) % self.of
         } else {
             self.rank.abs_diff(from.rank)
         };
-        self.family == from.family && 0 < k && steps.is_multiple_of(k)
+        steps.is_multiple_of(k)
     }
 }
 
 /// The rank of each of these open Vs.
 #[must_use]
 pub fn ranks(shell: &Shell, open: &[OpenV]) -> Vec<Rank> {
+    let zigs: Vec<u32> = open.iter().map(|v| letters(shell, v)[0]).collect();
+    ranks_of_letters(shell, &zigs)
+}
+
+/// The rank of each of these letters.
+#[must_use]
+pub fn ranks_of_letters(shell: &Shell, of: &[u32]) -> Vec<Rank> {
     type Key = (Maker, Sign, bool);
     let mut families: BTreeMap<Key, (u32, u32)> = BTreeMap::new();
     let mut of_letter: Vec<(Key, u32)> = Vec::with_capacity(shell.letters.len());
@@ -41,10 +51,10 @@ pub fn ranks(shell: &Shell, open: &[OpenV]) -> Vec<Rank> {
         of_letter.push((key, family.1));
         family.1 += 1;
     }
-    let rank = |v: &OpenV| {
-        let (key, rank) = of_letter[letters(shell, v)[0] as usize];
+    let rank = |letter: &u32| {
+        let (key, rank) = of_letter[*letter as usize];
         let (family, of) = families[&key];
         Rank { family, rank, of }
     };
-    open.iter().map(rank).collect()
+    of.iter().map(rank).collect()
 }

@@ -199,6 +199,13 @@ fn ranks_count_as_every_kth_does() {
                 let marked = grown.letters.iter().filter(|l| l.maker == Maker::Step(StepId(50)));
                 assert_eq!(marked.count(), 2 * told, "V {at}, k {k}");
             }
+            // Letters of another family are never counted, however few they are.
+            let other = super::Rank {
+                family: 9999,
+                rank: 90,
+                of: 99,
+            };
+            assert!(!ranks[at].is_kth(other, 1, true));
         }
     }
 }

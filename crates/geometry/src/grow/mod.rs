@@ -29,8 +29,8 @@ use front::Front;
 pub use front::open_vs;
 use lay::Laid;
 pub use mesh::MAX_PANELS;
-pub use place::placed_vector;
 use mesh::Mesh;
+pub use place::placed_vector;
 
 use crate::{Act, Code, Courses, Finding, FirstWord, Place, Shape, Side, Spurs, Step, Unit, shell::Grown};
 

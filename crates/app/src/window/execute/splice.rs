@@ -9,7 +9,7 @@ use zonewright_geometry::{
 use crate::window::{
     splice_marks::{v_at, v_name},
     state::State,
-    strip::{directions_at, reached},
+    strip::{clicked, directions_at},
 };
 
 /// Splices at a V and those that an act there reaches, or, when the V was made by a splice that nothing was laid upon yet, takes
@@ -24,7 +24,7 @@ pub(super) fn toggle(state: &mut State, side: Side, v: &VName) {
 /// The same at several Vs, given by their places among the open Vs: when all of them are spliced already, these splices go.
 pub(super) fn toggle_all(state: &mut State, side: Side, at: &[usize]) {
     let fresh = &state.derived.strip_on(side).fresh;
-    let reached = reached(state, side, at);
+    let reached = clicked(state, side, at);
     if at.iter().all(|at| fresh[*at]) {
         let all = reached.iter().filter(|r| fresh[r.at]);
         let found = all.filter_map(|r| fresh_splice(state.shape(), side, &v_name(state, side, r.at)?));
@@ -41,7 +41,9 @@ pub(super) fn toggle_all(state: &mut State, side: Side, at: &[usize]) {
     // Vs that get the same directions share a step; turned directions need a step for each turn.
     let mut groups: Vec<(Vec<Direction>, Vec<VName>)> = Vec::new();
     for r in wanted {
-        let Some(name) = v_name(state, side, r.at) else { continue };
+        let Some(name) = v_name(state, side, r.at) else {
+            continue;
+        };
         let directions = directions_at(state, side, *r);
         match groups.iter_mut().find(|(known, _)| *known == directions) {
             Some((_, names)) => names.push(name),

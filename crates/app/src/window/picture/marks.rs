@@ -130,7 +130,9 @@ fn preview_marks(state: &State, over: Option<(Side, usize)>, marks: &mut Vec<Mar
 
 /// The edge of the letter that is pointed at in the strip, and all edges of its zone.
 fn letter_marks(state: &State, marks: &mut Vec<Mark>) {
-    let Some((side, at)) = state.view.strip.letter else { return };
+    let Some((side, at)) = state.view.strip.letter else {
+        return;
+    };
     let shell = &state.derived.shell;
     let front = &shell.fronts[usize::from(side == Side::Aft)];
     let (Some(letter), Some(ends)) = (front.letters.get(at), front.nodes.get(at..at + 2)) else {

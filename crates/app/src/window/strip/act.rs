@@ -79,7 +79,10 @@ impl StripAct {
     #[must_use]
     pub(in crate::window) const fn words(&self) -> Words {
         let (name, hint) = match self {
-            Self::Fill(_) => ("Fill these Vs", "Fills the chosen Vs of the front as a course of their own."),
+            Self::Fill(_) => (
+                "Fill these Vs",
+                "Fills the chosen Vs of the front as a course of their own.",
+            ),
             Self::Splice(_) => ("Splice at these Vs", "Splices the directions in hand at the chosen Vs."),
             Self::Repeat(_) | Self::SwapRepeat => (
                 "Repeat round the front",

@@ -1,6 +1,9 @@
 //! Which Vs an act at some of them reaches: those themselves, or every k-th round the front.
 
-use zonewright_geometry::{Direction, Side, ahead::Turn, ahead::turned};
+use zonewright_geometry::{
+    Direction, Side,
+    ahead::{Rank, Turn, turned},
+};
 
 use crate::window::state::State;
 
@@ -16,7 +19,23 @@ pub(in crate::window) struct Reached {
 /// The Vs that an act at these reaches, ascending.
 #[must_use]
 pub(in crate::window) fn reached(state: &State, side: Side, at: &[usize]) -> Vec<Reached> {
-    let ranks = &state.derived.strip_on(side).ranks;
+    among(state, side, at, &state.derived.strip_on(side).ranks)
+}
+
+/// The Vs that a click on these reaches, ascending: where all of them are spliced already, those whose splices would go. The Vs
+/// that a splice made count as the one that was spliced.
+#[must_use]
+pub(in crate::window) fn clicked(state: &State, side: Side, at: &[usize]) -> Vec<Reached> {
+    let front = state.derived.strip_on(side);
+    if !at.iter().all(|at| front.fresh.get(*at) == Some(&true)) {
+        return reached(state, side, at);
+    }
+    let mut reached = among(state, side, at, &front.bases);
+    reached.retain(|r| front.fresh[r.at]);
+    reached
+}
+
+fn among(state: &State, side: Side, at: &[usize], ranks: &[Rank]) -> Vec<Reached> {
     let own = at.iter().filter(|at| **at < ranks.len());
     let Some(k) = state.view.strip.repeat else {
         return own.map(|at| Reached { at: *at, like: *at }).collect();
@@ -79,6 +98,6 @@ pub(in crate::window) fn previewed(state: &State, over: Option<(Side, usize)>) -
         return (span.side, reached(state, span.side, &at));
     }
     over.map_or((state.view.side, Vec::new()), |(side, at)| {
-        (side, reached(state, side, &[at]))
+        (side, clicked(state, side, &[at]))
     })
 }

@@ -4,7 +4,7 @@ use std::collections::BTreeSet;
 
 use zonewright_geometry::{
     Act, Maker, NONE, OpenV, Shape, Shell, Side, StepId,
-    ahead::{Rank, ranks},
+    ahead::{Rank, ranks, ranks_of_letters},
 };
 
 use super::flat::Flat;
@@ -20,6 +20,8 @@ pub struct StripFront {
     pub(in crate::window) fresh: Vec<bool>,
     /// The place of the V in its family.
     pub(in crate::window) ranks: Vec<Rank>,
+    /// The same of the V that was spliced, where a splice made this one.
+    pub(in crate::window) bases: Vec<Rank>,
     /// The k for which "every k-th V" is offered, 1 first.
     pub(in crate::window) repeats: Vec<u32>,
     /// How many Vs are held.
@@ -35,6 +37,7 @@ impl StripFront {
             held: Vec::new(),
             fresh: Vec::new(),
             ranks: Vec::new(),
+            bases: Vec::new(),
             repeats: Vec::new(),
             held_count: 0,
         }
@@ -53,12 +56,20 @@ impl StripFront {
             .map(|(letter, (from, to))| (letter.role, from.distance(*to)))
             .collect();
         let ranks = ranks(shell, open);
+        let fresh = fresh(shape, shell, side, open);
+        let base = |(v, fresh): (&OpenV, &bool)| {
+            let zig = front.letters[v.position].letter;
+            let at = shell.letters[zig as usize].at;
+            if *fresh && at != NONE { at } else { zig }
+        };
+        let bases: Vec<u32> = open.iter().zip(&fresh).map(base).collect();
         let held: Vec<bool> = open.iter().map(is_held).collect();
         Self {
             flat: Flat::new(&letters, around),
             held_count: held.iter().filter(|held| **held).count(),
             held,
-            fresh: fresh(shape, shell, side, open),
+            fresh,
+            bases: ranks_of_letters(shell, &bases),
             repeats: repeats(&ranks, front.closed),
             ranks,
         }

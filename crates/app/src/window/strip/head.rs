@@ -1,6 +1,6 @@
 //! The head of the strip: which front, how far it is, what is repeated; and the line that says what is pointed at.
 
-use egui::{Align, Label, Layout, Rect, Role as AccessRole, RichText, Ui, WidgetInfo};
+use egui::{Align, Label, Layout, Rect, RichText, Role as AccessRole, Ui, WidgetInfo};
 use zonewright_geometry::Side;
 use zonewright_shop::text;
 

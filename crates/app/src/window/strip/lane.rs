@@ -110,7 +110,8 @@ fn point(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets, ground: &Response, sight: &
         strip.cursor = strip.cursor.min(open.len().saturating_sub(1));
         pointed.v = Some(strip.cursor).filter(|at| *at < open.len());
     }
-    if ground.gained_focus() && strip.drag.is_none() && !ui.input(|i| i.pointer.any_down() || i.pointer.any_released()) {
+    if ground.gained_focus() && strip.drag.is_none() && !ui.input(|i| i.pointer.any_down() || i.pointer.any_released())
+    {
         strip.by_key = true;
         keys::reveal(cx, strip, side, sight);
     }
@@ -213,7 +214,9 @@ fn numbers(cx: Cx<'_>, ui: &Ui, sight: &Sight, side: Side) {
     let painter = ui.painter_at(sight.lane);
     let foot = sight.lane.bottom() - if sight.is_silhouette() { 10.0 } else { 2.0 };
     let first = vs.start.next_multiple_of(step);
-    let shown = (first..vs.end).step_by(step).map(|at| if step == 1 { at } else { at.max(1) - 1 });
+    let shown = (first..vs.end)
+        .step_by(step)
+        .map(|at| if step == 1 { at } else { at.max(1) - 1 });
     for at in shown.filter(|at| vs.contains(at)) {
         painter.text(
             pos2(x(at), foot),

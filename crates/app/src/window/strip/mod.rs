@@ -16,7 +16,7 @@ mod silhouette;
 mod words;
 
 pub use act::{Picks, Span, StripAct, StripView};
-pub(super) use choice::{directions_at, previewed, reached};
+pub(super) use choice::{clicked, directions_at, previewed, reached};
 use egui::{Rect, Ui, UiBuilder, vec2};
 pub use front::StripFront;
 

@@ -87,9 +87,7 @@ pub(super) fn notch_ui(
     let widen = ((2.0 - around.width()) / 2.0).max(0.0);
     let around = around.expand2(vec2(widen, 0.0)).intersect(sight.lane);
     let response = ui.interact(around, ui.scope_id().with(("v", at)), Sense::CLICK);
-    response.widget_info(|| {
-        WidgetInfo::selected(AccessRole::CheckBox, true, fresh, words::v_name(cx.state, side, at))
-    });
+    response.widget_info(|| WidgetInfo::selected(AccessRole::CheckBox, true, fresh, words::v_name(cx.state, side, at)));
     ui.ctx().accesskit_node_builder(response.id, |node| {
         node.set_value(words::filled(cx.state, side, at));
     });

@@ -90,8 +90,7 @@ pub(super) fn drag(cx: Cx<'_>, ui: &Ui, ground: &Response, strip: &mut StripWidg
             if let Some(to) = to {
                 strip.cursor = to;
                 let at = (anchor.min(to)..=anchor.max(to)).collect();
-                cx.tx
-                    .send(Command::Strip(StripAct::Fill(Picks { side, revision, at })));
+                cx.tx.send(Command::Strip(StripAct::Fill(Picks { side, revision, at })));
             }
             cx.tx.send(Command::Strip(StripAct::Span(None)));
         }

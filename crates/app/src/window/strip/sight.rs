@@ -261,7 +261,10 @@ mod tests {
         assert_eq!(sight.reveal(zoom, 4.0, 6.0).offset, 0.0, "in sight already");
         for to in [700.0, 300.0, 998.0, 0.0] {
             let sight = Sight::new(&flat, lane(), sight.reveal(zoom, to, to + 2.0));
-            assert!(lane().left() <= sight.x(to) && sight.x(to + 2.0) <= lane().right(), "{to}");
+            assert!(
+                lane().left() <= sight.x(to) && sight.x(to + 2.0) <= lane().right(),
+                "{to}"
+            );
         }
     }
 }

@@ -82,5 +82,7 @@ fn band(state: &State, front: &StripFront, vs: Range<usize>) -> Option<Color32> 
     if vs.clone().any(|at| front.fresh[at]) {
         return Some(state.colours().preview());
     }
-    vs.into_iter().any(|at| !front.held[at]).then(|| state.colours().accent())
+    vs.into_iter()
+        .any(|at| !front.held[at])
+        .then(|| state.colours().accent())
 }

@@ -6,7 +6,7 @@ use zonewright_geometry::{
 };
 use zonewright_shop::text;
 
-use super::choice::{Reached, all_turn, directions_at, reached};
+use super::choice::{Reached, all_turn, clicked, directions_at, reached};
 use crate::window::{panels::zone_name, state::State};
 
 /// How an open V is called.
@@ -18,7 +18,8 @@ pub(super) fn v_name(state: &State, side: Side, at: usize) -> String {
 }
 
 fn panel(state: &State, panel: &PanelAhead) -> String {
-    let [a, b] = panel.sides_mm.map(|mm| state.units().length(mm));
+    let [a, b] = panel.sides_mm;
+    let [a, b] = [a.max(b), a.min(b)].map(|mm| state.units().length(mm));
     format!("{a} × {b}, {}", text::degrees(panel.acute.degrees(), 2))
 }
 
@@ -51,13 +52,11 @@ pub(super) fn spliced(state: &State, side: Side, at: usize) -> String {
     }
     let sizes: Vec<String> = sizes
         .into_iter()
-        .map(|(size, count)| {
-            if count == 1 {
-                size
-            } else {
-                format!("{count} of {size}")
-            }
-        })
+        .map(
+            |(size, count)| {
+                if count == 1 { size } else { format!("{count} of {size}") }
+            },
+        )
         .collect();
     match panels.len() {
         0 => "spliced: no panel".to_owned(),
@@ -83,7 +82,7 @@ pub(super) fn v_line(state: &State, side: Side, at: usize) -> String {
     };
     let mut line = format!("{}: {}; {splice}", v_name(state, side, at), filled(state, side, at));
     if state.view.strip.repeat.is_some() {
-        let reached = reached(state, side, &[at]);
+        let reached = clicked(state, side, &[at]);
         line += &format!("; at {} Vs", reached.len());
         if !all_turn(state, side, &reached) {
             line += ", directions not turned";
