@@ -7,5 +7,6 @@ mod editing;
 mod import;
 mod panels;
 mod panes;
+mod readings;
 mod strip;
 mod view;
