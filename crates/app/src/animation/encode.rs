@@ -57,7 +57,7 @@ pub fn write(
         return Err(format!("a GIF has sides of at most {GREATEST_GIF_SIDE} pixels"));
     }
     let look = Look::default();
-    let font = font();
+    let font = pictures_font();
     let mut frame = |at: usize| {
         if !go_on(at) {
             return Err("stopped".to_owned());
@@ -139,7 +139,8 @@ fn plain_png(image: &raster::Image) -> Result<Vec<u8>, String> {
 }
 
 /// The window's own text font, so that pictures and window look alike.
-pub(crate) fn font() -> Option<Vec<u8>> {
+#[must_use]
+pub fn pictures_font() -> Option<Vec<u8>> {
     let fonts = FontDefinitions::default();
     let name = fonts.families.get(&FontFamily::Proportional)?.first()?;
     Some(fonts.font_data.get(name)?.font.as_ref().as_ref().to_vec())

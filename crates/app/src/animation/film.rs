@@ -1,7 +1,7 @@
 //! The shells of an animation, one a frame, seen from a camera that does not move.
 
 use zonewright_geometry::{
-    Finding, Shape, Shell, Stage, grow, grow_part,
+    Act, Course, Finding, Shape, Shell, Stage, grow, grow_part,
     parameter::{parameter, set_parameter},
 };
 use zonewright_painter::{Bounds, Camera, Look, Picture, Projection, Scene, Tints, View};
@@ -62,8 +62,11 @@ impl Film {
         };
         film.stills = match subject {
             Subject::Growth => {
-                let stage = |c: &zonewright_geometry::Course| Still::Part(c.stage(shape));
-                whole.courses.iter().map(stage).collect()
+                let mut stages: Vec<Stage> = whole.courses.iter().filter_map(|c| stage_of(shape, c)).collect();
+                // What comes after the last course, such as spurs retracted, belongs to the last frame.
+                stages.pop();
+                stages.push(Stage::after(shape.steps.len()));
+                stages.into_iter().map(Still::Part).collect()
             }
             Subject::Sweep { key, from, to, frames } => {
                 film.key.clone_from(key);
@@ -174,6 +177,18 @@ fn union(a: Bounds, b: Bounds) -> Bounds {
         min: zonewright_geometry::Point(a.min.0.min(b.min.0)),
         max: zonewright_geometry::Point(a.max.0.max(b.max.0)),
     }
+}
+
+/// The stage at which a course has just been laid.
+fn stage_of(shape: &Shape, course: &Course) -> Option<Stage> {
+    let steps = shape.steps.iter().position(|s| s.id == course.step)?;
+    Some(match shape.steps[steps].act {
+        Act::Lay { .. } => Stage {
+            steps,
+            passes: course.pass,
+        },
+        _ => Stage::after(steps + 1),
+    })
 }
 
 /// The values of a sweep. A parameter that counts takes whole numbers only.

@@ -3,5 +3,5 @@
 mod encode;
 mod film;
 
-pub use encode::{Kind, Written, kind_of, write};
-pub use film::{Film, MOST_FRAMES, Subject};
+pub use encode::{Kind, Written, kind_of, pictures_font, write};
+pub use film::{Film, MOST_FRAMES, Subject, projection_of};

@@ -1,5 +1,6 @@
 //! The command line. It is kept stable: other programs call it.
 
+mod animate;
 mod curve_words;
 mod jobs;
 mod picture;
@@ -87,6 +88,8 @@ enum Command {
         #[arg(long, value_name = "WxH", default_value = "1200x800", value_parser = values::size)]
         size: [u32; 2],
     },
+    /// Show the growth, or a parameter that runs between two values, as moving pictures.
+    Animate(animate::Animate),
 }
 
 /// What the command line asks for.
@@ -110,6 +113,7 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),
+        Some(Command::Animate(animate)) => animate.make().map(|()| DONE),
         Some(Command::Picture {
             file,
             output,
