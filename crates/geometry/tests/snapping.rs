@@ -1,7 +1,5 @@
 //! Snapping: exact values hit, never beyond the reach, nothing moved twice. All expected values are derived.
 
-#![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
-
 use proptest::prelude::*;
 use zonewright_geometry::{
     Angle, Point, Vector,
