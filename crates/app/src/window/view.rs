@@ -1,7 +1,7 @@
 //! What is not part of the design: where one looks from, what is picked, what is in hand.
 
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
-use zonewright_painter::{ColourBy, Faces, Projection, View};
+use zonewright_painter::{ColourBy, Faces, View};
 
 use super::command::Words;
 
@@ -24,8 +24,6 @@ impl Default for Hand {
 /// The state of the window that is not saved with the design.
 #[derive(Clone, PartialEq, Debug)]
 pub struct ViewState {
-    /// Perspective or parallel.
-    pub projection: Projection,
     /// How faces are drawn.
     pub faces: Faces,
     /// Whether edges behind faces are drawn.
@@ -51,7 +49,6 @@ pub struct ViewState {
 impl Default for ViewState {
     fn default() -> Self {
         Self {
-            projection: Projection::Perspective,
             faces: Faces::ShadedWithEdges,
             hidden_edges: false,
             colour: ColourBy::Zone,

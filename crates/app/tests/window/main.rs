@@ -6,4 +6,5 @@ mod common;
 mod editing;
 mod import;
 mod panels;
+mod panes;
 mod view;

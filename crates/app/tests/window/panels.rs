@@ -19,7 +19,7 @@ fn click_panel(harness: &mut Harness<'_, App>, panel: u32) {
     let seen = harness
         .state()
         .state()
-        .camera
+        .camera()
         .project(middle(harness.state(), panel))
         .unwrap();
     let at = corner + egui::Vec2::from(seen.pos);

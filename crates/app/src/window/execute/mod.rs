@@ -2,6 +2,7 @@
 
 mod file;
 mod finish;
+mod panes;
 mod path;
 mod shape;
 mod splice;
@@ -10,8 +11,8 @@ mod view;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
+pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use splice::fresh_splice;
-pub(crate) use view::{fit_when_pending, refit};
 
 use super::{command::Command, state::State};
 
