@@ -114,7 +114,8 @@ impl App {
             self.sender.send(Command::Redo);
         }
         let popup = egui::Popup::is_any_open(ctx);
-        if !typing && !popup && ctx.input(|i| i.key_pressed(Key::Escape)) {
+        let editing = self.widgets.drag.is_some_and(|drag| drag.edits());
+        if !typing && !popup && !editing && ctx.input(|i| i.key_pressed(Key::Escape)) {
             self.sender.send(Command::Dismiss);
         }
     }

@@ -17,6 +17,7 @@ use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 use super::{
     path_place::PlacedPath,
     worker::{Job, Worker},
+    zone_table::ZoneTable,
 };
 use crate::document::Design;
 
@@ -61,6 +62,8 @@ pub struct Derived {
     pub open: [Vec<OpenV>; 2],
     /// The start's path where it stands in the picture.
     pub path: Option<PlacedPath>,
+    /// The zones of the shell and their edges.
+    pub zones: ZoneTable,
     /// What is drawn.
     pub scene: Scene,
     /// Grows whenever `scene` is another one.
@@ -87,6 +90,7 @@ impl Derived {
             levels: Vec::new(),
             open: [Vec::new(), Vec::new()],
             path: None,
+            zones: ZoneTable::default(),
             scene: Scene::quick(&shell),
             scene_revision: 0,
             shell: Arc::new(shell),
@@ -110,6 +114,7 @@ impl Derived {
         self.families = self.parts.panels.iter().map(|p| p.family).collect();
         self.open = [open_vs(&shell, Side::Fore), open_vs(&shell, Side::Aft)];
         self.path = PlacedPath::of(&design.shape, &shell);
+        self.zones = ZoneTable::of(&shell);
         self.scene = Scene::quick(&shell);
         self.scene_revision += 1;
         self.shell = Arc::new(shell);

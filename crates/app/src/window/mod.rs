@@ -30,6 +30,8 @@ mod theme;
 mod view;
 mod widgets;
 mod worker;
+mod zone_table;
+mod zones;
 
 use std::path::{Path, PathBuf};
 
@@ -43,6 +45,8 @@ pub use picture::NAME as PICTURE;
 pub use session::STATE_DIR;
 pub use state::State;
 pub use view::{Hand, ViewState};
+pub use zone_table::ZoneTable;
+pub use zones::{SnapStar, ZoneAct, ZoneView};
 
 use crate::document::{self, Design};
 

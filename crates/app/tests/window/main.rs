@@ -8,3 +8,4 @@ mod import;
 mod panels;
 mod panes;
 mod view;
+mod zones;

@@ -8,6 +8,7 @@
 
 mod fan;
 mod freedom;
+mod measures;
 mod rules;
 mod set;
 mod single;
@@ -16,6 +17,7 @@ mod table;
 mod together;
 
 pub use freedom::{Freedom, freedom};
+pub use measures::Measures;
 pub use rules::{derive_zone, link_zone, unlink_zone};
 pub use set::{set_zone, set_zones};
 pub use symmetry::{Image, Turn, symmetric};

@@ -52,9 +52,8 @@ pub fn on_axis(near: Point, vector: Vector, axis: Vector, around: &Around<'_>, r
         let along = v.dot(axis);
         let (away, index) = nearest(around, |p| ((*p - near).dot(axis) - along).abs())?;
         let to = (around.vertices[index] - near).dot(axis);
-        let result = v + axis * (to - along);
-        (away <= rules.reach_mm && result.length() > rules.reach_mm).then_some(Snapped {
-            value: result,
+        (away <= rules.reach_mm).then_some(Snapped {
+            value: v + axis * (to - along),
             to: vec![SnapTo::Height(index)],
         })
     };

@@ -8,11 +8,13 @@
 //! before it: otherwise the next movement of the pointer would make it jump.
 
 mod edge;
+mod flat;
 mod point;
 mod round;
 mod still;
 
 pub use edge::{on_axis, snap_edge};
+pub use flat::Drawing;
 pub use point::snap_point;
 pub use round::{INCH_STEPS, MM_STEPS, round_step};
 pub use still::still_vertices;

@@ -33,9 +33,10 @@ pub(super) struct Free {
     pub(super) azimuth: bool,
 }
 
-/// Rounds length, slope and azimuth, each if it moves the vector's end by at most a third of the reach: together by at most the reach.
+/// Rounds length, and slope and azimuth if they are free, each if it moves the vector's end by at most its share of the reach: together
+/// by at most the reach.
 pub(super) fn round(v: Vector, rules: &Rules<'_>, free: Free) -> Option<Snapped<Vector>> {
-    let share = rules.reach_mm / 3.0;
+    let share = rules.reach_mm / f64::from(1 + u8::from(free.slope) + u8::from(free.azimuth));
     let (old, run) = (v.length(), v.x.hypot(v.y));
     if old <= 0.0 {
         return None;
@@ -96,7 +97,11 @@ pub(super) fn square(v: Vector, around: &Around<'_>, rules: &Rules<'_>) -> Optio
     let share = rules.reach_mm / 2.0;
     let mut best: Option<(f64, usize, Vector)> = None;
     for (index, neighbour) in around.neighbours.iter().enumerate() {
-        let unit = *neighbour / neighbour.length();
+        let length = neighbour.length();
+        if length <= 0.0 {
+            continue;
+        }
+        let unit = *neighbour / length;
         let away = v.dot(unit).abs();
         if away <= share && best.is_none_or(|(least, ..)| away < least) {
             let on = v - unit * v.dot(unit);
