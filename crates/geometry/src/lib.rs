@@ -4,6 +4,7 @@
 //! angles measured inside, from 0 to a full turn. Nothing here reads or writes files, knows colours, formats numbers or starts threads.
 
 pub mod finding;
+pub mod fit;
 pub mod grow;
 pub mod inspect;
 pub mod measure;
