@@ -7,7 +7,7 @@ use zonewright_geometry::{
     Point, Vector,
     fit::{
         FitEnd, FitOptions, FitStep, Paths, Plan, Target, TargetError, along, fit_path, fit_translation,
-        left_of_panels, middle_lines, resampled,
+        left_of_panels, middle_lines, paths_of, resampled, with_paths,
     },
 };
 
@@ -260,6 +260,90 @@ fn sections_lie_on_their_plane_and_on_the_target() {
     }
 }
 
+/// A translation surface of two arcs, placed with this turn, scale and mirror.
+fn shape(turn: [f64; 3], scale: f64, mirrored: bool) -> zonewright_geometry::Shape {
+    use zonewright_geometry::{start::*, *};
+    let arc = |azimuth: f64, parts| Curve {
+        shape: CurveShape::Arc {
+            span_mm: 4000.0,
+            rise_mm: 700.0,
+        },
+        parts,
+        azimuth: Angle::from_degrees(azimuth),
+    };
+    Shape {
+        start: Start::Translation(TranslationForm {
+            zig: arc(0.0, 6),
+            zag: arc(80.0, 4),
+        }),
+        zones: Vec::new(),
+        steps: vec![Step {
+            id: StepId(1),
+            name: None,
+            on: true,
+            side: Side::Fore,
+            act: Act::Lay {
+                courses: Courses::UntilStill,
+                spurs: Spurs::default(),
+            },
+        }],
+        finish: Vec::new(),
+        placement: Placement {
+            mirrored,
+            scale,
+            turn: turn.map(Angle::from_degrees),
+            shift: Vector::new(300.0, -50.0, 80.0),
+        },
+        outside: Outside::Grown,
+        tolerances: Tolerances::default(),
+    }
+}
+
+#[test]
+fn paths_are_where_the_shell_is_and_go_back_there() {
+    for (turn, scale, mirrored) in [([0.0; 3], 1.0, false), ([10.0, -20.0, 130.0], 1.5, true)] {
+        let shape = shape(turn, scale, mirrored);
+        let paths = paths_of(&shape).unwrap();
+        let (shell, _) = zonewright_geometry::grow(&shape);
+        let near = |shell: &zonewright_geometry::Shell, node: &Point| {
+            shell
+                .points
+                .iter()
+                .map(|p| p.distance(*node))
+                .fold(f64::INFINITY, f64::min)
+        };
+        assert_eq!(paths.nodes().len(), shell.points.len());
+        assert!(paths.nodes().iter().all(|node| near(&shell, node) < 1e-6));
+        // Other paths, put in: the shell then is where they are.
+        let mut moved = paths.clone();
+        moved.origin += Vector::new(1000.0, 200.0, -500.0);
+        moved.a[2] += Vector::new(5.0, 60.0, -40.0);
+        moved.b[0] += Vector::new(0.0, -30.0, 90.0);
+        let next = with_paths(&shape, &moved).unwrap();
+        assert_eq!(
+            (next.placement.turn, next.placement.mirrored),
+            (shape.placement.turn, mirrored)
+        );
+        let (grown, findings) = zonewright_geometry::grow(&next);
+        assert!(findings.is_empty(), "{findings:?}");
+        assert_eq!(grown.panels.len(), 24);
+        assert!(moved.nodes().iter().all(|node| near(&grown, node) < 1e-6));
+        let again = paths_of(&next).unwrap();
+        assert!(again.origin.distance(moved.origin) < 1e-6);
+    }
+}
+
+#[test]
+fn paths_that_cannot_be_walked_are_refused() {
+    let shape = shape([0.0; 3], 1.0, false);
+    let paths = paths_of(&shape).unwrap();
+    for edge in [Vector::ZERO, Vector::X * 1e9, Vector::NAN] {
+        let mut bad = paths.clone();
+        bad.a[1] = edge;
+        assert!(with_paths(&shape, &bad).is_err(), "{edge}");
+    }
+}
+
 proptest! {
     #![proptest_config(ProptestConfig::with_cases(48))]
 
@@ -300,7 +384,7 @@ proptest! {
         for place in asked {
             let place = Point(place.into());
             let singly = triangles.iter().map(|t| Target::new(points.clone(), vec![*t], &[]).unwrap());
-            let singly = singly.chain(lines.iter().map(|l| Target::new(points.clone(), vec![], &[l.clone()]).unwrap()));
+            let singly = singly.chain(lines.iter().map(|l| Target::new(points.clone(), vec![], std::slice::from_ref(l)).unwrap()));
             let least = singly.map(|one| one.closest(place).distance_mm).fold(f64::INFINITY, f64::min);
             prop_assert!((whole.closest(place).distance_mm - least).abs() < 1e-12);
             prop_assert!((whole.closest_from(place, Some(hint)).distance_mm - least).abs() < 1e-12);

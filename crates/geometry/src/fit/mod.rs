@@ -16,12 +16,14 @@ mod hurry;
 mod left;
 mod net;
 mod paths;
+mod shape;
 mod surface;
 mod target;
 
 pub use begin::{Plan, along, middle_lines, resampled};
 pub use left::{PanelLeft, left_of_panels};
 pub use paths::{Fit, FitEnd, FitOptions, FitStep, Paths};
+pub use shape::{paths_of, with_paths};
 pub use surface::{fit_path, fit_translation};
 pub use target::{Closest, Target, TargetError};
 
