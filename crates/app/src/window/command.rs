@@ -9,7 +9,7 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, view::Hand, zones::ZoneAct};
+use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand, zones::ZoneAct};
 use crate::document::Design;
 
 /// A command.
@@ -67,6 +67,8 @@ pub enum Command {
     DeleteFinish(usize),
     /// Splices the directions in hand at an open V, or takes that splice away again.
     ToggleSplice(Side, VName),
+    /// What the front strip sends.
+    Strip(StripAct),
     /// Takes other directions in hand.
     SetHand(Hand),
     /// Changes the kind of start, with that kind's usual parameters.
@@ -121,6 +123,8 @@ pub enum Command {
     SelectPoint(Option<usize>),
     /// Picks a panel of the shell; none picks nothing.
     SelectPanel(Option<u32>),
+    /// What the readouts are told.
+    Readings(ReadingAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -189,11 +193,15 @@ impl Command {
             Self::HiddenEdges,
             Self::SwapUnits,
             Self::SwapSide,
+            Self::Readings(ReadingAct::Remember),
+            Self::Readings(ReadingAct::GoBack),
+            Self::Readings(ReadingAct::Forget),
             Self::SwapTheme,
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(ZoneAct::listed().map(Self::Zone));
+        all.extend(StripAct::listed().map(Self::Strip));
         all
     }
 
@@ -229,6 +237,7 @@ impl Command {
                 "Splice here",
                 "Splices the directions in hand at an open V, or takes them out.",
             ),
+            Self::Strip(act) => return act.words(),
             Self::SetHand(_) => ("Directions in hand", "Chooses what the next splice inserts."),
             Self::SetKind(_) => ("Kind of start", "Changes where the first word comes from."),
             Self::SetStart(..) => ("Change the start", "Changes a parameter of the start."),
@@ -265,6 +274,7 @@ impl Command {
             Self::ShowFinding(_) => ("Show a finding", "Marks where a finding is."),
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
+            Self::Readings(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),
@@ -300,6 +310,7 @@ impl Command {
             Self::HiddenEdges => (Modifiers::COMMAND, Key::H),
             Self::SwapUnits => (Modifiers::COMMAND, Key::U),
             Self::SwapSide => (Modifiers::COMMAND, Key::B),
+            Self::Strip(StripAct::SwapRepeat) => (Modifiers::COMMAND, Key::R),
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
             Self::Pane(act) => act.shortcut()?,

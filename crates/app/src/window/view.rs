@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, zones::ZoneView};
+use super::{command::Words, readings::Shown, strip::StripView, zones::ZoneView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -34,6 +34,8 @@ pub struct ViewState {
     pub side: Side,
     /// The directions in hand.
     pub hand: Hand,
+    /// What of the front strip belongs to the view.
+    pub strip: StripView,
     /// The picked point of the path.
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
@@ -44,6 +46,8 @@ pub struct ViewState {
     pub rule: DragRule,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
+    /// What a readout shows in the picture.
+    pub shown: Option<Shown>,
     /// Whether the look is dark.
     pub dark: bool,
 }
@@ -56,11 +60,13 @@ impl Default for ViewState {
             colour: ColourBy::Zone,
             side: Side::Fore,
             hand: Hand::default(),
+            strip: StripView::default(),
             point: None,
             panel: None,
             zones: ZoneView::default(),
             rule: DragRule::Neighbours,
             finding: None,
+            shown: None,
             dark: false,
         }
     }

@@ -7,5 +7,7 @@ mod editing;
 mod import;
 mod panels;
 mod panes;
+mod readings;
+mod strip;
 mod view;
 mod zones;

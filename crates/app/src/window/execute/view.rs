@@ -26,7 +26,10 @@ pub(super) fn run(state: &mut State, command: Command) {
                 Side::Aft => Side::Fore,
             };
         }
-        Command::ShowFinding(finding) => view.finding = finding,
+        Command::ShowFinding(finding) => {
+            view.finding = finding;
+            view.shown = None;
+        }
         Command::SelectPoint(point) => {
             view.point = point;
             view.panel = None;
@@ -45,13 +48,17 @@ pub(super) fn run(state: &mut State, command: Command) {
     }
 }
 
-/// Closes what is open: the search first, then a question, then a message, then what is picked.
+/// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then what is picked.
 fn dismiss(state: &mut State) {
+    if state.view.strip.span.take().is_some() {
+        return;
+    }
     if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
         return;
     }
     if state.message.take().is_none() {
         state.view.finding = None;
+        state.view.shown = None;
         state.view.point = None;
         state.view.panel = None;
     }
