@@ -22,6 +22,7 @@ mod prompts;
 mod search;
 mod session;
 mod splice_marks;
+mod stages;
 mod state;
 mod strip;
 mod strip_layout;
@@ -34,7 +35,7 @@ use std::path::{Path, PathBuf};
 
 pub use app::App;
 pub use command::{Command, Unsaved};
-pub use derived::{Counts, Derived};
+pub use derived::{Counts, Derived, Pending};
 pub use history::History;
 pub use path_edit::PathEdit;
 pub use picture::NAME as PICTURE;

@@ -3,7 +3,7 @@
 use zonewright_geometry::Side;
 use zonewright_painter::{Bounds, Camera, View};
 
-use crate::window::{command::Command, state::State};
+use crate::window::{command::Command, derived::Pending, state::State};
 
 /// Carries out a command that leaves the design alone.
 pub(super) fn run(state: &mut State, command: Command) {
@@ -86,6 +86,8 @@ fn look(state: &mut State, to: View) {
 pub(crate) fn fit_when_pending(state: &mut State) {
     if state.fit_pending
         && state.camera.size[0] > 1.0
+        // What is shown may still be the design before.
+        && state.derived.revision == state.history.revision()
         && let Some(bounds) = bounds(state)
     {
         state.camera = Camera::view(View::Fit, state.view.projection, &bounds, state.camera.size);
@@ -98,6 +100,9 @@ pub(crate) fn fit_when_pending(state: &mut State) {
 /// Fits the camera again when the shell's box is another one and the user has left the camera alone. While something is
 /// dragged, and for what it leaves behind, the camera stays: a dragged point must stay under the pointer.
 pub(crate) fn refit(state: &mut State, dragging: bool) {
+    if state.derived.pending() == Some(Pending::Shell) {
+        return;
+    }
     let bounds = bounds(state);
     if state.fitted == bounds {
         return;

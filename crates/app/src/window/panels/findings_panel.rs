@@ -4,13 +4,18 @@ use egui::{RichText, Ui};
 use zonewright_geometry::{Code, Finding, Level, Place};
 
 use super::Cx;
-use crate::window::{command::Command, derived::MOST_SHOWN};
+use crate::window::{
+    command::Command,
+    derived::{MOST_SHOWN, Pending},
+};
 
 /// Draws the list of findings.
 pub(super) fn findings_ui(cx: Cx<'_>, ui: &mut Ui) {
     let findings = &cx.state.derived.findings;
     if findings.is_empty() {
-        ui.weak(match cx.state.derived.inspection {
+        let derived = &cx.state.derived;
+        ui.weak(match derived.inspection {
+            _ if derived.pending() == Some(Pending::Shell) => "Being worked out…",
             Some(_) => "Nothing to report.",
             None => "Being inspected…",
         });

@@ -5,14 +5,32 @@ use zonewright_geometry::measure::Range;
 use zonewright_shop::text;
 
 use super::Cx;
+use crate::window::derived::Pending;
 
 /// Draws the readouts.
 pub(super) fn readouts_ui(cx: Cx<'_>, ui: &mut Ui) {
     ui.spacing_mut().item_spacing.y = 3.0;
+    let pending = cx.state.derived.pending();
     for (name, value) in rows(cx) {
-        readout(ui, name, &value);
+        let behind = match pending {
+            Some(Pending::Shell) => true,
+            Some(Pending::Parts) => OF_PARTS.contains(&name),
+            None => false,
+        };
+        if behind {
+            ui.scope(|ui| {
+                // What is shown is of the shell before: faded until the new value is there.
+                ui.multiply_opacity(0.5);
+                readout(ui, name, &format!("{value} …"));
+            });
+        } else {
+            readout(ui, name, &value);
+        }
     }
 }
+
+/// Readouts that need the panels as parts.
+const OF_PARTS: [&str; 2] = ["Families", "Bevels"];
 
 /// One name and its value.
 pub(super) fn readout(ui: &mut Ui, name: &str, value: &str) {
