@@ -3,10 +3,12 @@
 //! Conventions: millimetres, radians, f64; right-handed with z up; panels counter-clockwise seen from outside; dihedral
 //! angles measured inside, from 0 to a full turn. Nothing here reads or writes files, knows colours, formats numbers or starts threads.
 
+pub mod ahead;
 pub mod finding;
 pub mod grow;
 pub mod inspect;
 pub mod measure;
+pub mod parameter;
 mod record;
 mod shell;
 mod shell_check;
@@ -15,6 +17,7 @@ pub mod start;
 
 pub use finding::{Code, Finding, Level, Place, Unit};
 pub use grow::{grow, grow_until};
+pub use parameter::{Parameter, ParameterKind, parameters, set_parameter};
 pub use record::{
     Act, Courses, Direction, Finish, FinishAct, LetterName, Maker, Outside, PanelName, Placement, RoleRule, Shape,
     Side, Sign, Spurs, Step, StepId, Tolerances, VName, Vs, ZoneRef, ZoneRule, ZoneVector,

@@ -21,6 +21,7 @@ use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 use super::{
     path_place::PlacedPath,
     stages::{Coarse, Grow, Grown, Inspect, Inspected, grow_stages},
+    strip::StripFront,
     worker::Worker,
 };
 use crate::document::Design;
@@ -77,6 +78,8 @@ pub struct Derived {
     pub levels: Vec<Option<Level>>,
     /// Open Vs of the fore and the aft front.
     pub open: [Vec<OpenV>; 2],
+    /// The fore and the aft front as the strip shows them.
+    pub strip: [StripFront; 2],
     /// The start's path where it stands in the picture.
     pub path: Option<PlacedPath>,
     /// What is drawn.
@@ -91,6 +94,12 @@ pub struct Derived {
     wanted: u64,
     /// The revision that the parts are about.
     parts_revision: u64,
+    /// The revision that the parts are about.
+    #[must_use]
+    pub const fn parts_revision(&self) -> u64 {
+        self.parts_revision
+    }
+
     /// Whether the shell was asked for while something was dragged.
     by_drag: bool,
     changed_at: f64,
@@ -110,6 +119,7 @@ impl Derived {
             texts: Vec::new(),
             levels: Vec::new(),
             open: [Vec::new(), Vec::new()],
+            strip: [StripFront::empty(), StripFront::empty()],
             path: None,
             scene: Scene::quick(&shell),
             scene_revision: 0,
@@ -205,6 +215,7 @@ impl Derived {
         self.by_drag = coarse.dragging;
         self.totals = coarse.totals;
         self.open = coarse.open;
+        self.strip = coarse.strip;
         self.path = coarse.path;
         self.scene = coarse.scene;
         self.scene_revision += 1;
@@ -268,6 +279,15 @@ impl Derived {
             let writer = FindingWriter::new(&self.shell, &self.parts);
             first.map(|f| writer.write(f).text).collect()
         };
+    }
+
+    /// A front as the strip shows it.
+    #[must_use]
+    pub const fn strip_on(&self, side: Side) -> &StripFront {
+        match side {
+            Side::Fore => &self.strip[0],
+            Side::Aft => &self.strip[1],
+        }
     }
 
     /// Open Vs of a front.

@@ -11,7 +11,7 @@ use zonewright_geometry::{
 use zonewright_painter::Scene;
 use zonewright_shop::{FamilyTolerance, Parts};
 
-use super::path_place::PlacedPath;
+use super::{path_place::PlacedPath, strip::StripFront};
 use crate::document::Design;
 
 /// What is to be grown.
@@ -54,6 +54,8 @@ pub struct Coarse {
     pub totals: Totals,
     /// Open Vs of the fore and the aft front.
     pub open: [Vec<OpenV>; 2],
+    /// The fore and the aft front as the strip shows them.
+    pub strip: [StripFront; 2],
     /// The start's path where it stands in the picture.
     pub path: Option<PlacedPath>,
     /// The order by the middles of panels.
@@ -69,11 +71,15 @@ pub(super) fn grow_stages(job: Grow, answer: &mut dyn FnMut(Grown) -> bool) {
     } = job;
     let (shell, findings) = grow(&design.shape);
     let shell = Arc::new(shell);
+    let sides = [Side::Fore, Side::Aft];
+    let open = sides.map(|side| open_vs(&shell, side));
+    let strip = [0, 1].map(|at| StripFront::of(&design.shape, &shell, sides[at], &open[at]));
     let coarse = Coarse {
         revision,
         dragging,
         totals: totals(&shell),
-        open: [open_vs(&shell, Side::Fore), open_vs(&shell, Side::Aft)],
+        open,
+        strip,
         path: PlacedPath::of(&design.shape, &shell),
         scene: Scene::quick(&shell),
         shell: Arc::clone(&shell),
