@@ -94,12 +94,6 @@ pub struct Derived {
     wanted: u64,
     /// The revision that the parts are about.
     parts_revision: u64,
-    /// The revision that the parts are about.
-    #[must_use]
-    pub const fn parts_revision(&self) -> u64 {
-        self.parts_revision
-    }
-
     /// Whether the shell was asked for while something was dragged.
     by_drag: bool,
     changed_at: f64,
@@ -145,6 +139,12 @@ impl Derived {
         } else {
             None
         }
+    }
+
+    /// The revision that the parts are about.
+    #[must_use]
+    pub const fn parts_revision(&self) -> u64 {
+        self.parts_revision
     }
 
     /// Whether the shell was asked for while something was dragged.
