@@ -25,6 +25,7 @@ mod remedies;
 mod search;
 mod session;
 mod splice_marks;
+mod stages;
 mod state;
 mod strip;
 mod theme;
@@ -38,7 +39,7 @@ use std::path::{Path, PathBuf};
 
 pub use app::App;
 pub use command::{Command, Unsaved};
-pub use derived::{Counts, Derived};
+pub use derived::{Counts, Derived, Pending};
 pub use history::History;
 pub use panes::{Layout, Pane, PaneAct, Panes};
 pub use path_edit::PathEdit;
