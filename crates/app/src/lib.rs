@@ -3,6 +3,7 @@
 pub mod animation;
 pub mod command_line;
 pub mod document;
+pub mod fitting;
 pub mod import;
 pub mod report;
 pub mod window;
