@@ -8,7 +8,7 @@ use super::{
     command::{Command, Sender},
     derived::Counts,
     dialogs::Asked,
-    execute, menu,
+    execute, ladder, menu,
     panels::{self, Cx},
     path_box, picture, prompts, search,
     state::State,
@@ -166,7 +166,9 @@ impl App {
         let now = ctx.input(|i| i.time);
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
-        state.derived.follow(&design, state.history.revision(), now);
+        execute::keep_climbed(state);
+        let climbed = state.view.ladder.climbed;
+        state.derived.follow(&design, state.history.revision(), climbed, now);
         execute::keep_picked(state);
         if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
@@ -210,6 +212,11 @@ impl eframe::App for App {
             .default_size(sizes.left)
             .size_range(sizes.left..=520.0)
             .show(ui, |ui| panels::left_ui(cx, ui));
+        let upright = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(8, sizes.margin));
+        Panel::left("ladder")
+            .frame(upright)
+            .exact_size(sizes.ladder)
+            .show(ui, |ui| ladder::ladder_ui(cx, ui, widgets));
         Panel::right("readouts and findings")
             .frame(side)
             .default_size(sizes.right)
@@ -222,6 +229,7 @@ impl eframe::App for App {
         CentralPanel::no_frame().frame(side).show(ui, |ui| {
             prompts::banners_ui(cx, ui);
             picture::picture_ui(cx, ui, widgets);
+            ladder::banner_ui(cx, ui, ui.max_rect());
         });
         search::search_ui(cx, ui, widgets);
         path_box::path_box_ui(cx, ui, widgets);

@@ -8,6 +8,7 @@ use std::sync::Arc;
 use zonewright_geometry::{
     Finding, Level, OpenV, Place, Shell, Side, grow,
     grow::open_vs,
+    grow_part,
     inspect::Inspection,
     measure::{Totals, totals},
 };
@@ -15,6 +16,7 @@ use zonewright_painter::Scene;
 use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 
 use super::{
+    ladder::{Climbed, Ladder},
     path_place::PlacedPath,
     worker::{Job, Worker},
 };
@@ -43,7 +45,11 @@ pub struct Counts {
 pub struct Derived {
     /// The revision that all this is about.
     pub revision: u64,
-    /// The shell.
+    /// How far up the ladder the shell is shown; none is the whole.
+    pub climbed: Option<Climbed>,
+    /// The ladder of the whole shell, however far one has climbed.
+    pub ladder: Ladder,
+    /// The shell, up to where one has climbed.
     pub shell: Arc<Shell>,
     /// What growing found, and, once it is there, what the inspection found.
     pub findings: Vec<Finding>,
@@ -80,6 +86,8 @@ impl Derived {
         let shell = Shell::default();
         Self {
             revision: 0,
+            climbed: None,
+            ladder: Ladder::default(),
             totals: totals(&shell),
             parts: Parts::new(&shell, &FamilyTolerance::default()),
             families: Vec::new(),
@@ -98,13 +106,25 @@ impl Derived {
         }
     }
 
-    /// Works the quick stages out when the revision is another one. `now` is in seconds.
-    pub fn follow(&mut self, design: &Design, revision: u64, now: f64) {
-        if revision == self.revision {
+    /// Works the quick stages out when the revision is another one, or the place on the ladder. `now` is in seconds.
+    pub fn follow(&mut self, design: &Design, revision: u64, climbed: Option<Climbed>, now: f64) {
+        if revision == self.revision && climbed == self.climbed {
             return;
         }
+        let shape = &design.shape;
+        let stage = climbed.and_then(|place| place.stage(shape));
+        let mut whole = None;
+        if revision != self.revision || stage.is_none() {
+            let (shell, findings) = grow(shape);
+            self.ladder = Ladder::of(shape, &shell, &findings);
+            whole = Some((shell, findings));
+        }
         self.revision = revision;
-        let (shell, findings) = grow(&design.shape);
+        self.climbed = climbed;
+        let (shell, findings) = match (stage, whole) {
+            (None, Some(whole)) => whole,
+            (stage, _) => grow_part(shape, stage.unwrap_or_default(), self.ladder.lift_mm),
+        };
         self.totals = totals(&shell);
         self.parts = Parts::new(&shell, &FamilyTolerance::default());
         self.families = self.parts.panels.iter().map(|p| p.family).collect();
@@ -134,7 +154,8 @@ impl Derived {
                 self.asked = true;
                 self.counts.requested += 1;
                 worker.request(Job {
-                    revision: self.revision,
+                    // Not the design's revision: a part of the same revision is another shell.
+                    revision: self.counts.grown,
                     shell: Arc::clone(&self.shell),
                     tolerances: design.shape.tolerances,
                 });
@@ -143,7 +164,7 @@ impl Derived {
             }
         }
         if let Some(done) = worker.poll()
-            && done.revision == self.revision
+            && done.revision == self.counts.grown
         {
             self.findings.extend(done.inspection.findings(&design.shape.tolerances));
             self.put_into_words();

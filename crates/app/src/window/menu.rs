@@ -4,7 +4,7 @@ use egui::{Button, MenuBar, Ui};
 use zonewright_painter::{Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{command::Command, kinds, panels::Cx};
+use super::{command::Command, kinds, ladder::LadderAct, panels::Cx};
 
 /// Draws the menu bar.
 pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
@@ -34,6 +34,8 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                 ui,
                 [Command::AddCourse, Command::RemoveCourse, Command::LayUntilStill],
             );
+            ui.separator();
+            items(cx, ui, LadderAct::LISTED.map(Command::Ladder));
             ui.separator();
             items(cx, ui, [Command::SwapSide]);
         });

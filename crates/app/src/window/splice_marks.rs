@@ -22,12 +22,12 @@ pub(super) fn v_name(state: &State, side: Side, index: usize) -> Option<VName> {
 /// The open Vs of a front that a click would unsplice, by their places among the open Vs.
 #[must_use]
 pub(super) fn spliced(state: &State, side: Side) -> BTreeSet<usize> {
-    let shape = state.shape();
+    let shape = state.shown_shape();
     let last = shape.steps.iter().rev().find(|s| s.on && s.side == side);
     if !last.is_some_and(|s| matches!(s.act, Act::Splice { .. })) {
         return BTreeSet::new();
     }
     (0..state.derived.open_on(side).len())
-        .filter(|at| v_name(state, side, *at).is_some_and(|v| fresh_splice(shape, side, &v).is_some()))
+        .filter(|at| v_name(state, side, *at).is_some_and(|v| fresh_splice(&shape, side, &v).is_some()))
         .collect()
 }

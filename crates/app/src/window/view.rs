@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 
-use super::command::Words;
+use super::{command::Words, ladder::LadderView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -42,6 +42,8 @@ pub struct ViewState {
     pub panel: Option<(u32, PanelName)>,
     /// What follows a dragged point.
     pub rule: DragRule,
+    /// How far one has climbed on the ladder, and which step's card is open.
+    pub ladder: LadderView,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
     /// Whether the look is dark.
@@ -60,6 +62,7 @@ impl Default for ViewState {
             point: None,
             panel: None,
             rule: DragRule::Neighbours,
+            ladder: LadderView::default(),
             finding: None,
             dark: false,
         }

@@ -64,6 +64,8 @@ pub(super) struct Widgets {
     pub over_next: Option<(Side, usize)>,
     /// The picture.
     pub cache: PictureCache,
+    /// The ladder.
+    pub ladder: super::ladder::LadderWidgets,
     /// How often a picture was put together.
     pub pictures: u64,
 }

@@ -14,7 +14,7 @@ use zonewright_painter::Scene;
 /// What to work out.
 #[derive(Clone, Debug)]
 pub struct Job {
-    /// The revision that it is about.
+    /// Which growth it is about.
     pub revision: u64,
     /// The shell.
     pub shell: Arc<Shell>,
@@ -25,7 +25,7 @@ pub struct Job {
 /// What was worked out.
 #[derive(Debug)]
 pub struct Done {
-    /// The revision that it is about.
+    /// Which growth it is about.
     pub revision: u64,
     /// Crossings, doubled panels, near misses.
     pub inspection: Inspection,

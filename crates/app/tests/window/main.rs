@@ -5,5 +5,6 @@
 mod common;
 mod editing;
 mod import;
+mod ladder;
 mod panels;
 mod view;

@@ -2,11 +2,13 @@
 
 use zonewright_geometry::{Act, LetterName, Maker, Shape, Side, Step, StepId, VName, Vs, grow::open_vs, grow_until};
 
+use super::steps;
 use crate::window::state::State;
 
 /// Splices at a V, or, when the V was made by a splice that nothing was laid upon yet, takes that splice away.
 pub(super) fn toggle(state: &mut State, side: Side, v: VName) {
-    if let Some((at, spliced)) = fresh_splice(state.shape(), side, &v) {
+    let shown = state.shown_shape();
+    if let Some((at, spliced)) = fresh_splice(&shown, side, &v) {
         take_away(state, side, at, &spliced);
         return;
     }
@@ -25,30 +27,34 @@ pub(super) fn toggle(state: &mut State, side: Side, v: VName) {
         };
         step.on && step.side == side && *d == directions
     };
-    let id = state.shape().next_step_id();
-    let steps = &state.shape().steps;
-    let joined = steps.last().is_some_and(same) && !made_by_step(&v, steps.last().map(|s| s.id));
-    state.change("Splice at a V", None, |design| {
-        let steps = &mut design.shape.steps;
-        match steps.last_mut().map(|s| &mut s.act) {
-            Some(Act::Splice {
+    let last = shown.steps.len().checked_sub(1);
+    let joined = last.filter(|at| {
+        let step = &shown.steps[*at];
+        same(step) && !made_by_step(&v, Some(step.id))
+    });
+    match joined {
+        Some(at) => state.change("Splice at a V", None, |design| {
+            if let Act::Splice {
                 at: Vs::Picked(names), ..
-            }) if joined => names.push(v),
-            _ => {
-                let act = Act::Splice {
+            } = &mut design.shape.steps[at].act
+            {
+                names.push(v);
+            }
+        }),
+        None => {
+            let step = Step {
+                id: StepId(0),
+                name: None,
+                on: true,
+                side,
+                act: Act::Splice {
                     at: Vs::Picked(vec![v]),
                     directions,
-                };
-                steps.push(Step {
-                    id,
-                    name: None,
-                    on: true,
-                    side,
-                    act,
-                });
-            }
+                },
+            };
+            steps::insert(state, state.view.ladder.climbed, step, "Splice at a V");
         }
-    });
+    }
     state.say("Spliced; lay a course to grow along the new directions");
 }
 
@@ -88,10 +94,13 @@ fn take_away(state: &mut State, side: Side, at: usize, spliced: &LetterName) {
         Vs::All | Vs::EveryKth { .. } => found_by(shape, side, at, vs),
     };
     let left: Vec<VName> = names.into_iter().filter(|v| v.zig != *spliced).collect();
+    if left.is_empty() {
+        steps::take_out(state, at, "Take a splice away");
+        state.say("The splice was taken away");
+        return;
+    }
     state.change("Take a splice away", None, |design| {
-        if left.is_empty() {
-            design.shape.steps.remove(at);
-        } else if let Act::Splice { at: vs, .. } = &mut design.shape.steps[at].act {
+        if let Act::Splice { at: vs, .. } = &mut design.shape.steps[at].act {
             *vs = Vs::Picked(left);
         }
     });
@@ -114,7 +123,7 @@ fn found_by(shape: &Shape, side: Side, at: usize, rule: &Vs) -> Vec<VName> {
     before.into_iter().filter(|v| spliced.contains(&v.zig)).collect()
 }
 
-fn v_names(shape: &Shape, side: Side, steps: usize) -> Vec<VName> {
+pub(super) fn v_names(shape: &Shape, side: Side, steps: usize) -> Vec<VName> {
     let (shell, _) = grow_until(shape, steps);
     let front = &shell.fronts[usize::from(side == Side::Aft)];
     let count = front.letters.len();

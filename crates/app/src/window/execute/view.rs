@@ -59,10 +59,15 @@ fn dismiss(state: &mut State) {
     if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
         return;
     }
-    if state.message.take().is_none() {
+    if state.message.take().is_some() {
+        return;
+    }
+    // One looks at the whole again before anything is let go.
+    if state.view.ladder.climbed.take().is_none() {
         state.view.finding = None;
         state.view.point = None;
         state.view.panel = None;
+        state.view.ladder.picked = None;
     }
 }
 
@@ -98,6 +103,10 @@ pub(crate) fn fit_when_pending(state: &mut State) {
 /// Fits the camera again when the shell's box is another one and the user has left the camera alone. While something is
 /// dragged, and for what it leaves behind, the camera stays: a dragged point must stay under the pointer.
 pub(crate) fn refit(state: &mut State, dragging: bool) {
+    // A part of the shell is looked at from where the whole was: climbing must not move the picture.
+    if state.view.ladder.climbed.is_some() {
+        return;
+    }
     let bounds = bounds(state);
     if state.fitted == bounds {
         return;
