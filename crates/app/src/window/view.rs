@@ -1,9 +1,9 @@
 //! What is not part of the design: where one looks from, what is picked, what is in hand.
 
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
-use zonewright_painter::{ColourBy, Faces, Projection, View};
+use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, ladder::LadderView};
+use super::{command::Words, ladder::LadderView, readings::Shown};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -24,8 +24,6 @@ impl Default for Hand {
 /// The state of the window that is not saved with the design.
 #[derive(Clone, PartialEq, Debug)]
 pub struct ViewState {
-    /// Perspective or parallel.
-    pub projection: Projection,
     /// How faces are drawn.
     pub faces: Faces,
     /// Whether edges behind faces are drawn.
@@ -46,6 +44,8 @@ pub struct ViewState {
     pub ladder: LadderView,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
+    /// What a readout shows in the picture.
+    pub shown: Option<Shown>,
     /// Whether the look is dark.
     pub dark: bool,
 }
@@ -53,7 +53,6 @@ pub struct ViewState {
 impl Default for ViewState {
     fn default() -> Self {
         Self {
-            projection: Projection::Perspective,
             faces: Faces::ShadedWithEdges,
             hidden_edges: false,
             colour: ColourBy::Zone,
@@ -64,6 +63,7 @@ impl Default for ViewState {
             rule: DragRule::Neighbours,
             ladder: LadderView::default(),
             finding: None,
+            shown: None,
             dark: false,
         }
     }

@@ -82,7 +82,7 @@ fn splice(at: Vs) -> Act {
 fn a_clicked_rung_shows_the_shell_up_to_there_and_leaves_the_design_alone() {
     let mut harness = open(polar(Some(4)));
     let before = harness.state().state().design().clone();
-    let camera = harness.state().state().camera;
+    let camera = harness.state().state().camera();
     // Eight ribs give eight panels a course (derived).
     assert_eq!(panels(&harness), 32);
     harness.get_by_label("Step 1: Lay, 4 courses, on");
@@ -93,7 +93,11 @@ fn a_clicked_rung_shows_the_shell_up_to_there_and_leaves_the_design_alone() {
     harness.get_by_label("Showing course 2 of 4");
     let all = &harness.state().state().derived.shell.courses;
     assert_eq!(all.iter().map(|c| c.number).collect::<Vec<_>>(), [1, 2]);
-    assert_eq!(harness.state().state().camera, camera, "the picture stays where it is");
+    assert_eq!(
+        harness.state().state().camera(),
+        camera,
+        "the picture stays where it is"
+    );
     assert_eq!(harness.state().state().design(), &before);
     click(&mut harness, "Back to the top");
     assert_eq!((panels(&harness), climbed(&harness)), (32, None));
@@ -102,7 +106,7 @@ fn a_clicked_rung_shows_the_shell_up_to_there_and_leaves_the_design_alone() {
     assert_eq!(panels(&harness), 0);
     key(&mut harness, Key::Escape);
     assert_eq!((panels(&harness), climbed(&harness)), (32, None));
-    assert_eq!(harness.state().state().camera, camera);
+    assert_eq!(harness.state().state().camera(), camera);
     // The last rung is the top.
     click(&mut harness, "Course 4: 8 panels");
     assert_eq!(climbed(&harness), None);

@@ -7,4 +7,6 @@ mod editing;
 mod import;
 mod ladder;
 mod panels;
+mod panes;
+mod readings;
 mod view;

@@ -11,7 +11,7 @@ const COURSE: [f32; 2] = [13.0, 20.0];
 /// Room above the top row and below the start.
 const AIR: f32 = 10.0;
 /// Room for the numbers on the left, and for the counts of panels on the right.
-const NUMBERS: f32 = 26.0;
+pub(super) const NUMBERS: f32 = 36.0;
 const COUNTS: f32 = 34.0;
 
 /// The rows of a ladder in a place of a size.

@@ -261,14 +261,12 @@ impl Rows<'_> {
         let colour = self.cx.state.colours().accent();
         let painter = ui.painter();
         painter.hline(place.x_range(), place.top(), Stroke::new(2.0, colour));
-        for (x, inwards) in [(place.left(), 6.0), (place.right(), -6.0)] {
-            let corners = vec![
-                pos2(x, place.top() - 4.5),
-                pos2(x + inwards, place.top()),
-                pos2(x, place.top() + 4.5),
-            ];
-            painter.add(Shape::convex_polygon(corners, colour, Stroke::NONE));
-        }
+        let corners = vec![
+            pos2(place.right(), place.top() - 4.5),
+            pos2(place.right() - 6.0, place.top()),
+            pos2(place.right(), place.top() + 4.5),
+        ];
+        painter.add(Shape::convex_polygon(corners, colour, Stroke::NONE));
     }
 
     /// The button between this row and the next one that adds a step there: where the pointer is near, and at the mark.
@@ -288,7 +286,7 @@ impl Rows<'_> {
             return;
         }
         let edge = self.layout.row(at);
-        let middle = pos2(edge.left() + 13.0, edge.top());
+        let middle = pos2(edge.left() + 8.0, edge.top());
         let response = ui.interact(Rect::from_center_size(middle, vec2(16.0, 16.0)), id, Sense::click());
         let after = match row.kind {
             RowKind::Course { .. } => {

@@ -7,7 +7,7 @@ use zonewright_shop::text;
 
 use super::{
     glyph,
-    layout::Layout,
+    layout::{Layout, NUMBERS},
     model::{Row, RowKind, left_out, title},
 };
 use crate::window::{panels::Cx, picture, theme::Colours};
@@ -62,7 +62,7 @@ pub(super) fn course(cx: Cx<'_>, painter: &Painter, layout: &Layout, at: usize, 
     let y = place.center().y;
     let label = number.unsigned_abs().to_string();
     painter.text(
-        pos2(place.left() + 21.0, y),
+        pos2(place.left() + NUMBERS - 6.0, y),
         Align2::RIGHT_CENTER,
         label,
         font.clone(),
