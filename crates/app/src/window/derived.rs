@@ -18,6 +18,7 @@ use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 use super::{
     ladder::{Climbed, Ladder},
     path_place::PlacedPath,
+    strip::StripFront,
     worker::{Job, Worker},
 };
 use crate::document::Design;
@@ -65,6 +66,8 @@ pub struct Derived {
     pub levels: Vec<Option<Level>>,
     /// Open Vs of the fore and the aft front.
     pub open: [Vec<OpenV>; 2],
+    /// The fore and the aft front as the strip shows them.
+    pub strip: [StripFront; 2],
     /// The start's path where it stands in the picture.
     pub path: Option<PlacedPath>,
     /// What is drawn.
@@ -94,6 +97,7 @@ impl Derived {
             texts: Vec::new(),
             levels: Vec::new(),
             open: [Vec::new(), Vec::new()],
+            strip: [StripFront::empty(), StripFront::empty()],
             path: None,
             scene: Scene::quick(&shell),
             scene_revision: 0,
@@ -125,10 +129,13 @@ impl Derived {
             (None, Some(whole)) => whole,
             (stage, _) => grow_part(shape, stage.unwrap_or_default(), self.ladder.lift_mm),
         };
+        let part = stage.map(|stage| shape.up_to(stage));
+        let shown = part.as_ref().unwrap_or(shape);
         self.totals = totals(&shell);
         self.parts = Parts::new(&shell, &FamilyTolerance::default());
         self.families = self.parts.panels.iter().map(|p| p.family).collect();
         self.open = [open_vs(&shell, Side::Fore), open_vs(&shell, Side::Aft)];
+        self.strip = [Side::Fore, Side::Aft].map(|side| StripFront::of(shown, &shell, side, self.open_on(side)));
         self.path = PlacedPath::of(&design.shape, &shell);
         self.scene = Scene::quick(&shell);
         self.scene_revision += 1;
@@ -186,6 +193,15 @@ impl Derived {
             let writer = FindingWriter::new(&self.shell, &self.parts);
             first.map(|f| writer.write(f).text).collect()
         };
+    }
+
+    /// A front as the strip shows it.
+    #[must_use]
+    pub const fn strip_on(&self, side: Side) -> &StripFront {
+        match side {
+            Side::Fore => &self.strip[0],
+            Side::Aft => &self.strip[1],
+        }
     }
 
     /// Open Vs of a front.

@@ -9,4 +9,5 @@ mod ladder;
 mod panels;
 mod panes;
 mod readings;
+mod strip;
 mod view;

@@ -15,7 +15,7 @@ mod mesh;
 mod outside;
 mod part;
 mod pick;
-mod place;
+pub(crate) mod place;
 mod rims;
 mod roles;
 mod seams;
@@ -32,6 +32,7 @@ use lay::Laid;
 pub use mesh::MAX_PANELS;
 use mesh::Mesh;
 pub use part::{Stage, grow_part, split_lay};
+pub use place::placed_vector;
 
 use crate::{Act, Code, Courses, Finding, FirstWord, Place, Shape, Side, Spurs, Step, Unit, shell::Grown};
 

@@ -29,8 +29,8 @@ pub(super) fn run(state: &mut State, act: LadderAct) {
                 side: state.view.side,
                 act: *act,
             };
-            let id = steps::insert(state, place, step, "Add a step");
-            state.view.ladder.picked = Some(id);
+            let id = steps::insert(state, place, vec![step], "Add a step");
+            state.view.ladder.picked = id;
             state.say("A step was added; its card is on the left");
         }
         LadderAct::Mend(id) => mend(state, id),

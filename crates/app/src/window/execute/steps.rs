@@ -30,26 +30,31 @@ fn last_lay(state: &State) -> Option<(usize, Courses, Option<u32>)> {
     Some((at, *courses, cut))
 }
 
-/// Puts a step in at a place of the ladder; none is the top. A step that lays courses is split there. Gives its number.
-pub(super) fn insert(state: &mut State, place: Option<Climbed>, step: Step, label: &str) -> StepId {
+/// Puts steps in at a place of the ladder; none is the top. A step that lays courses is split there. Gives the number of
+/// the last one.
+pub(super) fn insert(state: &mut State, place: Option<Climbed>, steps: Vec<Step>, label: &str) -> Option<StepId> {
     let shape = state.shape();
     let end = Stage::after(shape.steps.len());
     let stage = place.and_then(|p| p.stage(shape)).unwrap_or(end);
     let split = split_lay(shape, stage.steps, stage.passes);
     let at = stage.steps + usize::from(0 < stage.passes);
-    let mut id = step.id;
+    let mut last = None;
     state.change(label, None, |design| {
+        let shape = &mut design.shape;
         if let Some(split) = split {
-            design.shape = split;
+            *shape = split;
         }
-        id = design.shape.next_step_id();
-        design.shape.steps.insert(at, Step { id, ..step });
+        for (at, step) in (at..).zip(steps) {
+            let id = shape.next_step_id();
+            shape.steps.insert(at, Step { id, ..step });
+            last = Some(id);
+        }
     });
     let ladder = &mut state.view.ladder;
     if ladder.climbed.is_some() {
-        ladder.climbed = Some(Climbed::Step(id));
+        ladder.climbed = last.map(Climbed::Step).or(ladder.climbed);
     }
-    id
+    last
 }
 
 fn new_step(state: &State, act: Act) -> Step {
@@ -79,7 +84,7 @@ pub(super) fn add_course(state: &mut State) {
                 spurs,
             };
             let step = new_step(state, act);
-            insert(state, state.view.ladder.climbed, step, "Add a course");
+            insert(state, state.view.ladder.climbed, vec![step], "Add a course");
             state.say("A course was added");
         }
     }
@@ -151,7 +156,7 @@ pub(super) fn lay_until_still(state: &mut State) {
         None => {
             let spurs = Spurs::default();
             let step = new_step(state, Act::Lay { courses: until, spurs });
-            insert(state, state.view.ladder.climbed, step, "Lay until still");
+            insert(state, state.view.ladder.climbed, vec![step], "Lay until still");
         }
     }
     state.say("Laid until still");
@@ -159,8 +164,8 @@ pub(super) fn lay_until_still(state: &mut State) {
 
 /// Adds a step where one has climbed to; its number is given here. Its card is opened.
 pub(super) fn add(state: &mut State, step: Step) {
-    let id = insert(state, state.view.ladder.climbed, step, "Add a step");
-    state.view.ladder.picked = Some(id);
+    let id = insert(state, state.view.ladder.climbed, vec![step], "Add a step");
+    state.view.ladder.picked = id;
 }
 
 /// Replaces a step.
@@ -194,14 +199,25 @@ pub(super) fn delete(state: &mut State, at: usize) {
 }
 
 /// Takes a step out of the record. Who had climbed to it stands before it now.
-pub(super) fn take_out(state: &mut State, at: usize, label: &str) {
-    let id = state.shape().steps[at].id;
-    let below = before(state.shape(), at);
+fn take_out(state: &mut State, at: usize, label: &str) {
+    step_down(state, &[at]);
     state.change(label, None, |design| {
         design.shape.steps.remove(at);
     });
-    let climbed = &mut state.view.ladder.climbed;
-    if climbed.is_some_and(|place| place.step() == Some(id)) {
-        *climbed = Some(below);
+}
+
+/// Before steps go: who had climbed to one of them stands before it then.
+pub(super) fn step_down(state: &mut State, gone: &[usize]) {
+    let shape = state.shape();
+    let id = state.view.ladder.climbed.and_then(Climbed::step);
+    let Some(mut at) = shape.steps.iter().position(|s| Some(s.id) == id) else {
+        return;
+    };
+    if !gone.contains(&at) {
+        return;
     }
+    while 0 < at && gone.contains(&(at - 1)) {
+        at -= 1;
+    }
+    state.view.ladder.climbed = Some(before(shape, at));
 }

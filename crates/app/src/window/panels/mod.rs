@@ -15,6 +15,7 @@ mod start_panel;
 mod step_fields;
 mod steps_panel;
 
+pub(super) use directions::zone_name;
 use egui::{Align, Frame, Layout, Margin, Panel, RichText, ScrollArea, Ui};
 
 pub(super) use spread_panel::SpreadCache;
