@@ -89,6 +89,11 @@ fn a_clicked_rung_shows_the_shell_up_to_there_and_leaves_the_design_alone() {
     click(&mut harness, "Course 2: 8 panels");
     assert_eq!(panels(&harness), 16);
     harness.get_by_label("Panels: 16");
+    assert_eq!(
+        harness.state().state().derived.ladder.courses,
+        [4, 0],
+        "the ladder is that of the whole"
+    );
     harness.get_by_label("8 open Vs");
     harness.get_by_label("Showing course 2 of 4");
     let all = &harness.state().state().derived.shell.courses;

@@ -146,13 +146,16 @@ fn remember(state: &mut State) {
 }
 
 fn export(state: &mut State, folder: &Path) {
+    let design = std::sync::Arc::clone(state.design());
     // Lists are always those of the whole shell, however far one has climbed on the ladder.
     let grown;
-    let (shell, parts) = if state.derived.climbed.is_some() {
-        let (whole, _) = zonewright_geometry::grow(state.shape());
+    let (shell, parts) = if state.view.ladder.climbed.is_some() {
+        let (whole, _) = zonewright_geometry::grow(&design.shape);
         grown = (Parts::new(&whole, &FamilyTolerance::default()), whole);
         (&grown.1, &grown.0)
     } else {
+        state.derived.climb(None);
+        state.derived.catch_up(&design, state.history.revision());
         (&*state.derived.shell, &state.derived.parts)
     };
     if shell.panels.is_empty() {

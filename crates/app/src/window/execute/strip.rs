@@ -33,7 +33,8 @@ pub(super) fn run(state: &mut State, act: StripAct) {
 /// Whether the places are those of the front as it is: nothing sent before has changed it.
 fn stands(state: &State, picks: &Picks) -> bool {
     let open = state.derived.open_on(picks.side).len();
-    let now = state.derived.revision == state.history.revision();
+    let derived = &state.derived;
+    let now = derived.revision == state.history.revision() && derived.climbed == state.view.ladder.climbed;
     now && picks.revision == state.derived.revision && picks.at.iter().all(|at| *at < open)
 }
 

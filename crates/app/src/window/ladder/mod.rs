@@ -15,7 +15,7 @@ mod rung;
 pub use act::LadderAct;
 pub(super) use head::banner_ui;
 pub(super) use model::title;
-pub use model::{Ladder, Row, RowKind, Said};
+pub use model::{Ladder, Laid, Row, RowKind, Said};
 pub use place::{Climbed, LadderView};
 pub(super) use rows::LadderWidgets;
 

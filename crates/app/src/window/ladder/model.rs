@@ -3,7 +3,7 @@
 use std::collections::BTreeMap;
 
 use zonewright_geometry::{
-    Act, Code, Courses, Finding, FinishAct, Level, Place, Shape, Shell, Side, Spurs, Step, StepId, Vs,
+    Act, Code, Course, Courses, Finding, FinishAct, Level, Place, Shape, Shell, Side, Spurs, Step, StepId, Vs,
 };
 use zonewright_shop::{FamilyTolerance, FindingWriter, Parts, text};
 
@@ -49,7 +49,34 @@ pub struct Said {
     pub names: bool,
 }
 
-/// The ladder of a whole shell.
+/// What the ladder shows of a whole shell.
+#[derive(Clone, PartialEq, Debug, Default)]
+pub struct Laid {
+    /// The courses of each step, in the order they were laid.
+    pub courses: BTreeMap<StepId, Vec<Course>>,
+    /// By how much a grounded start is lifted; none when nothing has grown.
+    pub lift_mm: Option<f64>,
+    /// What was found at each step, the gravest first.
+    pub said: BTreeMap<StepId, Vec<Said>>,
+}
+
+impl Laid {
+    /// What a whole shell laid, and what growing it found.
+    #[must_use]
+    pub fn of(shell: &Shell, findings: &[Finding]) -> Self {
+        let mut courses: BTreeMap<StepId, Vec<Course>> = BTreeMap::new();
+        for course in &shell.courses {
+            courses.entry(course.step).or_default().push(*course);
+        }
+        Self {
+            courses,
+            lift_mm: (!shell.panels.is_empty()).then_some(shell.lift_mm),
+            said: said(findings),
+        }
+    }
+}
+
+/// The ladder of a design.
 #[derive(Clone, PartialEq, Debug, Default)]
 pub struct Ladder {
     /// The rows, from the start upwards.
@@ -58,28 +85,23 @@ pub struct Ladder {
     pub longest: [u32; 2],
     /// How many courses lie on the fore and on the aft side.
     pub courses: [u32; 2],
-    /// By how much a grounded start is lifted; none when nothing has grown.
-    pub lift_mm: Option<f64>,
     /// What was found at each step, the gravest first.
     pub said: BTreeMap<StepId, Vec<Said>>,
 }
 
 impl Ladder {
-    /// The ladder of a shape that has grown into a shell.
+    /// The ladder of a shape: its steps, and the courses that were laid when it was last grown whole.
     #[must_use]
-    pub fn of(shape: &Shape, shell: &Shell, findings: &[Finding]) -> Self {
+    pub fn of(shape: &Shape, laid: &Laid) -> Self {
         let mut ladder = Self {
-            lift_mm: (!shell.panels.is_empty()).then_some(shell.lift_mm),
-            said: said(findings),
+            said: laid.said.clone(),
             ..Self::default()
         };
         let start = Climbed::Start;
         ladder.push(RowKind::Start, Some(start), true);
-        // The courses stand in the order they were laid, and so do the steps that laid them.
-        let mut courses = shell.courses.iter().peekable();
         for (at, step) in shape.steps.iter().enumerate() {
-            let mut laid = false;
-            while let Some(course) = courses.next_if(|c| c.step == step.id) {
+            let courses = laid.courses.get(&step.id).map_or(&[][..], Vec::as_slice);
+            for (k, course) in courses.iter().enumerate() {
                 let side = usize::from(course.number < 0);
                 ladder.courses[side] += 1;
                 ladder.longest[side] = ladder.longest[side].max(course.panels);
@@ -88,15 +110,14 @@ impl Ladder {
                     panels: course.panels,
                 };
                 // The last course of a step is where the step ends.
-                let place = if courses.peek().is_some_and(|next| next.step == step.id) {
+                let place = if k + 1 < courses.len() {
                     Climbed::Course(step.id, course.pass)
                 } else {
                     Climbed::Step(step.id)
                 };
                 ladder.push(kind, Some(place), true);
-                laid = true;
             }
-            ladder.push(RowKind::Step(at), Some(Climbed::Step(step.id)), !laid);
+            ladder.push(RowKind::Step(at), Some(Climbed::Step(step.id)), courses.is_empty());
         }
         for at in 0..shape.finish.len() {
             ladder.push(RowKind::Finish(at), None, false);
