@@ -145,6 +145,7 @@ fn every_code_is_documented_with_its_level() {
         Code::InsideOut,
         Code::SidesDisagree,
         Code::NoPanels,
+        Code::NoSuchParameter,
     ];
     for code in codes {
         let row = format!(

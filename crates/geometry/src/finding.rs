@@ -91,6 +91,8 @@ pub enum Code {
     SidesDisagree,
     /// No panel grew.
     NoPanels,
+    /// No parameter has the key that was asked for.
+    NoSuchParameter,
 }
 
 /// Something to be said about a shape.
@@ -157,7 +159,8 @@ impl Code {
             | Self::DoubledPanel
             | Self::CrowdedEdge
             | Self::Crossing
-            | Self::NoPanels => Level::Stop,
+            | Self::NoPanels
+            | Self::NoSuchParameter => Level::Stop,
             Self::ClosingGap
             | Self::NameLost
             | Self::RimNotBalanced
@@ -263,6 +266,11 @@ impl Code {
                 "Look at the joined rims; one may be twisted.",
             ),
             Self::NoPanels => ("no-panels", "The shape has no panels", "Lay a course."),
+            Self::NoSuchParameter => (
+                "no-such-parameter",
+                "The shape has no parameter of this key",
+                "Choose one of the keys that are listed for it.",
+            ),
         };
         CodeText { key, what, remedy }
     }

@@ -7,6 +7,7 @@ pub mod finding;
 pub mod grow;
 pub mod inspect;
 pub mod measure;
+pub mod parameter;
 mod record;
 mod shell;
 mod shell_check;
@@ -15,6 +16,7 @@ pub mod start;
 
 pub use finding::{Code, Finding, Level, Place, Unit};
 pub use grow::{grow, grow_until};
+pub use parameter::{Parameter, ParameterKind, parameters, set_parameter};
 pub use record::{
     Act, Courses, Direction, Finish, FinishAct, LetterName, Maker, Outside, PanelName, Placement, RoleRule, Shape,
     Side, Sign, Spurs, Step, StepId, Tolerances, VName, Vs, ZoneRef, ZoneRule, ZoneVector,

@@ -6,4 +6,6 @@ mod common;
 mod editing;
 mod import;
 mod panels;
+mod panes;
+mod readings;
 mod view;

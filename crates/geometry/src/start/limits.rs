@@ -39,7 +39,7 @@ pub(super) fn finite(name: &'static str, value: f64) -> Result<f64, Finding> {
 }
 
 /// Refuses a number outside `min..=max`, both allowed.
-pub(super) fn within(name: &'static str, value: f64, min: f64, max: f64, unit: Unit) -> Result<f64, Finding> {
+pub(crate) fn within(name: &'static str, value: f64, min: f64, max: f64, unit: Unit) -> Result<f64, Finding> {
     finite(name, value)?;
     if value < min {
         Err(Finding::parameter(name, value, min, unit))

@@ -2,7 +2,9 @@
 
 mod file;
 mod finish;
+mod panes;
 mod path;
+mod readings;
 mod shape;
 mod splice;
 mod steps;
@@ -10,8 +12,8 @@ mod view;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
+pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use splice::fresh_splice;
-pub(crate) use view::{fit_when_pending, refit};
 
 use super::{command::Command, state::State};
 
@@ -63,6 +65,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FlipOutside => shape::flip_outside(state),
         Command::SetUnits(units) => shape::set_units(state, units),
         Command::SwapUnits => shape::swap_units(state),
+        Command::Readings(act) => readings::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {
                 state.dialogs.open_own(asked);
