@@ -9,7 +9,7 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, view::Hand};
+use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct, view::Hand};
 use crate::document::Design;
 
 /// A command.
@@ -121,6 +121,8 @@ pub enum Command {
     SelectPanel(Option<u32>),
     /// What the readouts are told.
     Readings(ReadingAct),
+    /// Recovers, reloads, overwrites, goes several steps back.
+    Safe(SafeAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -196,6 +198,7 @@ impl Command {
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
+        all.extend(super::safe::listed());
         all
     }
 
@@ -267,6 +270,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
+            Self::Safe(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

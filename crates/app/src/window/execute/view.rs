@@ -41,7 +41,13 @@ pub(super) fn run(state: &mut State, command: Command) {
                 .filter(|p| (*p as usize) < shell.panels.len())
                 .map(|p| (p, shell.panel_name(p)));
         }
-        Command::SwapTheme => view.dark = !view.dark,
+        Command::SwapTheme => {
+            view.dark = !view.dark;
+            let dark = view.dark;
+            if let Err(error) = state.safe.remember(|session| session.dark = dark) {
+                state.say(format!("{error}; the look will not be remembered"));
+            }
+        }
         Command::Find => state.search = Some(String::new()),
         Command::Dismiss => dismiss(state),
         _ => {}
@@ -50,7 +56,11 @@ pub(super) fn run(state: &mut State, command: Command) {
 
 /// Closes what is open: the search first, then a question, then a message, then what is picked.
 fn dismiss(state: &mut State) {
-    if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
+    if state.search.take().is_some()
+        || state.safe.overwrite.take().is_some()
+        || state.waiting.take().is_some()
+        || state.dialogs.close()
+    {
         return;
     }
     if state.message.take().is_none() {

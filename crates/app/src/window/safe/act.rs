@@ -41,6 +41,12 @@ pub enum SafeAct {
 }
 
 impl SafeAct {
+    /// Whether it shows another design in place of the one in the window: unsaved changes are asked about first.
+    #[must_use]
+    pub const fn replaces_design(&self) -> bool {
+        matches!(self, Self::Recover(_) | Self::RecoverNewest)
+    }
+
     /// Its name and hint.
     #[must_use]
     pub const fn words(&self) -> Words {

@@ -24,7 +24,9 @@ pub(in super::super) fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
     match safe.disk() {
         Disk::Same => {}
         Disk::Changed => banner(ui, cx, cx.state.colours().look(), |ui| {
-            ui.label(format!("{file} was changed by something else since it was read or saved here."));
+            ui.label(format!(
+                "{file} was changed by something else since it was read or saved here."
+            ));
             act(cx, ui, "Reload", SafeAct::Reload);
             send(cx, ui, "Save as…", Command::SaveAs);
             act(cx, ui, "Overwrite", SafeAct::Overwrite);
@@ -91,11 +93,14 @@ fn orphans_ui(cx: Cx<'_>, ui: &mut Ui) {
                 });
                 act(cx, ui, "Decide later", SafeAct::Later);
             });
-            ScrollArea::vertical().max_height(150.0).id_salt("unsaved designs").show(ui, |ui| {
-                for (at, orphan) in orphans.iter().enumerate() {
-                    ui.horizontal_wrapped(|ui| orphan_ui(cx, ui, at, orphan));
-                }
-            });
+            ScrollArea::vertical()
+                .max_height(150.0)
+                .id_salt("unsaved designs")
+                .show(ui, |ui| {
+                    for (at, orphan) in orphans.iter().enumerate() {
+                        ui.horizontal_wrapped(|ui| orphan_ui(cx, ui, at, orphan));
+                    }
+                });
         });
     });
 }
@@ -112,7 +117,10 @@ fn orphan_ui(cx: Cx<'_>, ui: &mut Ui, at: usize, orphan: &Orphan) {
             ui.label(format!("{name}, changed {time}"));
             ui.weak(place);
             let recover = ui.button("Recover").accessible_name(format!("Recover {name}"));
-            if recover.on_hover_text("Opens it as it was last; its file stays as it is until you save.").clicked() {
+            if recover
+                .on_hover_text("Opens it as it was last; its file stays as it is until you save.")
+                .clicked()
+            {
                 cx.tx.send(Command::Safe(SafeAct::Recover(at)));
             }
         }
@@ -123,14 +131,19 @@ fn orphan_ui(cx: Cx<'_>, ui: &mut Ui, at: usize, orphan: &Orphan) {
     }
     let text = if orphan.sure { "Discard for good" } else { "Discard" };
     let button = ui.button(text).accessible_name(format!("{text}: {name}"));
-    if button.on_hover_text("Removes what was kept of it. Asks once more.").clicked() {
+    if button
+        .on_hover_text("Removes what was kept of it. Asks once more.")
+        .clicked()
+    {
         cx.tx.send(Command::Safe(SafeAct::DiscardOrphan(at)));
     }
 }
 
 /// Asks before a file is overwritten that another window works on, or that something else has changed.
 pub(in super::super) fn overwrite_ui(cx: Cx<'_>, ui: &Ui) {
-    let Some(question) = &cx.state.safe.overwrite else { return };
+    let Some(question) = &cx.state.safe.overwrite else {
+        return;
+    };
     let file = question.path.file_name().unwrap_or_default().to_string_lossy();
     let (heading, text) = match question.why {
         InTheWay::OtherWindow => (
@@ -153,9 +166,7 @@ pub(in super::super) fn overwrite_ui(cx: Cx<'_>, ui: &Ui) {
                 choice(cx, ui, "Reload", Key::R, SafeAct::Reload, false);
             }
             choice(cx, ui, "Overwrite", Key::O, SafeAct::Overwrite, false);
-            if ui.button("Stay").clicked() {
-                cx.tx.send(Command::Safe(SafeAct::Stay));
-            }
+            choice(cx, ui, "Stay", Key::Escape, SafeAct::Stay, false);
         });
     });
     if modal.should_close() {

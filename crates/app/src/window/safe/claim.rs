@@ -13,7 +13,7 @@ use super::stamp::hash;
 
 /// A file that this window works on.
 #[derive(Debug)]
-pub struct Claim {
+pub(super) struct Claim {
     lock: PathBuf,
     file: File,
 }

@@ -4,11 +4,7 @@ use std::path::{Path, PathBuf};
 
 use egui::{Align2, FontId, LayerId, Order, Ui};
 
-use crate::window::{
-    dialogs::Asked,
-    panels::Cx,
-    path_box::fits_ending,
-};
+use crate::window::{dialogs::Asked, panels::Cx, path_box::fits_ending};
 
 /// What dropped files are taken for.
 #[derive(Clone, PartialEq, Eq, Debug)]
@@ -43,7 +39,10 @@ pub(in super::super) fn what(files: &[PathBuf]) -> Dropped {
     } else if fits_ending(file, Asked::Import.endings()) {
         Dropped::Path(file.clone())
     } else {
-        refused(format!("{} is neither a design nor a path that can be imported.", name(file)))
+        refused(format!(
+            "{} is neither a design nor a path that can be imported.",
+            name(file)
+        ))
     }
 }
 
@@ -67,7 +66,9 @@ pub(in super::super) fn hover_ui(cx: Cx<'_>, ui: &Ui) {
         ),
         Dropped::Refused(why) => (why, colours.stop()),
     };
-    let painter = ui.ctx().layer_painter(LayerId::new(Order::Foreground, egui::Id::unique("drop")));
+    let painter = ui
+        .ctx()
+        .layer_painter(LayerId::new(Order::Foreground, egui::Id::unique("drop")));
     let window = ui.ctx().content_rect();
     let text = painter.layout(text, FontId::proportional(18.0), colours.text(), window.width() * 0.7);
     let place = Align2::CENTER_CENTER.anchor_size(window.center(), text.size() + egui::vec2(48.0, 32.0));
@@ -95,7 +96,9 @@ mod tests {
             (paths(&["a.ron", "b.csv"]), "2 files were dropped"),
             (vec![folder.path().to_path_buf()], "is a folder"),
         ] {
-            let Dropped::Refused(text) = what(&files) else { panic!("{files:?}") };
+            let Dropped::Refused(text) = what(&files) else {
+                panic!("{files:?}")
+            };
             assert!(text.contains(part) && text.contains("Nothing was changed"), "{text}");
         }
     }

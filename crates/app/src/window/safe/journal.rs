@@ -147,7 +147,7 @@ fn locked(both: &Both) -> std::sync::MutexGuard<'_, Shared> {
 
 /// Keeps the unsaved design on the disk.
 #[derive(Debug)]
-pub struct Journal {
+pub(super) struct Journal {
     way: Way,
 }
 

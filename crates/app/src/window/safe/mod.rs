@@ -14,6 +14,7 @@ mod recent;
 mod slots;
 mod snapshot;
 mod stamp;
+mod steps;
 
 use std::{
     path::{Path, PathBuf},
@@ -27,6 +28,7 @@ pub(super) use drops::{Dropped, hover_ui, what};
 pub(super) use recent::{openings, recent_ui};
 pub use slots::Orphan;
 pub use stamp::{Disk, Stamp};
+pub(super) use steps::steps_ui;
 
 use self::{
     claim::Claim,
@@ -201,7 +203,10 @@ impl Safe {
 
     /// What speaks against overwriting this file with the design.
     pub(super) fn in_the_way(&self, path: &Path) -> Option<InTheWay> {
-        if self.held_path.as_deref() == Some(path) {
+        // The same file may be called by another name.
+        let own = self.held_path.as_deref().and_then(|p| p.canonicalize().ok());
+        let same = own.is_some() && own == path.canonicalize().ok();
+        if same || self.held_path.as_deref() == Some(path) {
             if matches!(self.held, Held::Elsewhere) {
                 return Some(InTheWay::OtherWindow);
             }
@@ -209,11 +214,6 @@ impl Safe {
             return changed.then_some(InTheWay::Changed);
         }
         let locks = self.folder.as_ref()?.join("open");
-        // The lock of the design's own file, under another name, is held by this very window.
-        let own = self.held_path.as_deref().and_then(|p| p.canonicalize().ok());
-        if own.is_some() && own == path.canonicalize().ok() {
-            return None;
-        }
         matches!(Claim::take(&locks, path), Ok(None)).then_some(InTheWay::OtherWindow)
     }
 
@@ -234,6 +234,17 @@ impl Safe {
         trouble.filter(|_| !self.trouble_closed)
     }
 
+    /// The window is about to close with nothing unsaved that is wanted: nothing is left behind.
+    pub(super) fn leave(&mut self) {
+        if self.noted.unsaved
+            && let Some(journal) = &mut self.journal
+        {
+            journal.put(Job::Clear);
+            self.noted.unsaved = false;
+        }
+        self.settled();
+    }
+
     /// The design in the window was saved or given up: what it was recovered from is not needed any more.
     pub(super) fn settled(&mut self) {
         for slot in self.adopted.drain(..) {
@@ -249,7 +260,10 @@ impl Safe {
         let orphan = self.orphans.remove(at);
         let snapshot = *orphan.found.ok()?;
         let mut slots = vec![orphan.slot];
-        for before in self.orphans.extract_if(.., |o| follows.iter().any(|f| f == o.slot.name())) {
+        for before in self
+            .orphans
+            .extract_if(.., |o| follows.iter().any(|f| f == o.slot.name()))
+        {
             slots.push(before.slot);
         }
         Some((snapshot, slots))
@@ -278,7 +292,11 @@ impl Safe {
     /// Looks again for what crashes left.
     pub(super) fn look_for_orphans(&mut self) {
         self.orphans.clear();
-        self.orphans = self.folder.as_deref().map(|f| orphans(&recovery(f))).unwrap_or_default();
+        self.orphans = self
+            .folder
+            .as_deref()
+            .map(|f| orphans(&recovery(f)))
+            .unwrap_or_default();
     }
 
     /// Closes a banner.

@@ -23,7 +23,10 @@ pub(super) fn missing(recent: &[PathBuf]) -> Vec<(PathBuf, String)> {
 }
 
 fn name(path: &Path) -> String {
-    path.file_name().unwrap_or(path.as_os_str()).to_string_lossy().into_owned()
+    path.file_name()
+        .unwrap_or(path.as_os_str())
+        .to_string_lossy()
+        .into_owned()
 }
 
 /// The commands that open the recent files, with what the search calls them.

@@ -27,7 +27,7 @@ const LEFT_OVER: Duration = Duration::from_secs(3600);
 
 /// A place for a snapshot that no other window touches.
 #[derive(Debug)]
-pub struct Slot {
+pub(crate) struct Slot {
     folder: PathBuf,
     name: String,
     // Held for its lock.
@@ -47,7 +47,12 @@ impl Slot {
         let new = builder.tempfile_in(folder)?;
         // Locked before it has its name, so that no other window ever sees it without its lock.
         new.as_file().lock()?;
-        let name = new.path().file_stem().unwrap_or_default().to_string_lossy().into_owned();
+        let name = new
+            .path()
+            .file_stem()
+            .unwrap_or_default()
+            .to_string_lossy()
+            .into_owned();
         let lock = new.persist(folder.join(&name).with_extension(LOCK))?;
         Ok(Self {
             folder: folder.to_path_buf(),
@@ -122,6 +127,12 @@ pub struct Orphan {
 }
 
 impl Orphan {
+    /// Whether it can be recovered.
+    #[must_use]
+    pub const fn is_readable(&self) -> bool {
+        self.found.is_ok()
+    }
+
     /// What it is called.
     #[must_use]
     pub fn name(&self) -> String {
@@ -232,7 +243,11 @@ mod tests {
         let folder = tempfile::tempdir().unwrap();
         let whole = text("a");
         fs::write(folder.path().join("1-cut.ron"), &whole[..whole.len() / 2]).unwrap();
-        fs::write(folder.path().join("2-newer.ron"), whole.replacen("format:1", "format:9", 1)).unwrap();
+        fs::write(
+            folder.path().join("2-newer.ron"),
+            whole.replacen("format:1", "format:9", 1),
+        )
+        .unwrap();
         fs::write(folder.path().join("3-noise.ron"), [0xff, 0xfe, 0]).unwrap();
         let mut names: Vec<String> = orphans(folder.path()).iter().map(Orphan::name).collect();
         names.sort();
@@ -260,7 +275,11 @@ mod tests {
         let file = folder.path().join("design.file");
         document::write_design(&file, &kept.design).unwrap();
         kept.path = Some(file);
-        fs::write(folder.path().join("1-x.ron"), to_text(&kept, &mut Texts::default()).unwrap()).unwrap();
+        fs::write(
+            folder.path().join("1-x.ron"),
+            to_text(&kept, &mut Texts::default()).unwrap(),
+        )
+        .unwrap();
         assert!(orphans(folder.path()).is_empty());
     }
 }

@@ -31,7 +31,7 @@ const MOST_EARLIER_BYTES: usize = 256 << 10;
 
 /// An unsaved design, and what belongs to it.
 #[derive(Clone, PartialEq, Debug)]
-pub struct Snapshot {
+pub(crate) struct Snapshot {
     /// The file that the design has.
     pub path: Option<PathBuf>,
     /// When it was changed last.
@@ -49,7 +49,7 @@ pub struct Snapshot {
 impl Snapshot {
     /// What the design is called.
     #[must_use]
-    pub fn name(&self) -> String {
+    pub(crate) fn name(&self) -> String {
         let file = self.path.as_ref().and_then(|p| p.file_name());
         match file {
             Some(file) => file.to_string_lossy().into_owned(),
@@ -206,7 +206,9 @@ pub(super) mod tests {
     #[test]
     fn earlier_states_are_bounded_the_newest_stay() {
         let mut many = snapshot("a");
-        many.earlier = (0..100).map(|k| (format!("Step {k}"), design(&format!("{k}")))).collect();
+        many.earlier = (0..100)
+            .map(|k| (format!("Step {k}"), design(&format!("{k}"))))
+            .collect();
         let back = parse(&to_text(&many, &mut Texts::default()).unwrap()).unwrap();
         assert_eq!(back.earlier, many.earlier[100 - MOST_EARLIER..]);
     }

@@ -58,6 +58,16 @@ impl Stamp {
         })
     }
 
+    /// The stamp of a file that was just written with these contents: what something else writes from now on is noticed.
+    #[must_use]
+    pub fn written(path: &Path, bytes: &[u8]) -> Self {
+        let modified_ns = fs::metadata(path).ok().and_then(|data| modified(&data));
+        Self {
+            modified_ns,
+            ..Self::of_bytes(bytes)
+        }
+    }
+
     /// Looks at the file again. `thorough` reads it whatever its time says.
     #[must_use]
     pub fn compare(&self, path: &Path, thorough: bool) -> Disk {
