@@ -28,7 +28,6 @@ mod session;
 mod splice_marks;
 mod state;
 mod strip;
-mod strip_layout;
 mod theme;
 mod view;
 mod widgets;
@@ -47,6 +46,7 @@ pub use readings::{End, ReadingAct, Remembered, Shown};
 pub use safe::{Banner, Disk, InTheWay, Orphan, Overwrite, Safe, SafeAct, Stamp};
 pub use session::STATE_DIR;
 pub use state::State;
+pub use strip::{NAME as STRIP, Picks, Span, StripAct, StripFront, StripView};
 pub use view::{Hand, ViewState};
 
 use crate::document::{self, Design};

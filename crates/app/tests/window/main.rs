@@ -9,4 +9,5 @@ mod panels;
 mod panes;
 mod readings;
 mod safe;
+mod strip;
 mod view;

@@ -403,7 +403,7 @@ fn undo_and_redo_of_every_kind_of_change_are_exact_to_the_byte() {
     };
     let placement = Placement {
         scale: 1.0 / 3.0,
-        shift: Vector::new(0.1, -1e-300, 12345.678_9),
+        shift: Vector::new(0.1, -1e-300, 12_345.678_9),
         ..Placement::default()
     };
     let moved = PathEdit::Move {
