@@ -11,3 +11,4 @@ mod readings;
 mod safe;
 mod strip;
 mod view;
+mod zones;
