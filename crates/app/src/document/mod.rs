@@ -17,7 +17,7 @@ pub use bounds::{MAX_FILE_BYTES, MAX_LETTERS, MAX_NAME_BYTES, MAX_NAMES, MAX_STE
 pub use bundled::bundled;
 pub use new::new_design;
 pub use read::{parse_design, read_design};
-pub use write::{to_text, write_design, write_whole};
+pub use write::{to_line, to_text, write_design, write_whole};
 
 /// The number of the file format that this program writes, and the newest that it reads.
 pub const FORMAT: u32 = 1;

@@ -45,6 +45,39 @@ impl History {
         }
     }
 
+    /// Begins with a design that no file holds, and with states before it, the newest last.
+    #[must_use]
+    pub fn recovered(design: Arc<Design>, earlier: Vec<(String, Arc<Design>)>) -> Self {
+        let past = earlier.into_iter().map(|(label, design)| Entry { design, label });
+        Self {
+            now: design,
+            past: past.collect(),
+            future: Vec::new(),
+            open: None,
+            saved: None,
+            revision: 1,
+            unsaved: true,
+        }
+    }
+
+    /// The newest states before the one shown, at most so many, the newest last, each with the change that leads away.
+    #[must_use]
+    pub fn newest(&self, most: usize) -> Vec<(String, Arc<Design>)> {
+        let first = self.past.len().saturating_sub(most);
+        let past = self.past[first..].iter();
+        past.map(|e| (e.label.clone(), Arc::clone(&e.design))).collect()
+    }
+
+    /// Labels of the changes that can be taken back, the newest first.
+    pub fn undo_labels(&self) -> impl Iterator<Item = &str> {
+        self.past.iter().rev().map(|e| e.label.as_str())
+    }
+
+    /// Labels of the changes that can be made again, the next first.
+    pub fn redo_labels(&self) -> impl Iterator<Item = &str> {
+        self.future.iter().rev().map(|e| e.label.as_str())
+    }
+
     /// The same history, with a revision later than this one: what was kept by revision is worked out again.
     #[must_use]
     pub const fn after(mut self, revision: u64) -> Self {
@@ -71,8 +104,9 @@ impl History {
     }
 
     /// Changes the design. Nothing happens when it stays the same. With the key of the change before, it joins that undo step.
-    pub fn change(&mut self, design: Design, label: impl Into<String>, key: Option<MergeKey>) {
-        if design == *self.now {
+    pub fn change(&mut self, design: impl Into<Arc<Design>>, label: impl Into<String>, key: Option<MergeKey>) {
+        let design = design.into();
+        if *design == *self.now {
             return;
         }
         let joins = key.is_some() && key == self.open && !self.past.is_empty();
@@ -84,7 +118,7 @@ impl History {
         }
         self.future.clear();
         self.open = key;
-        self.show(Arc::new(design));
+        self.show(design);
     }
 
     /// Ends the undo step that further changes would join.
