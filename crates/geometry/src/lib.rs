@@ -11,6 +11,7 @@ pub mod parameter;
 mod record;
 mod shell;
 mod shell_check;
+pub mod solve;
 mod space;
 pub mod start;
 
