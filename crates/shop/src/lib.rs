@@ -11,6 +11,7 @@ pub mod marks;
 pub mod models;
 pub mod parts;
 mod solve_text;
+pub mod spread;
 #[cfg(test)]
 mod test_shells;
 pub mod text;

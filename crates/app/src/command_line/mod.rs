@@ -4,9 +4,11 @@ mod curve_words;
 mod jobs;
 mod picture;
 mod refusal;
+mod solve;
 mod star_words;
 mod start;
 mod values;
+mod wants;
 
 use std::{ffi::OsString, io::Write, path::PathBuf, process::ExitCode};
 
@@ -73,6 +75,16 @@ enum Command {
         #[arg(long, value_delimiter = ',', value_name = "WORDS")]
         only: Vec<String>,
     },
+    /// Change parameters until figures of the shell are as wanted; exit 2 with the reason when they cannot be.
+    Solve(solve::Solve),
+    /// List the parameters of a design: keys, values, names.
+    Parameters {
+        /// The design.
+        file: PathBuf,
+        /// Print a JSON list, numbers at full precision.
+        #[arg(long)]
+        json: bool,
+    },
     /// Draw a picture, without a display.
     Picture {
         /// The design.
@@ -110,6 +122,8 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),
+        Some(Command::Solve(options)) => options.run().map(|()| DONE),
+        Some(Command::Parameters { file, json }) => solve::list(&file, json).map(|()| DONE),
         Some(Command::Picture {
             file,
             output,

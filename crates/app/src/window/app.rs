@@ -10,6 +10,7 @@ use super::{
     dialogs::Asked,
     execute, menu,
     panels::{self, Cx},
+    panes::PaneAct,
     path_box, picture, prompts, search,
     state::State,
     strip,
@@ -93,6 +94,23 @@ impl App {
         self.widgets.pictures
     }
 
+    /// How often an outline of the strip was drawn anew.
+    #[must_use]
+    pub const fn outlines(&self) -> u64 {
+        self.widgets.strip.outlines()
+    }
+
+    /// Draws the strip alone: one frame of it for its bench.
+    pub fn strip_frame(&mut self, ui: &mut Ui) {
+        let cx = Cx {
+            state: &self.state,
+            tx: &self.sender,
+        };
+        self.widgets.over_next = None;
+        strip::strip_ui(cx, ui, &mut self.widgets);
+        self.widgets.over = self.widgets.over_next;
+    }
+
     fn shortcuts(&self, ctx: &egui::Context) {
         let typing = ctx.text_edit_focused();
         let mut commands = Command::listed();
@@ -105,6 +123,7 @@ impl App {
                 Command::Undo | Command::Redo | Command::AddCourse | Command::RemoveCourse | Command::LayUntilStill
             );
             if !(typing && of_text) && ctx.input_mut(|i| i.consume_shortcut(&keys)) {
+                self.to_pane_under_pointer(&command);
                 self.sender.send(command);
             }
         }
@@ -114,6 +133,14 @@ impl App {
         let popup = egui::Popup::is_any_open(ctx);
         if !typing && !popup && ctx.input(|i| i.key_pressed(Key::Escape)) {
             self.sender.send(Command::Dismiss);
+        }
+    }
+
+    /// Keys that choose a view mean the view under the pointer; without one there, the active one.
+    fn to_pane_under_pointer(&self, command: &Command) {
+        let looks = matches!(command, Command::Look(_) | Command::Pane(PaneAct::Free));
+        if let Some(at) = self.widgets.over_pane.filter(|_| looks) {
+            self.sender.send(Command::Pane(PaneAct::Activate(at)));
         }
     }
 
@@ -214,7 +241,7 @@ impl eframe::App for App {
             .frame(side)
             .default_size(sizes.right)
             .size_range(220.0..=480.0)
-            .show(ui, |ui| panels::right_ui(cx, ui));
+            .show(ui, |ui| panels::right_ui(cx, ui, widgets));
         Panel::bottom("strip")
             .frame(side)
             .exact_size(sizes.strip)

@@ -9,7 +9,7 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{path_edit::PathEdit, view::Hand};
+use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand};
 use crate::document::Design;
 
 /// A command.
@@ -67,6 +67,8 @@ pub enum Command {
     DeleteFinish(usize),
     /// Splices the directions in hand at an open V, or takes that splice away again.
     ToggleSplice(Side, VName),
+    /// What the front strip sends.
+    Strip(StripAct),
     /// Takes other directions in hand.
     SetHand(Hand),
     /// Changes the kind of start, with that kind's usual parameters.
@@ -91,8 +93,8 @@ pub enum Command {
     Pan(egui::Vec2),
     /// Zooms by a factor, keeping the place under a point of the picture.
     Zoom(egui::Pos2, f32),
-    /// The picture has another size.
-    Resize(egui::Vec2),
+    /// Does something to the views.
+    Pane(PaneAct),
     /// Looks from this side.
     Look(View),
     /// Perspective or parallel.
@@ -119,6 +121,8 @@ pub enum Command {
     SelectPoint(Option<usize>),
     /// Picks a panel of the shell; none picks nothing.
     SelectPanel(Option<u32>),
+    /// What the readouts are told.
+    Readings(ReadingAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -187,9 +191,14 @@ impl Command {
             Self::HiddenEdges,
             Self::SwapUnits,
             Self::SwapSide,
+            Self::Readings(ReadingAct::Remember),
+            Self::Readings(ReadingAct::GoBack),
+            Self::Readings(ReadingAct::Forget),
             Self::SwapTheme,
             Self::Find,
         ]);
+        all.extend(PaneAct::listed().map(Self::Pane));
+        all.extend(StripAct::listed().map(Self::Strip));
         all
     }
 
@@ -225,6 +234,7 @@ impl Command {
                 "Splice here",
                 "Splices the directions in hand at an open V, or takes them out.",
             ),
+            Self::Strip(act) => return act.words(),
             Self::SetHand(_) => ("Directions in hand", "Chooses what the next splice inserts."),
             Self::SetKind(_) => ("Kind of start", "Changes where the first word comes from."),
             Self::SetStart(..) => ("Change the start", "Changes a parameter of the start."),
@@ -242,7 +252,7 @@ impl Command {
             Self::Orbit(_) => ("Turn the picture", "Turns the camera about the shell."),
             Self::Pan(_) => ("Move the picture", "Moves the camera along the screen."),
             Self::Zoom(..) => ("Zoom", "Brings the shell nearer or farther."),
-            Self::Resize(_) => ("Resize the picture", "Fits the picture to the window."),
+            Self::Pane(act) => return act.words(),
             Self::Look(view) => return super::view::look_words(*view),
             Self::SetProjection(Projection::Perspective) => ("Perspective", "Draws far things smaller."),
             Self::SetProjection(Projection::Parallel) => ("Parallel", "Draws equal lengths equal."),
@@ -260,6 +270,7 @@ impl Command {
             Self::ShowFinding(_) => ("Show a finding", "Marks where a finding is."),
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
+            Self::Readings(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),
@@ -295,8 +306,10 @@ impl Command {
             Self::HiddenEdges => (Modifiers::COMMAND, Key::H),
             Self::SwapUnits => (Modifiers::COMMAND, Key::U),
             Self::SwapSide => (Modifiers::COMMAND, Key::B),
+            Self::Strip(StripAct::SwapRepeat) => (Modifiers::COMMAND, Key::R),
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
+            Self::Pane(act) => act.shortcut()?,
             _ => return None,
         };
         Some(KeyboardShortcut::new(modifiers, key))

@@ -4,7 +4,12 @@ use egui::{Button, MenuBar, Ui};
 use zonewright_painter::{Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{command::Command, kinds, panels::Cx};
+use super::{
+    command::Command,
+    kinds,
+    panels::Cx,
+    panes::{Layout, PaneAct},
+};
 
 /// Draws the menu bar.
 pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
@@ -38,11 +43,15 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             items(cx, ui, [Command::SwapSide]);
         });
         ui.menu_button("View", |ui| {
+            items(cx, ui, Layout::ALL.map(|layout| Command::Pane(PaneAct::LayOut(layout))));
+            items(cx, ui, [Command::Pane(PaneAct::Next)]);
+            ui.separator();
             items(
                 cx,
                 ui,
-                [View::Plan, View::Front, View::Side, View::Iso, View::Fit].map(Command::Look),
+                [View::Plan, View::Front, View::Side, View::Iso].map(Command::Look),
             );
+            items(cx, ui, [Command::Pane(PaneAct::Free), Command::Look(View::Fit)]);
             ui.separator();
             items(
                 cx,

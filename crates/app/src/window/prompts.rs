@@ -88,7 +88,12 @@ pub(super) fn banners_ui(cx: Cx<'_>, ui: &mut Ui) {
 /// The bar at the bottom: what was done last, and how the pointer works.
 pub(super) fn status_ui(cx: Cx<'_>, ui: &mut Ui) {
     ui.horizontal(|ui| {
-        let hints = "Drag turns · shift-drag moves · wheel zooms · x, y, z lock an axis";
+        let panes = &cx.state.panes;
+        let hints = if panes.pane(panes.active()).is_measured() {
+            "Drag moves · shift-drag turns · wheel zooms · x, y, z lock an axis"
+        } else {
+            "Drag turns · shift-drag moves · wheel zooms · x, y, z lock an axis"
+        };
         ui.with_layout(egui::Layout::right_to_left(egui::Align::Center), |ui| {
             ui.weak(hints);
             ui.with_layout(egui::Layout::left_to_right(egui::Align::Center), |ui| {

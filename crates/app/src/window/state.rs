@@ -3,12 +3,12 @@
 use std::{path::PathBuf, sync::Arc};
 
 use zonewright_geometry::Shape;
-use zonewright_painter::{Bounds, Camera};
+use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    command::Command, derived::Derived, dialogs::Dialogs, history::History, theme::Theme, view::ViewState,
-    worker::Worker,
+    command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, readings::Remembered,
+    theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -28,14 +28,8 @@ pub struct State {
     pub path: Option<PathBuf>,
     /// What is not saved with the design.
     pub view: ViewState,
-    /// Where one looks from.
-    pub camera: Camera,
-    /// Whether the camera is to be fitted as soon as there is a shell and a size.
-    pub fit_pending: bool,
-    /// Whether the user has turned, moved or zoomed the camera since it was last fitted: it is then left where it is.
-    pub camera_moved: bool,
-    /// The box of the shell that the camera was last fitted to, or that was left as it came.
-    pub fitted: Option<Bounds>,
+    /// From where one looks, in each of the views.
+    pub panes: Panes,
     /// What follows from the design.
     pub derived: Derived,
     /// Slow stages.
@@ -56,6 +50,8 @@ pub struct State {
     pub closing: bool,
     /// Where the session is remembered; none in tests that do not ask for it.
     pub session: Option<PathBuf>,
+    /// The state that the readouts are compared with.
+    pub remembered: Option<Remembered>,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -64,15 +60,11 @@ impl State {
     /// A window on a design.
     #[must_use]
     pub fn new(design: Design, path: Option<PathBuf>, worker: Worker) -> Self {
-        let view = ViewState::default();
         Self {
             history: History::new(design, true),
             path,
-            camera: super::picture::first_camera(view.projection),
-            fit_pending: true,
-            camera_moved: false,
-            fitted: None,
-            view,
+            view: ViewState::default(),
+            panes: Panes::default(),
             derived: Derived::new(),
             worker,
             dialogs: Dialogs::default(),
@@ -83,6 +75,7 @@ impl State {
             search: None,
             closing: false,
             session: None,
+            remembered: None,
             theme: Theme::bundled(),
         }
     }
@@ -91,6 +84,12 @@ impl State {
     #[must_use]
     pub const fn design(&self) -> &Arc<Design> {
         self.history.now()
+    }
+
+    /// The camera of the view that keys act on.
+    #[must_use]
+    pub fn camera(&self) -> Camera {
+        self.panes.pane(self.panes.active()).camera
     }
 
     /// The shape of the design as it is.

@@ -1,9 +1,9 @@
 //! What is not part of the design: where one looks from, what is picked, what is in hand.
 
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
-use zonewright_painter::{ColourBy, Faces, Projection, View};
+use zonewright_painter::{ColourBy, Faces, View};
 
-use super::command::Words;
+use super::{command::Words, readings::Shown, strip::StripView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -24,8 +24,6 @@ impl Default for Hand {
 /// The state of the window that is not saved with the design.
 #[derive(Clone, PartialEq, Debug)]
 pub struct ViewState {
-    /// Perspective or parallel.
-    pub projection: Projection,
     /// How faces are drawn.
     pub faces: Faces,
     /// Whether edges behind faces are drawn.
@@ -36,6 +34,8 @@ pub struct ViewState {
     pub side: Side,
     /// The directions in hand.
     pub hand: Hand,
+    /// What of the front strip belongs to the view.
+    pub strip: StripView,
     /// The picked point of the path.
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
@@ -44,6 +44,8 @@ pub struct ViewState {
     pub rule: DragRule,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
+    /// What a readout shows in the picture.
+    pub shown: Option<Shown>,
     /// Whether the look is dark.
     pub dark: bool,
 }
@@ -51,16 +53,17 @@ pub struct ViewState {
 impl Default for ViewState {
     fn default() -> Self {
         Self {
-            projection: Projection::Perspective,
             faces: Faces::ShadedWithEdges,
             hidden_edges: false,
             colour: ColourBy::Zone,
             side: Side::Fore,
             hand: Hand::default(),
+            strip: StripView::default(),
             point: None,
             panel: None,
             rule: DragRule::Neighbours,
             finding: None,
+            shown: None,
             dark: false,
         }
     }

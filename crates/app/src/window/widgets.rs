@@ -5,6 +5,8 @@ use std::path::PathBuf;
 use zonewright_geometry::{Point, Side};
 use zonewright_painter::Picture;
 
+use super::panes::PANES;
+
 /// A drag in the picture.
 #[derive(Clone, Copy, PartialEq, Debug)]
 pub(super) enum Drag {
@@ -58,12 +60,22 @@ pub(super) struct Widgets {
     pub search: String,
     /// The drag that is going on.
     pub drag: Option<Drag>,
+    /// The pane that it goes on in.
+    pub drag_pane: usize,
+    /// The pane that the pointer is over.
+    pub over_pane: Option<usize>,
+    /// The last call for the keyboard that a pane has answered.
+    pub focus: u64,
     /// The open V that the pointer is over, in the strip or in the picture: its side, and its place among the open Vs.
     pub over: Option<(Side, usize)>,
     /// The same, as it is found while this frame is drawn.
     pub over_next: Option<(Side, usize)>,
-    /// The picture.
-    pub cache: PictureCache,
+    /// The front strip.
+    pub strip: super::strip::StripWidgets,
+    /// How sides, angles and folds are spread.
+    pub spreads: super::panels::SpreadCache,
+    /// The picture of each pane.
+    pub cache: [PictureCache; PANES],
     /// How often a picture was put together.
     pub pictures: u64,
 }

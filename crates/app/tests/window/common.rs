@@ -35,7 +35,7 @@ pub(crate) fn polar(courses: Option<u32>) -> Design {
 /// Where a point of the shell stands in the window.
 pub(crate) fn picture_place(harness: &Harness<'_, App>, point: Point) -> egui::Pos2 {
     let corner = harness.get_by_label(PICTURE).rect().min;
-    let seen = harness.state().state().camera.project(point).unwrap();
+    let seen = harness.state().state().camera().project(point).unwrap();
     corner + egui::Vec2::from(seen.pos)
 }
 

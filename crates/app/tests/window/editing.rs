@@ -27,7 +27,7 @@ fn a_dragged_vertex_changes_the_readouts_by_the_computed_amount_and_is_one_undo_
     // |(3,0,-4) x (3,0,4)| = 24, |(0,3,-4) x (0,3,4)| = 24, in units of 100 mm: 480000 mm2.
     assert!((before - 480_000.0).abs() < 1e-6, "{before}");
     let old = point(harness.state(), 2);
-    let camera = harness.state().state().camera;
+    let camera = harness.state().state().camera();
     let at = picture_place(&harness, old);
     drag(&mut harness, at, egui::vec2(40.0, -25.0));
     let moved = point(harness.state(), 2);

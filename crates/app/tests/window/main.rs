@@ -6,4 +6,7 @@ mod common;
 mod editing;
 mod import;
 mod panels;
+mod panes;
+mod readings;
+mod strip;
 mod view;

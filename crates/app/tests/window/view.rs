@@ -13,7 +13,7 @@ use crate::common::{open, polar};
 #[test]
 fn the_camera_follows_growth_until_the_user_moves_it() {
     let mut harness = open(polar(Some(1)));
-    let camera = |h: &Harness<'_, App>| h.state().state().camera;
+    let camera = |h: &Harness<'_, App>| h.state().state().camera();
     let first = camera(&harness);
     for _ in 0..2 {
         harness.state().send(Command::AddCourse);

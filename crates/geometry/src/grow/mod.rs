@@ -26,10 +26,11 @@ mod unite;
 use alphabet::Alphabet;
 pub use alphabet::PARALLEL_SINE;
 use front::Front;
-pub use front::open_vs;
+pub use front::{can_close, open_vs};
 use lay::Laid;
 pub use mesh::MAX_PANELS;
 use mesh::Mesh;
+pub use place::placed_vector;
 
 use crate::{Act, Code, Courses, Finding, FirstWord, Place, Shape, Side, Spurs, Step, Unit, shell::Grown};
 

@@ -2,7 +2,7 @@
 
 use glam::{DMat3, DVec3};
 
-use crate::{Code, Finding, Place, Placement, Point, Unit};
+use crate::{Code, Finding, Place, Placement, Point, Unit, Vector};
 
 /// Refuses a placement that would leave no shell.
 pub(super) fn usable(placement: &Placement) -> Result<(), Finding> {
@@ -55,4 +55,10 @@ impl Placed {
             Point(self.turned * lifted + self.shift)
         }
     }
+}
+
+/// A vector of the grown frame as a placement turns, mirrors and scales it; in millimetres.
+#[must_use]
+pub fn placed_vector(placement: &Placement, vector: Vector) -> Vector {
+    Placed::new(placement, 0.0).turned * vector
 }

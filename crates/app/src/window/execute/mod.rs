@@ -2,16 +2,18 @@
 
 mod file;
 mod finish;
+mod panes;
 mod path;
+mod readings;
 mod shape;
 mod splice;
 mod steps;
+mod strip;
 mod view;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
-pub(crate) use splice::fresh_splice;
-pub(crate) use view::{fit_when_pending, refit};
+pub(crate) use panes::{fit_when_pending, refit};
 
 use super::{command::Command, state::State};
 
@@ -50,7 +52,8 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetFinish(at, step) => finish::set(state, at, *step),
         Command::PutBack(at, panel) => finish::put_back(state, at, panel),
         Command::DeleteFinish(at) => finish::delete(state, at),
-        Command::ToggleSplice(side, v) => splice::toggle(state, side, v),
+        Command::ToggleSplice(side, v) => splice::toggle(state, side, &v),
+        Command::Strip(act) => strip::run(state, act),
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),
         Command::SetStart(start, field) => shape::set_start(state, *start, field),
@@ -63,6 +66,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FlipOutside => shape::flip_outside(state),
         Command::SetUnits(units) => shape::set_units(state, units),
         Command::SwapUnits => shape::swap_units(state),
+        Command::Readings(act) => readings::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {
                 state.dialogs.open_own(asked);

@@ -34,7 +34,7 @@ pub(super) fn set_kind(state: &mut State, word: &'static str) {
         design.shape.outside = Outside::by_rule(&design.shape);
     });
     state.view.point = None;
-    state.fit_pending = true;
+    state.panes.start_afresh();
     state.say(format!("The start is a {} now", kind.name.to_lowercase()));
 }
 
@@ -80,7 +80,7 @@ pub(super) fn import_path(state: &mut State, file: &Path) {
         design.shape.outside = Outside::by_rule(&design.shape);
     });
     state.view.point = None;
-    state.fit_pending = true;
+    state.panes.start_afresh();
     let way = if closed { "a closed" } else { "an open" };
     let within = text::millimetres(FLATTENING_MM, 1);
     state.say(format!(

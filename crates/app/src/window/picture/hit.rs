@@ -1,7 +1,7 @@
 //! What is under the pointer: a point of the path, or an open V.
 
 use zonewright_geometry::{NONE, OpenV, Point};
-use zonewright_painter::{Pick, pick};
+use zonewright_painter::{Camera, Pick, pick};
 
 use crate::window::state::State;
 
@@ -21,14 +21,14 @@ pub(super) enum Hit {
 }
 
 /// Finds what is at a place of the picture. A point of the path goes before a V; the nearest goes first.
-pub(super) fn at(state: &State, pos: egui::Vec2) -> Option<Hit> {
+pub(super) fn at(state: &State, camera: &Camera, pos: egui::Vec2) -> Option<Hit> {
     let path = state.derived.path.as_ref();
     let points = path.map_or(&[][..], |p| &p.placed);
-    let point = nearest(state, pos, points.iter().copied());
+    let point = nearest(camera, pos, points.iter().copied());
     let vs = state.derived.open_on(state.view.side);
     point
         .map(Hit::Point)
-        .or_else(|| nearest(state, pos, vs.iter().map(middle)).map(Hit::V))
+        .or_else(|| nearest(camera, pos, vs.iter().map(middle)).map(Hit::V))
 }
 
 /// The middle of the panel that an open V would make: where its dot is.
@@ -37,9 +37,9 @@ pub(super) fn middle(v: &OpenV) -> Point {
 }
 
 /// The panel at a place of the picture; exactly on an edge it is one of the edge's panels.
-pub(super) fn panel_at(state: &State, pos: egui::Vec2) -> Option<u32> {
+pub(super) fn panel_at(state: &State, camera: &Camera, pos: egui::Vec2) -> Option<u32> {
     let (scene, shell) = (&state.derived.scene, &state.derived.shell);
-    match pick(scene, shell, &state.camera, [pos.x, pos.y], EXACT)? {
+    match pick(scene, shell, camera, [pos.x, pos.y], EXACT)? {
         Pick::Panel(panel) => Some(panel),
         Pick::Edge(edge) => {
             let panels = shell.edges.get(edge as usize)?.panels;
@@ -52,8 +52,8 @@ pub(super) fn panel_at(state: &State, pos: egui::Vec2) -> Option<u32> {
     }
 }
 
-fn nearest(state: &State, pos: egui::Vec2, points: impl Iterator<Item = Point>) -> Option<usize> {
-    let lens = state.camera.lens();
+fn nearest(camera: &Camera, pos: egui::Vec2, points: impl Iterator<Item = Point>) -> Option<usize> {
+    let lens = camera.lens();
     let mut best: Option<(f32, usize)> = None;
     for (index, point) in points.enumerate() {
         let Some(seen) = lens.project(point) else { continue };

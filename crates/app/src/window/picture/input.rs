@@ -2,11 +2,13 @@
 
 use egui::{Key, PointerButton, Pos2, Rect, Response, Ui, Vec2};
 use zonewright_geometry::{Point, Vector};
+use zonewright_painter::Camera;
 
 use super::hit::{self, Hit};
 use crate::window::{
     command::Command,
     panels::Cx,
+    panes::PaneAct,
     path_edit::PathEdit,
     path_place::PlacedPath,
     splice_marks::v_name,
@@ -19,44 +21,82 @@ const WHEEL_DOUBLES: f32 = 250.0;
 /// Points that an arrow key turns or moves the camera by.
 const KEY_STEP: f32 = 24.0;
 
+/// A pane as it stands in the window.
+#[derive(Clone, Copy, Debug)]
+pub(super) struct Seen<'a> {
+    /// Which.
+    pub at: usize,
+    /// Where.
+    pub rect: Rect,
+    /// What happens on it.
+    pub response: &'a Response,
+}
+
 /// Turns what pointer and keys do on the picture into commands.
-pub(super) fn handle(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response, widgets: &mut Widgets) {
+pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets) {
+    let Seen { at, rect, response } = seen;
+    let camera = &cx.state.panes.pane(at).camera;
     let hovered = response.hover_pos().map(|pos| pos - rect.min);
     let hit = hovered
         .filter(|_| widgets.drag.is_none())
-        .and_then(|pos| hit::at(cx.state, pos));
+        .and_then(|pos| hit::at(cx.state, camera, pos));
     if let Some(Hit::V(index)) = hit {
         widgets.over_next = Some((cx.state.view.side, index));
     }
     if hit.is_some() {
         ui.ctx().set_cursor_icon(egui::CursorIcon::PointingHand);
     }
+    if response.contains_pointer() {
+        widgets.over_pane = Some(at);
+    }
+    if response.clicked() || response.drag_started() {
+        // Keys go where the pointer worked last.
+        response.request_focus();
+        activate(cx, at);
+    }
     if response.clicked() {
-        clicked(cx, response, rect);
+        clicked(cx, seen);
     }
     if response.drag_started() {
-        widgets.drag = begin(cx, ui, rect, response);
+        widgets.drag = begin(cx, ui, seen);
+        widgets.drag_pane = at;
     }
-    if let Some(drag) = widgets.drag {
+    if let Some(drag) = widgets.drag.filter(|_| widgets.drag_pane == at) {
         if response.dragged() {
-            drag_on(cx, ui, response, drag);
+            drag_on(cx, ui, seen, drag);
         } else {
             widgets.drag = None;
         }
     }
     if response.contains_pointer() {
-        wheel(cx, ui, rect, response);
+        wheel(cx, ui, seen);
+    }
+    if widgets.focus != cx.state.panes.focus && cx.state.panes.active() == at {
+        widgets.focus = cx.state.panes.focus;
+        response.request_focus();
+    }
+    if response.gained_focus() {
+        activate(cx, at);
     }
     if response.has_focus() {
-        keys(cx, ui, rect, response);
+        keys(cx, ui, seen);
     }
 }
 
-fn clicked(cx: Cx<'_>, response: &Response, rect: Rect) {
+/// Makes a pane the one that commands act on; what follows in the same frame acts on it already.
+fn activate(cx: Cx<'_>, at: usize) {
+    if cx.state.panes.active() != at {
+        cx.tx.send(Command::Pane(PaneAct::Activate(at)));
+    }
+}
+
+fn clicked(cx: Cx<'_>, seen: Seen<'_>) {
+    let Seen { at, rect, response } = seen;
+    let camera = &cx.state.panes.pane(at).camera;
     let Some(pos) = response.interact_pointer_pos() else {
         return;
     };
-    match hit::at(cx.state, pos - rect.min) {
+    match hit::at(cx.state, camera, pos - rect.min) {
         Some(Hit::Point(point)) => {
             let picked = cx.state.view.point == Some(point);
             cx.tx.send(Command::SelectPoint((!picked).then_some(point)));
@@ -68,16 +108,31 @@ fn clicked(cx: Cx<'_>, response: &Response, rect: Rect) {
         }
         None => {
             let picked = cx.state.view.panel.as_ref().map(|(panel, _)| *panel);
-            let panel = hit::panel_at(cx.state, pos - rect.min);
+            let panel = hit::panel_at(cx.state, camera, pos - rect.min);
             cx.tx.send(Command::SelectPanel(panel.filter(|p| picked != Some(*p))));
         }
     }
 }
 
-fn begin(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) -> Option<Drag> {
+/// The drag that a pressed button begins. The ground of a free view turns it, that of a measured drawing moves it along; with shift it
+/// is the other way round. The middle button always moves, the second one always turns.
+fn begin(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) -> Option<Drag> {
+    let Seen { at, rect, response } = seen;
+    let pane = cx.state.panes.pane(at);
     let shift = ui.input(|i| i.modifiers.shift);
-    if response.drag_started_by(PointerButton::Middle) || (shift && response.drag_started_by(PointerButton::Primary)) {
+    if response.drag_started_by(PointerButton::Middle) {
         return Some(Drag::Pan);
+    }
+    if response.drag_started_by(PointerButton::Secondary) {
+        return Some(Drag::Orbit);
+    }
+    let ground = if pane.is_measured() == shift {
+        Drag::Orbit
+    } else {
+        Drag::Pan
+    };
+    if shift && response.drag_started_by(PointerButton::Primary) {
+        return Some(ground);
     }
     if !response.drag_started_by(PointerButton::Primary) {
         return None;
@@ -86,8 +141,8 @@ fn begin(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) -> Option<Drag> {
     let from = ui
         .input(|i| i.pointer.press_origin())
         .or_else(|| response.interact_pointer_pos())?;
-    let Some(Hit::Point(point)) = hit::at(cx.state, from - rect.min) else {
-        return Some(Drag::Orbit);
+    let Some(Hit::Point(point)) = hit::at(cx.state, &pane.camera, from - rect.min) else {
+        return Some(ground);
     };
     let path = cx.state.derived.path.as_ref()?;
     cx.tx.send(Command::SelectPoint(Some(point)));
@@ -99,8 +154,16 @@ fn begin(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) -> Option<Drag> {
     })
 }
 
-fn drag_on(cx: Cx<'_>, ui: &Ui, response: &Response, drag: Drag) {
-    let by = response.drag_delta();
+fn drag_on(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, drag: Drag) {
+    let Seen { at, response, .. } = seen;
+    let camera = &cx.state.panes.pane(at).camera;
+    // What lies under the pointer when the button goes down stays under it, also through the first small movements, which do
+    // not count as a drag yet.
+    let by = if response.drag_started() {
+        response.total_drag_delta().unwrap_or_default()
+    } else {
+        response.drag_delta()
+    };
     match drag {
         Drag::Orbit if by != Vec2::ZERO => cx.tx.send(Command::Orbit(by)),
         Drag::Pan if by != Vec2::ZERO => cx.tx.send(Command::Pan(by)),
@@ -113,7 +176,7 @@ fn drag_on(cx: Cx<'_>, ui: &Ui, response: &Response, drag: Drag) {
             let (Some(pos), Some(path)) = (response.interact_pointer_pos(), &cx.state.derived.path) else {
                 return;
             };
-            let to = own + moved(cx, ui, path, placed, pos - from);
+            let to = own + moved(camera, ui, path, placed, pos - from);
             let rule = cx.state.view.rule;
             cx.tx.send(Command::Path(PathEdit::Move { point, to, rule }));
         }
@@ -122,26 +185,30 @@ fn drag_on(cx: Cx<'_>, ui: &Ui, response: &Response, drag: Drag) {
 }
 
 /// The movement of a dragged point in the path's own frame; while x, y or z is held down, only along that axis.
-fn moved(cx: Cx<'_>, ui: &Ui, path: &PlacedPath, placed: Point, by: Vec2) -> Vector {
-    let across = cx.state.camera.move_in_view_plane(placed, by.x, by.y);
+fn moved(camera: &Camera, ui: &Ui, path: &PlacedPath, placed: Point, by: Vec2) -> Vector {
+    let across = camera.move_in_view_plane(placed, by.x, by.y);
     let own = path.own_movement(across);
     let axes = [(Key::X, Vector::X), (Key::Y, Vector::Y), (Key::Z, Vector::Z)];
     let held = axes.into_iter().find(|(key, _)| ui.input(|i| i.key_down(*key)));
     held.map_or(own, |(_, axis)| axis * own.dot(axis))
 }
 
-fn wheel(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) {
+fn wheel(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) {
+    let Seen { at, rect, response } = seen;
     let (scroll, pinch) = ui.input(|i| (i.smooth_scroll_delta().y, i.zoom_delta()));
     let factor = (scroll / WHEEL_DOUBLES).exp2() * pinch;
     if factor != 1.0
         && let Some(pos) = response.hover_pos()
     {
+        activate(cx, at);
         cx.tx.send(Command::Zoom((pos - rect.min).to_pos2(), factor));
     }
 }
 
-/// Arrows turn, with shift they move along; plus and minus zoom.
-fn keys(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) {
+/// Arrows turn a free view and move a measured drawing along, with shift the other way round; plus and minus zoom.
+fn keys(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) {
+    let Seen { at, rect, response } = seen;
+    let measured = cx.state.panes.pane(at).is_measured();
     ui.memory_mut(|m| {
         let filter = egui::EventFilter {
             horizontal_arrows: true,
@@ -164,9 +231,12 @@ fn keys(cx: Cx<'_>, ui: &Ui, rect: Rect, response: &Response) {
         (egui::vec2(x, y) * KEY_STEP, zoom, i.modifiers.shift)
     });
     if by != Vec2::ZERO {
-        cx.tx.send(if shift { Command::Pan(by) } else { Command::Orbit(by) });
+        let turns = measured == shift;
+        activate(cx, at);
+        cx.tx.send(if turns { Command::Orbit(by) } else { Command::Pan(by) });
     }
     if zoom != 0.0 {
+        activate(cx, at);
         let middle = Pos2::ZERO + rect.size() * 0.5;
         cx.tx.send(Command::Zoom(middle, 1.25_f32.powf(zoom)));
     }

@@ -1,18 +1,29 @@
 //! The picture of the shell in the middle of the window.
 
 mod bar;
+mod front_marks;
 mod hit;
 mod input;
 mod marks;
 
-use egui::{Role, Sense, Ui, WidgetInfo};
-use zonewright_geometry::{Point, Side};
-use zonewright_painter::{Bounds, Camera, Colour, Faces, Look, Palette, Projection, Tints, View, with_egui};
+use egui::{Rect, Role, Sense, Ui, WidgetInfo};
+use zonewright_geometry::Side;
+use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Tints, with_egui};
 
-use super::{command::Command, panels::Cx, state::State, view::ViewState, widgets::Widgets};
+use super::{
+    command::Command,
+    panels::Cx,
+    panes::{Layout, PaneAct},
+    state::State,
+    view::ViewState,
+    widgets::Widgets,
+};
 
 /// The accessible name of the picture.
 pub const NAME: &str = "Picture of the shell";
+
+/// Space between two panes, in points.
+const GAP: f32 = 6.0;
 
 /// What a picture was put together from: an equal key means an equal picture.
 #[derive(Clone, PartialEq, Debug)]
@@ -28,16 +39,6 @@ pub(super) struct Key {
 /// Beyond this many panels edges are left out while the picture is dragged: the triangles that reach software OpenGL are what
 /// costs (a probe of 10,000 panels took 29 ms a frame filled, 93 ms with four edge strips each).
 const LIGHT_BEYOND: usize = 8000;
-
-/// The camera before there is anything to look at.
-#[must_use]
-pub(super) fn first_camera(projection: Projection) -> Camera {
-    let bounds = Bounds {
-        min: Point::new(-1000.0, -1000.0, -1000.0),
-        max: Point::new(1000.0, 1000.0, 1000.0),
-    };
-    Camera::view(View::Fit, projection, &bounds, [1.0, 1.0])
-}
 
 /// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
 #[must_use]
@@ -59,39 +60,98 @@ pub(super) fn palette(state: &State) -> Palette {
     }
 }
 
-/// Draws the bar above the picture, and the picture.
+/// Draws the bar above the pictures, and the pictures.
 pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     bar::bar_ui(cx, ui);
     let size = ui.available_size().max(egui::vec2(50.0, 50.0));
-    let (rect, response) = ui.allocate_exact_size(size, Sense::click_and_drag());
-    if cx.state.camera.size != [size.x, size.y] {
-        cx.tx.send(Command::Resize(size));
+    let (whole, _) = ui.allocate_exact_size(size, Sense::hover());
+    widgets.over_pane = None;
+    let layout = cx.state.panes.layout;
+    for (at, rect) in places(layout, whole, GAP).into_iter().enumerate() {
+        pane_ui(cx, ui, at, rect, widgets);
+        bar::pane_bar_ui(cx, ui, at, rect);
+    }
+}
+
+/// Where the shown panes stand. Drawings stand on the left; a front is under its plan and a side beside its front, so that
+/// the same point is in the same column or row.
+fn places(layout: Layout, whole: Rect, gap: f32) -> Vec<Rect> {
+    let halves = |r: Rect, share: f32| {
+        let (left, right) = r.split_left_right_at_fraction(share);
+        (
+            left.with_max_x(left.max.x - gap * 0.5),
+            right.with_min_x(right.min.x + gap * 0.5),
+        )
+    };
+    let stacked = |r: Rect| {
+        let (top, bottom) = r.split_top_bottom_at_fraction(0.5);
+        (
+            top.with_max_y(top.max.y - gap * 0.5),
+            bottom.with_min_y(bottom.min.y + gap * 0.5),
+        )
+    };
+    match layout {
+        Layout::One => vec![whole],
+        Layout::Two => {
+            let (left, right) = halves(whole, 0.5);
+            vec![right, left]
+        }
+        Layout::Three => {
+            let (left, right) = halves(whole, 0.42);
+            let (top, bottom) = stacked(left);
+            vec![right, top, bottom]
+        }
+        Layout::Four => {
+            let (top, bottom) = stacked(whole);
+            let ((plan, free), (front, side)) = (halves(top, 0.5), halves(bottom, 0.5));
+            vec![free, plan, front, side]
+        }
+    }
+}
+
+/// Draws one pane.
+fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
+    let panes = &cx.state.panes;
+    let response = ui.interact(rect, ui.scope_id().with(("pane", at)), Sense::click_and_drag());
+    if panes.pane(at).camera.size != [rect.width(), rect.height()] {
+        cx.tx.send(Command::Pane(PaneAct::Resize(at, rect.size())));
     }
     let panels = cx.state.derived.totals.panels;
-    response.widget_info(|| WidgetInfo::labeled(Role::Canvas, true, NAME));
+    let name = panes.name(at);
+    response.widget_info(|| WidgetInfo::labeled(Role::Canvas, true, &name));
     ui.ctx()
         .accesskit_node_builder(response.id, |node| node.set_value(format!("{panels} panels")));
-    input::handle(cx, ui, rect, &response, widgets);
-    put_together(cx, widgets);
+    let seen = input::Seen {
+        at,
+        rect,
+        response: &response,
+    };
+    input::handle(cx, ui, seen, widgets);
+    put_together(cx, at, widgets);
     let painter = ui.painter_at(rect);
     painter.rect_filled(rect, 0.0, cx.state.colours().picture());
-    with_egui::paint(&widgets.cache.picture, &painter, rect);
-    if cx.state.derived.shell.panels.is_empty() {
+    with_egui::paint(&widgets.cache[at].picture, &painter, rect);
+    if panes.layout != Layout::One && panes.active() == at {
+        let edge = egui::Stroke::new(1.5, cx.state.colours().accent());
+        painter.rect_stroke(rect, 0.0, edge, egui::StrokeKind::Inside);
+    }
+    if at == 0 && cx.state.derived.shell.panels.is_empty() {
         empty_ui(cx, ui, rect);
     }
 }
 
-fn put_together(cx: Cx<'_>, widgets: &mut Widgets) {
+fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     let state = cx.state;
+    let camera = state.panes.pane(at).camera;
     let key = Key {
         revision: state.derived.revision,
         scene: state.derived.scene_revision,
-        camera: state.camera,
+        camera,
         view: state.view.clone(),
         over: widgets.over,
-        light: widgets.drag.is_some() && LIGHT_BEYOND < state.derived.totals.panels,
+        light: widgets.drag.is_some() && LIGHT_BEYOND < state.derived.totals.panels * state.panes.layout.shown(),
     };
-    if widgets.cache.key.as_ref() == Some(&key) {
+    if widgets.cache[at].key.as_ref() == Some(&key) {
         return;
     }
     let derived = &state.derived;
@@ -113,15 +173,13 @@ fn put_together(cx: Cx<'_>, widgets: &mut Widgets) {
         ..Tints::default()
     };
     let marks = marks::marks(state, widgets.over);
-    widgets.cache.picture = derived
-        .scene
-        .picture(&derived.shell, &state.camera, &look, &tints, &marks);
-    widgets.cache.key = Some(key);
+    widgets.cache[at].picture = derived.scene.picture(&derived.shell, &camera, &look, &tints, &marks);
+    widgets.cache[at].key = Some(key);
     widgets.pictures += 1;
 }
 
 /// What an empty picture says.
-fn empty_ui(cx: Cx<'_>, ui: &mut Ui, rect: egui::Rect) {
+fn empty_ui(cx: Cx<'_>, ui: &Ui, rect: egui::Rect) {
     let lines = [
         "Nothing has grown yet.",
         "Choose a start on the left and give its parameters.",
