@@ -78,7 +78,7 @@ fn what_cannot_be_solved_is_said_and_writes_nothing() {
     vault(folder.path());
     let lines = [
         (
-            "--want height=2.1m --change start.zig.rise:..1m",
+            "--want height=2.1m --change start.zig.rise:0..1m",
             "height comes to 1600 mm, 500 mm short of 2100 mm. It needs Zig path: rise above 1000 mm: 1500 mm would do.",
         ),
         (
