@@ -192,6 +192,7 @@ impl App {
     fn follow(&mut self, ctx: &egui::Context) {
         let now = ctx.input(|i| i.time);
         let state = &mut self.state;
+        execute::follow_search(state);
         let design = std::sync::Arc::clone(state.design());
         state.derived.follow(&design, state.history.revision(), now);
         execute::keep_picked(state);

@@ -9,7 +9,9 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand};
+use super::{
+    panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, solving::SolveAct, strip::StripAct, view::Hand,
+};
 use crate::document::Design;
 
 /// A command.
@@ -123,6 +125,8 @@ pub enum Command {
     SelectPanel(Option<u32>),
     /// What the readouts are told.
     Readings(ReadingAct),
+    /// Solves for wanted figures.
+    Solving(SolveAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -191,6 +195,7 @@ impl Command {
             Self::HiddenEdges,
             Self::SwapUnits,
             Self::SwapSide,
+            Self::Solving(SolveAct::Run),
             Self::Readings(ReadingAct::Remember),
             Self::Readings(ReadingAct::GoBack),
             Self::Readings(ReadingAct::Forget),
@@ -271,6 +276,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
+            Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

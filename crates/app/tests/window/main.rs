@@ -8,5 +8,6 @@ mod import;
 mod panels;
 mod panes;
 mod readings;
+mod solving;
 mod strip;
 mod view;

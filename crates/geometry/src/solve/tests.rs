@@ -461,8 +461,11 @@ fn free_points_move_to_a_height() {
     assert!((measured(&found.shape, Figure::Height).unwrap() - 400.0).abs() < 0.1);
 }
 
-/// Shapes with keys of theirs that may be planted, and the reach of each: least and most.
-fn planted() -> Vec<(Shape, Vec<(&'static str, f64, f64)>)> {
+/// Keys that may be planted, and the reach of each: least and most.
+type Planted = Vec<(&'static str, f64, f64)>;
+
+/// Shapes with keys of theirs.
+fn planted() -> Vec<(Shape, Planted)> {
     let ribbon = RibbonForm {
         ribs: 7,
         turn: deg(20.0),

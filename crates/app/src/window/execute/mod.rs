@@ -6,6 +6,7 @@ mod panes;
 mod path;
 mod readings;
 mod shape;
+mod solving;
 mod splice;
 mod steps;
 mod strip;
@@ -14,6 +15,7 @@ mod view;
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use panes::{fit_when_pending, refit};
+pub(crate) use solving::follow_search;
 
 use super::{command::Command, state::State};
 
@@ -67,6 +69,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetUnits(units) => shape::set_units(state, units),
         Command::SwapUnits => shape::swap_units(state),
         Command::Readings(act) => readings::run(state, act),
+        Command::Solving(act) => solving::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {
                 state.dialogs.open_own(asked);
