@@ -40,7 +40,7 @@ pub(super) fn marks(state: &State, marks: &mut Vec<Mark>) {
         if one.is_none() && at.distance_mm > 0.0 {
             for z in [0.0, height] {
                 let round = (0..=PARTS).map(|k| place(TAU * f64::from(k) / f64::from(PARTS), z));
-                marks.push(mark(round.collect(), dashed, Tone::Preview));
+                marks.push(mark(round.collect(), dashed.clone(), Tone::Preview));
             }
         }
         let angle = one.unwrap_or(0.0);
