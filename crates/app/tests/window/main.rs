@@ -11,3 +11,4 @@ mod readings;
 mod solving;
 mod strip;
 mod view;
+mod zones;

@@ -26,7 +26,8 @@ const LIST_HEIGHT: f32 = 190.0;
 /// What the section shows of the design as it is, kept until it changes.
 #[derive(Debug, Default)]
 pub(in crate::window) struct SolveCache {
-    grown: Option<u64>,
+    /// The revision of the design, and that of its shell.
+    about: Option<[u64; 2]>,
     parameters: Vec<Parameter>,
     present_of: Vec<Want>,
     present: Vec<Option<f64>>,
@@ -36,16 +37,16 @@ pub(in crate::window) struct SolveCache {
 impl SolveCache {
     fn follow(&mut self, cx: Cx<'_>) {
         let (state, wants) = (cx.state, &cx.state.solving.wants);
-        let grown = Some(state.derived.counts.grown);
-        if self.grown != grown {
+        let about = Some([state.history.revision(), state.derived.revision]);
+        if self.about != about {
             self.parameters = parameters(state.shape());
         }
-        if self.grown != grown || self.present_of != *wants {
+        if self.about != about || self.present_of != *wants {
             let which: Vec<_> = wants.iter().map(|w| w.figure).collect();
             self.present = figures(state.shape(), &state.derived.shell, &which);
             self.present_of.clone_from(wants);
         }
-        self.grown = grown;
+        self.about = about;
     }
 }
 
