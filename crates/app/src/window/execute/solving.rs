@@ -7,9 +7,8 @@ use zonewright_geometry::{
 use zonewright_shop::figure_name;
 
 use crate::window::{
-    solving::{Answer, SolveAct},
+    solving::{Answer, SearchDone, SolveAct},
     state::State,
-    worker::Worker,
 };
 
 /// Carries out what the search is told.
@@ -69,22 +68,19 @@ fn begin(state: &mut State) {
         state.say("Nothing may change yet: tick parameters under Solve for");
         return;
     }
-    let wake = match state.worker {
-        Worker::Thread { .. } => state.dialogs.system.clone(),
-        Worker::Inline(_) => None,
-    };
     let shape = state.shape().clone();
     let revision = state.history.revision();
-    state.solving.begin(&shape, revision, wake);
+    state.worker.solving.request(state.solving.begin(&shape, revision));
     state.say("Searching…");
 }
 
 /// Takes the answer of a search that has ended; a solution changes the design, as one undo step.
 pub(crate) fn follow_search(state: &mut State) {
-    let Some((begun_on, result)) = state.solving.finished() else {
+    let Some(SearchDone { revision, result }) = state.worker.solving.poll() else {
         return;
     };
-    if begun_on != state.history.revision() {
+    state.solving.ended();
+    if revision != state.history.revision() {
         state.say("The design has changed since the search began; solve again");
         return;
     }

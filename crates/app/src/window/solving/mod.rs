@@ -1,6 +1,6 @@
 //! Solving for what the client said: the wanted figures, what may change, the search that goes on, and its answer.
 //!
-//! The search has a thread of its own: it may go on for seconds, and the worker's findings must not wait for it.
+//! The search has a thread of its own: it may go on for seconds, and neither shell nor findings must wait for it.
 
 mod search;
 
@@ -11,7 +11,9 @@ use zonewright_geometry::{
 };
 
 use super::command::Words;
-use search::Search;
+use search::Stop;
+pub(in crate::window) use search::search_stages;
+pub(super) use search::{SearchDone, SearchJob};
 
 /// What is wanted, and what came of it.
 #[derive(Debug, Default)]
@@ -22,7 +24,7 @@ pub struct Solving {
     pub free: Vec<Free>,
     /// The answer of the last search.
     pub answer: Option<Answer>,
-    search: Option<Search>,
+    search: Option<Stop>,
 }
 
 /// The answer of a search.
@@ -107,16 +109,18 @@ impl Solving {
         self.answer.as_ref().filter(|a| a.revision == revision)
     }
 
-    /// Begins a search on a design of this revision. Without `wake` it is done at once.
-    pub(in crate::window) fn begin(&mut self, shape: &Shape, revision: u64, wake: Option<egui::Context>) {
+    /// What to search for on a design of this revision; from now on the search goes on.
+    pub(in crate::window) fn begin(&mut self, shape: &Shape, revision: u64) -> SearchJob {
+        let stop = Stop::default();
         self.answer = None;
-        self.search = Some(Search::begin(
-            shape.clone(),
-            self.wants.clone(),
-            self.free_in(shape),
+        self.search = Some(stop.clone());
+        SearchJob {
             revision,
-            wake,
-        ));
+            shape: shape.clone(),
+            wants: self.wants.clone(),
+            free: self.free_in(shape),
+            stop,
+        }
     }
 
     /// Asks the search to end.
@@ -126,11 +130,15 @@ impl Solving {
         }
     }
 
-    /// What the search has come to, with the revision that it began on; none while it goes on.
-    pub(in crate::window) fn finished(&mut self) -> Option<(u64, Result<Solution, Unsolved>)> {
-        let done = self.search.as_mut()?.poll()?;
+    /// The search has ended.
+    pub(in crate::window) fn ended(&mut self) {
         self.search = None;
-        Some(done)
+    }
+}
+
+impl Drop for Solving {
+    fn drop(&mut self) {
+        self.stop();
     }
 }
 

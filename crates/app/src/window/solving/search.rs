@@ -1,12 +1,8 @@
-//! A search on a thread of its own.
+//! A search, as it is asked for and answered.
 
-use std::{
-    sync::{
-        Arc,
-        atomic::{AtomicBool, Ordering},
-        mpsc,
-    },
-    thread,
+use std::sync::{
+    Arc,
+    atomic::{AtomicBool, Ordering},
 };
 
 use zonewright_geometry::{
@@ -14,71 +10,46 @@ use zonewright_geometry::{
     solve::{Effort, Free, Solution, Unsolved, Want, solve},
 };
 
-type Found = Result<Solution, Unsolved>;
-
-/// A search that goes on, or whose result waits to be fetched. One that is dropped ends soon.
+/// What to search for.
 #[derive(Debug)]
-pub(super) struct Search {
-    revision: u64,
-    stop: Arc<AtomicBool>,
-    result: mpsc::Receiver<Found>,
+pub struct SearchJob {
+    /// The revision of the design.
+    pub(super) revision: u64,
+    pub(super) shape: Shape,
+    pub(super) wants: Vec<Want>,
+    pub(super) free: Vec<Free>,
+    pub(super) stop: Stop,
 }
 
-impl Search {
-    /// Begins. With a context to wake it has a thread of its own; without, or when the system gives no thread, it is done when this returns.
-    pub(super) fn begin(
-        shape: Shape,
-        wants: Vec<Want>,
-        free: Vec<Free>,
-        revision: u64,
-        wake: Option<egui::Context>,
-    ) -> Self {
-        let stop = Arc::new(AtomicBool::new(false));
-        let (send, result) = mpsc::channel();
-        let work = {
-            let stop = Arc::clone(&stop);
-            move || {
-                let mut stopped = || stop.load(Ordering::Relaxed);
-                let found = solve(&shape, &wants, &free, Effort::default(), &mut stopped);
-                // Nobody listens any more when the window has closed.
-                let _ = send.send(found);
-            }
-        };
-        match wake {
-            None => work(),
-            Some(ctx) => {
-                let spawned = thread::Builder::new()
-                    .name("zonewright-solve".to_owned())
-                    .spawn(move || {
-                        work();
-                        ctx.request_repaint();
-                    });
-                // Without a thread the work is gone, and with it the sender: polling then says so.
-                drop(spawned);
-            }
-        }
-        Self { revision, stop, result }
-    }
+/// What was found.
+#[derive(Debug)]
+pub struct SearchDone {
+    /// The revision of the design that the search began on.
+    pub(in crate::window) revision: u64,
+    /// The solution, or why there is none.
+    pub(in crate::window) result: Result<Solution, Unsolved>,
+}
 
+/// Ends a search from outside.
+#[derive(Clone, Debug, Default)]
+pub(super) struct Stop(Arc<AtomicBool>);
+
+impl Stop {
     pub(super) fn stop(&self) {
-        self.stop.store(true, Ordering::Relaxed);
+        self.0.store(true, Ordering::Relaxed);
     }
 
-    /// The result, once it is there, with the revision that the search began on.
-    pub(super) fn poll(&mut self) -> Option<(u64, Found)> {
-        match self.result.try_recv() {
-            Ok(found) => Some((self.revision, found)),
-            Err(mpsc::TryRecvError::Empty) => None,
-            Err(mpsc::TryRecvError::Disconnected) => {
-                let why = zonewright_geometry::solve::Why::Stopped;
-                Some((self.revision, Err(Unsolved { why, nearest: None })))
-            }
-        }
+    fn is_stopped(&self) -> bool {
+        self.0.load(Ordering::Relaxed)
     }
 }
 
-impl Drop for Search {
-    fn drop(&mut self) {
-        self.stop();
-    }
+/// Works a search out, in one part.
+pub(in crate::window) fn search_stages(job: SearchJob, answer: &mut dyn FnMut(SearchDone) -> bool) {
+    let mut stopped = || job.stop.is_stopped();
+    let result = solve(&job.shape, &job.wants, &job.free, Effort::default(), &mut stopped);
+    answer(SearchDone {
+        revision: job.revision,
+        result,
+    });
 }
