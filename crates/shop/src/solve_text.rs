@@ -34,12 +34,12 @@ pub fn figure_name(figure: Figure, units: Units) -> String {
     name.to_owned()
 }
 
-/// A zone in words.
+/// A zone in words; zones are counted from 1.
 #[must_use]
 pub fn zone_name(zone: ZoneRef) -> String {
     match zone {
-        ZoneRef::Start(id) => format!("zone {}", count(id as usize)),
-        ZoneRef::Spliced(step, k) => format!("zone {} of step {}", count(k as usize), count(step.0 as usize)),
+        ZoneRef::Start(id) => format!("zone {}", count(id as usize + 1)),
+        ZoneRef::Spliced(step, k) => format!("zone {} of step {}", count(k as usize + 1), count(step.0 as usize)),
     }
 }
 

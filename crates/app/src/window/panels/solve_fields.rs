@@ -90,6 +90,12 @@ pub(super) fn want_ui(cx: Cx<'_>, ui: &mut Ui, row: usize, want: Want, now: Opti
             if remove(ui, &format!("Remove figure {number}")) {
                 send(SolveAct::Remove(row));
             }
+            let now = now.map_or_else(
+                || "none now".to_owned(),
+                |v| format!("{} now", figure_value(want.figure, v, cx.state.units())),
+            );
+            let shown = ui.add(egui::Label::new(egui::RichText::new(&now).weak()).truncate());
+            shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("Figure {number}: {now}")));
         });
     });
     match &mut next.figure {
@@ -98,20 +104,13 @@ pub(super) fn want_ui(cx: Cx<'_>, ui: &mut Ui, row: usize, want: Want, now: Opti
         _ => {}
     }
     ui.horizontal(|ui| {
-        ui.spacing_mut().interact_size.x = 78.0;
+        ui.weak("wanted");
+        ui.spacing_mut().interact_size.x = 86.0;
         figure_field(cx, ui, &format!("Wanted value {number}"), want.figure, &mut next.value);
         ui.weak("±");
-        ui.spacing_mut().interact_size.x = 44.0;
+        ui.spacing_mut().interact_size.x = 52.0;
         figure_field(cx, ui, &format!("Tolerance {number}"), want.figure, &mut next.tolerance);
         next.tolerance = next.tolerance.abs();
-        ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
-            let now = now.map_or_else(
-                || "none now".to_owned(),
-                |v| format!("{} now", figure_value(want.figure, v, cx.state.units())),
-            );
-            let shown = ui.add(egui::Label::new(egui::RichText::new(&now).weak()).truncate());
-            shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("Figure {number}: {now}")));
-        });
     });
     if next != want {
         send(SolveAct::Set(row, next));

@@ -193,7 +193,7 @@ fn answer_ui(cx: Cx<'_>, ui: &mut Ui, answer: &Answer) {
                 "All figures are as wanted already."
             };
             ui.colored_label(colours.accent(), text);
-            lines_ui(ui, found, units);
+            ui.scope(|ui| lines_ui(ui, found, units));
         }
         Err(failed) => {
             let text = unsolved_text(failed, units);
@@ -206,7 +206,7 @@ fn answer_ui(cx: Cx<'_>, ui: &mut Ui, answer: &Answer) {
             label.widget_info(|| WidgetInfo::labeled(Role::Label, true, &text));
             let Some(nearest) = &failed.nearest else { return };
             ui.add_space(2.0);
-            lines_ui(ui, nearest, units);
+            ui.scope(|ui| lines_ui(ui, nearest, units));
             if answer.nearest_taken {
                 ui.weak("The nearest was taken.");
             } else if nearest.shape == *cx.state.shape() {
@@ -223,6 +223,8 @@ fn answer_ui(cx: Cx<'_>, ui: &mut Ui, answer: &Answer) {
 
 /// From what to what: each figure, then each parameter that changed.
 fn lines_ui(ui: &mut Ui, solution: &Solution, units: Units) {
+    ui.spacing_mut().interact_size.y = ui.text_style_height(&egui::TextStyle::Body);
+    ui.spacing_mut().item_spacing.y = 3.0;
     for f in &solution.figures {
         let value = |v| figure_value(f.figure, v, units);
         let before = f.before.map_or_else(|| "none".to_owned(), value);
@@ -237,7 +239,7 @@ fn lines_ui(ui: &mut Ui, solution: &Solution, units: Units) {
 fn from_to(ui: &mut Ui, name: &str, before: &str, after: &str) {
     ui.horizontal_wrapped(|ui| {
         ui.spacing_mut().item_spacing.x = 4.0;
-        ui.weak(name);
+        ui.weak(format!("{name}:"));
         ui.weak(before);
         ui.weak("to");
         let shown = ui.label(after);
