@@ -6,9 +6,11 @@ mod fit;
 mod jobs;
 mod picture;
 mod refusal;
+mod solve;
 mod star_words;
 mod start;
 mod values;
+mod wants;
 
 use std::{ffi::OsString, io::Write, path::PathBuf, process::ExitCode};
 
@@ -77,6 +79,16 @@ enum Command {
         #[arg(long, value_delimiter = ',', value_name = "WORDS")]
         only: Vec<String>,
     },
+    /// Change parameters until figures of the shell are as wanted; exit 2 with the reason when they cannot be.
+    Solve(solve::Solve),
+    /// List the parameters of a design: keys, values, names.
+    Parameters {
+        /// The design.
+        file: PathBuf,
+        /// Print a JSON list, numbers at full precision.
+        #[arg(long)]
+        json: bool,
+    },
     /// Draw a picture, without a display.
     Picture {
         /// The design.
@@ -118,6 +130,8 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),
         Some(Command::Animate(animate)) => animate.make().map(|()| DONE),
+        Some(Command::Solve(options)) => options.run().map(|()| DONE),
+        Some(Command::Parameters { file, json }) => solve::list(&file, json).map(|()| DONE),
         Some(Command::Picture {
             file,
             output,

@@ -10,7 +10,7 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand, safe::SafeAct,
+    ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand, safe::SafeAct, solving::SolveAct,
     zones::ZoneAct,
 };
 use crate::document::Design;
@@ -132,6 +132,8 @@ pub enum Command {
     Readings(ReadingAct),
     /// Recovers, reloads, overwrites, goes several steps back.
     Safe(SafeAct),
+    /// Solves for wanted figures.
+    Solving(SolveAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -203,6 +205,7 @@ impl Command {
             Self::HiddenEdges,
             Self::SwapUnits,
             Self::SwapSide,
+            Self::Solving(SolveAct::Run),
             Self::Readings(ReadingAct::Remember),
             Self::Readings(ReadingAct::GoBack),
             Self::Readings(ReadingAct::Forget),
@@ -287,7 +290,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
-            Self::Safe(act) => return act.words(),
+            Self::Safe(act) => return act.words(), Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

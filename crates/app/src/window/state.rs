@@ -8,7 +8,7 @@ use zonewright_shop::text::Units;
 
 use super::{
     command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, readings::Remembered,
-    safe::Safe, theme::Theme, view::ViewState, worker::Worker,
+    safe::Safe, theme::Theme, view::ViewState, worker::Worker, solving::Solving,
 };
 use crate::document::Design;
 
@@ -52,6 +52,8 @@ pub struct State {
     pub safe: Safe,
     /// The state that the readouts are compared with.
     pub remembered: Option<Remembered>,
+    /// Solving for wanted figures.
+    pub solving: Solving,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -76,6 +78,7 @@ impl State {
             closing: false,
             safe: Safe::default(),
             remembered: None,
+            solving: Solving::default(),
             theme: Theme::bundled(),
         }
     }

@@ -87,6 +87,8 @@ pub(super) struct Widgets {
     pub strip: super::strip::StripWidgets,
     /// How sides, angles and folds are spread.
     pub spreads: super::panels::SpreadCache,
+    /// What solving shows.
+    pub solving: super::panels::SolveCache,
     /// The picture of each pane.
     pub cache: [PictureCache; PANES],
     /// How often a picture was put together.

@@ -10,6 +10,7 @@ mod panels;
 mod panes;
 mod readings;
 mod safe;
+mod solving;
 mod strip;
 mod view;
 mod zones;

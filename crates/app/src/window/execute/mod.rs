@@ -8,6 +8,7 @@ mod path;
 mod readings;
 mod safe;
 mod shape;
+mod solving;
 mod splice;
 mod steps;
 mod strip;
@@ -19,6 +20,7 @@ pub(crate) use finish::keep_picked;
 pub(crate) use ladder::keep_climbed;
 pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use path::moved_path;
+pub(crate) use solving::follow_search;
 
 use super::{command::Command, state::State};
 
@@ -76,6 +78,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::Safe(act) if act.replaces_design() => file::run(state, Command::Safe(act)),
         Command::Safe(act) => safe::run(state, act),
         Command::Readings(act) => readings::run(state, act),
+        Command::Solving(act) => solving::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {
                 state.dialogs.open_own(asked);

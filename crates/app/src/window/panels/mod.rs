@@ -8,6 +8,8 @@ mod panel_panel;
 mod path_table;
 mod placement_panel;
 mod readouts;
+mod solve_fields;
+mod solve_panel;
 mod spread_panel;
 mod star_fields;
 mod start_fields;
@@ -21,6 +23,7 @@ mod zones_panel;
 pub(super) use directions::zone_name;
 use egui::{Align, Frame, Layout, Margin, Panel, RichText, ScrollArea, Ui};
 
+pub(super) use solve_panel::SolveCache;
 pub(super) use spread_panel::SpreadCache;
 
 use super::{
@@ -87,6 +90,7 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
                 }
                 readouts::readouts_ui(cx, ui);
             });
+            section(ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
             section(ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
             section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
         });

@@ -2,6 +2,7 @@
 
 mod bar;
 mod front_marks;
+mod headroom_marks;
 mod hit;
 mod input;
 mod marks;
@@ -13,7 +14,7 @@ mod zone_drag;
 pub(super) use zone_drag::ZoneWork;
 
 use egui::{Rect, Role, Sense, Ui, WidgetInfo};
-use zonewright_geometry::Side;
+use zonewright_geometry::{Side, solve::Headroom};
 use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Tints, with_egui};
 
 use super::{
@@ -40,6 +41,7 @@ pub(super) struct Key {
     view: ViewState,
     over: Option<(Side, usize)>,
     light: bool,
+    headroom: Vec<Headroom>,
 }
 
 /// Beyond this many panels edges are left out while the picture is dragged: the triangles that reach software OpenGL are what
@@ -161,6 +163,7 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         camera,
         view: state.view.clone(),
         over: widgets.over,
+        headroom: headroom_marks::wanted(state),
         light: widgets.drag.is_some() && LIGHT_BEYOND < state.derived.totals.panels * state.panes.layout.shown(),
     };
     if widgets.cache[at].key.as_ref() == Some(&key) {
