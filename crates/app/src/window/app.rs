@@ -5,6 +5,7 @@ use std::path::PathBuf;
 use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
 
 use super::{
+    backdrop::BackdropAct,
     command::{Command, Sender},
     derived::Counts,
     dialogs::Asked,
@@ -156,6 +157,8 @@ impl App {
             let is_path = path_box::fits_ending(&path, Asked::Import.endings());
             self.sender.send(if is_path {
                 Command::ImportPath(path)
+            } else if path_box::fits_ending(&path, Asked::Backdrop.endings()) {
+                Command::Backdrop(BackdropAct::LoadPath(path))
             } else {
                 Command::OpenPath(path)
             });
@@ -192,6 +195,7 @@ impl App {
     fn follow(&mut self, ctx: &egui::Context) {
         let now = ctx.input(|i| i.time);
         let state = &mut self.state;
+        execute::follow_fit(state);
         let design = std::sync::Arc::clone(state.design());
         state.derived.follow(&design, state.history.revision(), now);
         execute::keep_picked(state);

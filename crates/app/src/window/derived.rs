@@ -15,6 +15,7 @@ use zonewright_painter::Scene;
 use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 
 use super::{
+    backdrop_view::BackdropView,
     path_place::PlacedPath,
     strip::StripFront,
     worker::{Job, Worker},
@@ -68,6 +69,8 @@ pub struct Derived {
     pub scene: Scene,
     /// Grows whenever `scene` is another one.
     pub scene_revision: u64,
+    /// What follows from the backdrop.
+    pub backdrop: BackdropView,
     /// What the inspection found; none until it is there.
     pub inspection: Option<Inspection>,
     /// How often each stage was worked out.
@@ -95,6 +98,7 @@ impl Derived {
             scene_revision: 0,
             shell: Arc::new(shell),
             findings: Vec::new(),
+            backdrop: BackdropView::default(),
             inspection: None,
             counts: Counts::default(),
             changed_at: f64::NEG_INFINITY,
@@ -118,6 +122,7 @@ impl Derived {
         self.path = PlacedPath::of(&design.shape, &shell);
         self.scene = Scene::quick(&shell);
         self.scene_revision += 1;
+        self.backdrop.follow(design.backdrop.as_ref(), shell.panels.len());
         self.shell = Arc::new(shell);
         self.findings = findings;
         self.put_into_words();
@@ -143,6 +148,7 @@ impl Derived {
                     revision: self.revision,
                     shell: Arc::clone(&self.shell),
                     tolerances: design.shape.tolerances,
+                    backdrop: design.backdrop.clone(),
                 });
             } else {
                 wait = Some(rest);
@@ -155,6 +161,7 @@ impl Derived {
             self.put_into_words();
             self.inspection = Some(done.inspection);
             self.scene = done.scene;
+            self.backdrop.left = done.left;
             self.scene_revision += 1;
             self.counts.inspected += 1;
         }

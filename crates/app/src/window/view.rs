@@ -40,6 +40,8 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
     pub panel: Option<(u32, PanelName)>,
+    /// Whether distances to the backdrop are coloured without their side.
+    pub without_sign: bool,
     /// What follows a dragged point.
     pub rule: DragRule,
     /// The finding that is shown in the picture.
@@ -61,6 +63,7 @@ impl Default for ViewState {
             strip: StripView::default(),
             point: None,
             panel: None,
+            without_sign: false,
             rule: DragRule::Neighbours,
             finding: None,
             shown: None,

@@ -7,9 +7,12 @@ use std::{
 
 use zonewright_geometry::{
     Shell, Tolerances,
+    fit::{PanelLeft, left_of_panels},
     inspect::{Inspection, inspect},
 };
 use zonewright_painter::Scene;
+
+use crate::document::Backdrop;
 
 /// What to work out.
 #[derive(Clone, Debug)]
@@ -20,6 +23,8 @@ pub struct Job {
     pub shell: Arc<Shell>,
     /// What counts as the same place.
     pub tolerances: Tolerances,
+    /// What the panels' distances are measured to.
+    pub backdrop: Option<Backdrop>,
 }
 
 /// What was worked out.
@@ -31,6 +36,8 @@ pub struct Done {
     pub inspection: Inspection,
     /// The scene whose depth order is exact.
     pub scene: Scene,
+    /// How far each panel is from the backdrop; empty without one.
+    pub left: Vec<PanelLeft>,
 }
 
 fn work(job: &Job) -> Done {
@@ -38,7 +45,13 @@ fn work(job: &Job) -> Done {
         revision: job.revision,
         inspection: inspect(&job.shell, &job.tolerances),
         scene: Scene::exact(&job.shell),
+        left: left(job),
     }
+}
+
+fn left(job: &Job) -> Vec<PanelLeft> {
+    let target = job.backdrop.as_ref().and_then(|backdrop| backdrop.target().ok());
+    target.map_or_else(Vec::new, |target| left_of_panels(&job.shell, &target))
 }
 
 /// What waits for the thread.
@@ -144,6 +157,7 @@ mod tests {
                 revision,
                 shell: Arc::new(Shell::default()),
                 tolerances: Tolerances::default(),
+                backdrop: None,
             });
         }
         let deadline = std::time::Instant::now() + std::time::Duration::from_secs(5);

@@ -185,4 +185,57 @@ impl Target {
         }
         cuts
     }
+
+    /// Straight lines that show it: all its lines, its borders, its sharp edges, and between them every edge that is not flat, or, where those
+    /// would be too many to be quiet, sections along x and y.
+    #[must_use]
+    pub fn wire(&self) -> Vec<[Point; 2]> {
+        let place = |v: u32| self.points[v as usize];
+        let mut wire: Vec<[Point; 2]> = self.segments.iter().map(|s| s.map(place)).collect();
+        let few = self.triangles.len() <= FEW_TRIANGLES;
+        let most_level = if few { FLAT.cos() } else { SHARP.cos() };
+        let mut sides: Vec<(u32, u32, u32)> = Vec::with_capacity(3 * self.triangles.len());
+        for (at, [a, b, c]) in (0..).zip(&self.triangles) {
+            sides.extend([(a, b), (b, c), (c, a)].map(|(p, q)| (*p.min(q), *p.max(q), at)));
+        }
+        sides.sort_unstable();
+        for side in sides.chunk_by(|one, other| (one.0, one.1) == (other.0, other.1)) {
+            let across = match side {
+                [(_, _, one), (_, _, other)] => self.normal(*one).dot(self.normal(*other)),
+                _ => -1.0,
+            };
+            // The two sides of a mesh need not run the same way round.
+            if across.abs() < most_level || side.len() != 2 {
+                wire.push([place(side[0].0), place(side[0].1)]);
+            }
+        }
+        if !few {
+            let least = self.points.iter().fold(Vector::INFINITY, |least, p| least.min(p.0));
+            let most = self.points.iter().fold(Vector::NEG_INFINITY, |most, p| most.max(p.0));
+            for axis in 0..2 {
+                for k in 1..SECTIONS {
+                    let share = f64::from(k) / f64::from(SECTIONS);
+                    wire.extend(self.section(axis, least[axis] + (most[axis] - least[axis]) * share));
+                }
+            }
+        }
+        wire
+    }
+
+    fn normal(&self, triangle: u32) -> Vector {
+        let [a, b, c] = self.triangles[triangle as usize].map(|v| self.points[v as usize]);
+        (b - a).cross(c - a).normalize_or_zero()
+    }
 }
+
+/// So many triangles are drawn edge by edge.
+const FEW_TRIANGLES: usize = 3000;
+
+/// Sections along each axis.
+const SECTIONS: u32 = 14;
+
+/// Edges whose triangles lie flatter than this are no edges to the eye, in radians: a tenth of a degree.
+const FLAT: f64 = 0.1 * core::f64::consts::PI / 180.0;
+
+/// Edges sharper than this are drawn on any target, in radians: 25 degrees.
+const SHARP: f64 = 25.0 * core::f64::consts::PI / 180.0;
