@@ -167,6 +167,54 @@ impl Target {
         highest
     }
 
+    /// Places spread evenly over the triangles, or, where there are none, along the lines; always the same ones.
+    #[must_use]
+    pub fn spread(&self, count: usize) -> Vec<Point> {
+        let place = |v: u32| self.points[v as usize];
+        let sizes: Vec<f64> = if self.is_curve() {
+            let length = |s: &[u32; 2]| place(s[0]).distance(place(s[1]));
+            self.segments.iter().map(length).collect()
+        } else {
+            let area = |t: &[u32; 3]| {
+                let [a, b, c] = t.map(place);
+                (b - a).cross(c - a).length()
+            };
+            self.triangles.iter().map(area).collect()
+        };
+        let whole: f64 = sizes.iter().sum();
+        let mut places = Vec::with_capacity(count);
+        let (mut part, mut gone) = (0, 0.0);
+        for k in 0..count {
+            #[expect(clippy::cast_precision_loss, reason = "a count of places")]
+            let (k, count) = (k as f64, count as f64);
+            let want = whole * (k + 0.5) / count;
+            while part + 1 < sizes.len() && gone + sizes[part] < want {
+                gone += sizes[part];
+                part += 1;
+            }
+            // Along a line the rest of the way; in a triangle, an even sequence of pairs folded into it (Roberts, 2018; from memory).
+            let u = if sizes[part] > 0.0 {
+                ((want - gone) / sizes[part]).clamp(0.0, 1.0)
+            } else {
+                0.0
+            };
+            if let Some(triangle) = self.triangles.get(part) {
+                let [a, b, c] = triangle.map(place);
+                let (mut s, mut t) = (
+                    (k * 0.754_877_666_246_692_8).fract(),
+                    (k * 0.569_840_290_998_053_3).fract(),
+                );
+                if s + t > 1.0 {
+                    (s, t) = (1.0 - s, 1.0 - t);
+                }
+                places.push(a + (b - a) * s + (c - a) * t);
+            } else if let Some([a, b]) = self.segments.get(part).map(|s| s.map(place)) {
+                places.push(a + (b - a) * u);
+            }
+        }
+        places
+    }
+
     /// Where the level or upright plane at `at` along an axis (0 x, 1 y, 2 z) cuts the triangles, as pairs of ends.
     #[must_use]
     pub fn section(&self, axis: usize, at: f64) -> Vec<[Point; 2]> {

@@ -130,6 +130,8 @@ fn fit_ui(cx: Cx<'_>, ui: &mut Ui, backdrop: &Backdrop) {
     }
     number(ui, "Smoothing", &mut wish.smoothing, 0.001);
     wish.smoothing = wish.smoothing.clamp(0.0, crate::fitting::MAX_SMOOTHING);
+    number(ui, "Cover", &mut wish.cover, 0.01);
+    wish.cover = wish.cover.clamp(0.0, crate::fitting::MAX_COVER);
     count(
         ui,
         "Most iterations",
@@ -165,9 +167,12 @@ fn progress_ui(cx: Cx<'_>, ui: &mut Ui) {
     ui.label(format!("Iteration {}{end}", history.len() - 1));
     super::readouts::readout(ui, "Points: root mean square", &units.length(last.rms_mm));
     super::readouts::readout(ui, "Points: largest", &units.length(last.largest_mm));
+    if last.uncovered_mm > 0.0 {
+        super::readouts::readout(ui, "Backdrop: farthest from it", &units.length(last.uncovered_mm));
+    }
 }
 
-/// Root mean square and largest distance against the iterations, each as a share of the first largest.
+/// What the fit makes small, as one length, and the largest distance of a point, against the iterations.
 fn chart(cx: Cx<'_>, ui: &mut Ui, history: &[FitStep]) {
     let size = egui::vec2(ui.available_width(), CHART);
     let (rect, response) = ui.allocate_exact_size(size, egui::Sense::hover());
@@ -193,7 +198,7 @@ fn chart(cx: Cx<'_>, ui: &mut Ui, history: &[FitStep]) {
             1.0,
             (|s: &FitStep| s.largest_mm) as fn(&FitStep) -> f64,
         ),
-        (colours.accent(), 2.0, |s: &FitStep| s.rms_mm),
+        (colours.accent(), 2.0, |s: &FitStep| s.mean_mm),
     ] {
         let points: Vec<egui::Pos2> = history.iter().enumerate().map(|(k, s)| at(k, of(s))).collect();
         if let [only] = points[..] {
@@ -210,7 +215,9 @@ fn chart(cx: Cx<'_>, ui: &mut Ui, history: &[FitStep]) {
         font,
         colours.text_weak(),
     );
-    response.on_hover_text("Thick: root mean square of the distances. Thin: the largest.");
+    response.on_hover_text(
+        "Thick: the mean of all that is made small; it never rises. Thin: the largest distance of a point.",
+    );
 }
 
 /// What is left between the panels and the backdrop.
