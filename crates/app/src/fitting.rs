@@ -24,7 +24,7 @@ pub struct FitWish {
     pub parts: [u32; 2],
     /// See [`FitOptions::smoothing`].
     pub smoothing: f64,
-    /// How much covering the whole backdrop counts; see [`FitOptions::cover`].
+    /// How much covering the whole backdrop counts; see [`FitOptions::cover`]. Not used for one of lines.
     pub cover: f64,
     /// The most iterations.
     pub iterations: u32,
@@ -132,19 +132,15 @@ impl FitWish {
 
     /// Fits; `watch` is told each step and says whether to go on.
     pub fn run(&self, begin: &Paths, target: &Target, watch: impl FnMut(&FitStep) -> bool) -> Fit {
-        fit_translation(begin, target, &self.options(), watch)
-    }
-
-    /// What the fit is told.
-    #[must_use]
-    pub fn options(&self) -> FitOptions {
-        FitOptions {
+        let options = FitOptions {
             iterations: self.iterations,
             smoothing: self.smoothing,
-            cover: self.cover,
+            // The points of an arch are to be on it, not its chords about it.
+            cover: if target.is_curve() { 0.0 } else { self.cover },
             hold_ends: self.hold_ends,
             ..FitOptions::default()
-        }
+        };
+        fit_translation(begin, target, &options, watch)
     }
 
     /// The shape with the fitted paths.

@@ -130,8 +130,10 @@ fn fit_ui(cx: Cx<'_>, ui: &mut Ui, backdrop: &Backdrop) {
     }
     number(ui, "Smoothing", &mut wish.smoothing, 0.001);
     wish.smoothing = wish.smoothing.clamp(0.0, crate::fitting::MAX_SMOOTHING);
-    number(ui, "Cover", &mut wish.cover, 0.01);
-    wish.cover = wish.cover.clamp(0.0, crate::fitting::MAX_COVER);
+    if !backdrop.drawn.triangles.is_empty() {
+        number(ui, "Cover", &mut wish.cover, 0.01);
+        wish.cover = wish.cover.clamp(0.0, crate::fitting::MAX_COVER);
+    }
     count(
         ui,
         "Most iterations",
