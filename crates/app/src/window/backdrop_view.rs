@@ -25,9 +25,16 @@ pub struct BackdropView {
 }
 
 impl BackdropView {
-    /// Follows the design's backdrop. Distances of a shell of as many panels stay until newer ones come.
-    pub(super) fn follow(&mut self, backdrop: Option<&Backdrop>, panels: usize) {
-        if backdrop.is_none() || self.left.len() != panels {
+    /// Follows the shell. Distances of as many panels stay until newer ones come.
+    pub(super) fn grown(&mut self, panels: usize) {
+        if self.left.len() != panels {
+            self.left.clear();
+        }
+    }
+
+    /// Follows the design's backdrop.
+    pub(super) fn follow(&mut self, backdrop: Option<&Backdrop>) {
+        if backdrop.is_none() {
             self.left.clear();
         }
         if self.about.as_ref() == backdrop {

@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown, strip::StripView};
+use super::{command::Words, readings::Shown, strip::StripView, zones::ZoneView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -42,6 +42,8 @@ pub struct ViewState {
     pub panel: Option<(u32, PanelName)>,
     /// Whether distances to the backdrop are coloured without their side.
     pub without_sign: bool,
+    /// The picked zone, and how zones are dragged.
+    pub zones: ZoneView,
     /// What follows a dragged point.
     pub rule: DragRule,
     /// The finding that is shown in the picture.
@@ -64,6 +66,7 @@ impl Default for ViewState {
             point: None,
             panel: None,
             without_sign: false,
+            zones: ZoneView::default(),
             rule: DragRule::Neighbours,
             finding: None,
             shown: None,

@@ -11,3 +11,4 @@ mod panes;
 mod readings;
 mod strip;
 mod view;
+mod zones;
