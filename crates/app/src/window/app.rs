@@ -230,6 +230,7 @@ impl App {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
         execute::follow_search(state);
+        execute::follow_fit(state);
         let design = std::sync::Arc::clone(state.design());
         execute::keep_climbed(state);
         state.derived.climb(state.view.ladder.climbed);
