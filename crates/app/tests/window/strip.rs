@@ -245,7 +245,7 @@ fn repeating_acts_on_every_kth_v_round_the_front() {
     harness.get_by_label("At every 2nd V").click();
     harness.run();
     point_at(&mut harness, "Open V 3");
-    assert!(said(&harness).ends_with("at 4 Vs"), "{}", said(&harness));
+    assert!(said(&harness).starts_with("Open V 3, at 4 Vs: "), "{}", said(&harness));
     harness.get_by_label("Open V 3").click();
     harness.run();
     let Some(Act::Splice {

@@ -80,15 +80,15 @@ pub(super) fn v_line(state: &State, side: Side, at: usize) -> String {
     } else {
         spliced(state, side, at)
     };
-    let mut line = format!("{}: {}; {splice}", v_name(state, side, at), filled(state, side, at));
+    let mut name = v_name(state, side, at);
     if state.view.strip.repeat.is_some() {
         let reached = clicked(state, side, &[at]);
-        line += &format!("; at {} Vs", reached.len());
+        name += &format!(", at {} Vs", reached.len());
         if !all_turn(state, side, &reached) {
-            line += ", directions not turned";
+            name += ", directions not turned";
         }
     }
-    line
+    format!("{name}: {}; {splice}", filled(state, side, at))
 }
 
 /// What filling a span makes, in one line. `at` are the Vs of the span.
