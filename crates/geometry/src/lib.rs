@@ -5,6 +5,7 @@
 
 pub mod ahead;
 pub mod finding;
+pub mod fit;
 pub mod grow;
 pub mod inspect;
 pub mod measure;

@@ -14,7 +14,7 @@ mod lay;
 mod mesh;
 mod outside;
 mod pick;
-mod place;
+pub(crate) mod place;
 mod rims;
 mod roles;
 mod seams;
