@@ -26,7 +26,7 @@ use super::{panels::Cx, widgets::Widgets};
 pub const NAME: &str = "Front strip";
 
 /// Width of the head, in points.
-const HEAD: f32 = 152.0;
+const HEAD: f32 = 186.0;
 /// Height of the line that says what is pointed at, and of the overview, in points.
 const LINE: f32 = 22.0;
 const OVERVIEW: f32 = 10.0;
@@ -71,13 +71,13 @@ pub(super) fn strip_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     }
     let bar = Rect::from_min_max(egui::pos2(lane.left(), lane.bottom() + BETWEEN), below.max);
     ui.scope_builder(UiBuilder::new().max_rect(left).id_salt("strip head"), |ui| {
-        head::head_ui(cx, ui);
+        head::head_ui(cx, ui, widgets, lane);
     });
     lane::lane_ui(cx, ui, widgets, lane);
     if scrolls {
         overview::overview_ui(cx, ui, widgets, bar, lane);
     }
     ui.scope_builder(UiBuilder::new().max_rect(line).id_salt("strip line"), |ui| {
-        head::line_ui(cx, ui, widgets, lane);
+        head::line_ui(ui, widgets);
     });
 }

@@ -18,9 +18,8 @@ pub(super) fn v_name(state: &State, side: Side, at: usize) -> String {
 }
 
 fn panel(state: &State, panel: &PanelAhead) -> String {
-    let [a, b] = panel.sides_mm;
-    let [a, b] = [a.max(b), a.min(b)].map(|mm| state.units().length(mm));
-    format!("{a} × {b}, {}", text::degrees(panel.acute.degrees(), 2))
+    let sides = state.units().sides(panel.sides_mm);
+    format!("{sides}, {}", text::degrees(panel.acute.degrees(), 2))
 }
 
 /// What filling an open V makes.
@@ -50,18 +49,22 @@ pub(super) fn spliced(state: &State, side: Side, at: usize) -> String {
             None => sizes.push((size, 1)),
         }
     }
-    let sizes: Vec<String> = sizes
+    if let [(size, count)] = &sizes[..] {
+        return match count {
+            1 => format!("spliced: 1 panel of {size}"),
+            n => format!("spliced: {n} panels of {size}"),
+        };
+    }
+    let listed: Vec<String> = sizes
         .into_iter()
-        .map(
-            |(size, count)| {
-                if count == 1 { size } else { format!("{count} of {size}") }
-            },
-        )
+        .map(|(size, count)| match count {
+            1 => size,
+            n => format!("{n} of {size}"),
+        })
         .collect();
     match panels.len() {
         0 => "spliced: no panel".to_owned(),
-        1 => format!("spliced: 1 panel, {}", sizes.join("; ")),
-        n => format!("spliced: {n} panels, {}", sizes.join("; ")),
+        n => format!("spliced: {n} panels, {}", listed.join("; ")),
     }
 }
 
