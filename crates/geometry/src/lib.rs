@@ -4,6 +4,7 @@
 //! angles measured inside, from 0 to a full turn. Nothing here reads or writes files, knows colours, formats numbers or starts threads.
 
 pub mod ahead;
+pub mod edit;
 pub mod finding;
 pub mod fit;
 pub mod grow;
@@ -13,6 +14,7 @@ pub mod parameter;
 mod record;
 mod shell;
 mod shell_check;
+pub mod snap;
 mod space;
 pub mod start;
 

@@ -250,6 +250,21 @@ impl Shell {
         }
     }
 
+    /// The zone of an edge, by index in [`Shell::zones`]; none for an edge without a panel.
+    #[must_use]
+    pub fn edge_zone(&self, edge: u32) -> Option<u32> {
+        let Edge { ends, panels } = *self.edges.get(edge as usize)?;
+        let panel = panels.into_iter().find(|p| *p != NONE)?;
+        let Panel { corners, letters, .. } = self.panels[panel as usize];
+        let side = (0_u8..4).find(|side| {
+            let k = usize::from(*side);
+            let own = [corners[k], corners[(k + 1) % 4]];
+            let on = |v: &u32| own.contains(v) || self.tee_vertices(panel, *side).contains(v);
+            ends.iter().all(on)
+        })?;
+        Some(self.zone_of(letters[usize::from(side % 2)]))
+    }
+
     /// The vertices inside side `side` of a panel, in order; empty unless the side is split.
     #[must_use]
     pub fn tee_vertices(&self, panel: u32, side: u8) -> &[u32] {

@@ -41,7 +41,7 @@ impl App {
     /// The window on a design for tests: slow stages are worked out at once, and the system is asked nothing.
     #[must_use]
     pub fn new_headless(ctx: &egui::Context, design: Design) -> Self {
-        Self::on(ctx, State::new(design, None, Worker::Inline(None)))
+        Self::on(ctx, State::new(design, None, Worker::inline()))
     }
 
     fn on(ctx: &egui::Context, state: State) -> Self {
@@ -106,7 +106,7 @@ impl App {
             execute::run(&mut self.state, command);
         }
         let design = std::sync::Arc::clone(self.state.design());
-        self.state.derived.follow(&design, self.state.history.revision(), 0.0);
+        self.state.derived.catch_up(&design, self.state.history.revision());
     }
 
     /// Draws the strip alone: one frame of it for its bench.
@@ -140,7 +140,8 @@ impl App {
             self.sender.send(Command::Redo);
         }
         let popup = egui::Popup::is_any_open(ctx);
-        if !typing && !popup && ctx.input(|i| i.key_pressed(Key::Escape)) {
+        let editing = self.widgets.drag.is_some_and(|drag| drag.edits());
+        if !typing && !popup && !editing && ctx.input(|i| i.key_pressed(Key::Escape)) {
             self.sender.send(Command::Dismiss);
         }
     }
@@ -199,16 +200,19 @@ impl App {
 
     /// Works out what follows from the design. When it is worked out anew, the camera may have something to be fitted to.
     fn follow(&mut self, ctx: &egui::Context) {
-        let now = ctx.input(|i| i.time);
+        let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
-        state.derived.follow(&design, state.history.revision(), now);
+        let revision = state.history.revision();
+        state
+            .derived
+            .follow(&design, revision, dragging, &mut state.worker, now);
         execute::keep_picked(state);
         if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
         }
         execute::fit_when_pending(state);
-        execute::refit(state, ctx.input(|i| i.pointer.any_down() || i.pointer.any_released()));
+        execute::refit(state, dragging || state.derived.by_drag());
     }
 }
 

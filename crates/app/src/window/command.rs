@@ -9,7 +9,7 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand};
+use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand, zones::ZoneAct};
 use crate::document::Design;
 
 /// A command.
@@ -95,6 +95,8 @@ pub enum Command {
     Zoom(egui::Pos2, f32),
     /// Does something to the views.
     Pane(PaneAct),
+    /// Changes, links or picks zones.
+    Zone(ZoneAct),
     /// Looks from this side.
     Look(View),
     /// Perspective or parallel.
@@ -198,6 +200,7 @@ impl Command {
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
+        all.extend(ZoneAct::listed().map(Self::Zone));
         all.extend(StripAct::listed().map(Self::Strip));
         all
     }
@@ -253,6 +256,7 @@ impl Command {
             Self::Pan(_) => ("Move the picture", "Moves the camera along the screen."),
             Self::Zoom(..) => ("Zoom", "Brings the shell nearer or farther."),
             Self::Pane(act) => return act.words(),
+            Self::Zone(act) => return act.words(),
             Self::Look(view) => return super::view::look_words(*view),
             Self::SetProjection(Projection::Perspective) => ("Perspective", "Draws far things smaller."),
             Self::SetProjection(Projection::Parallel) => ("Parallel", "Draws equal lengths equal."),
@@ -310,6 +314,7 @@ impl Command {
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
             Self::Pane(act) => act.shortcut()?,
+            Self::Zone(act) => act.shortcut()?,
             _ => return None,
         };
         Some(KeyboardShortcut::new(modifiers, key))

@@ -25,18 +25,21 @@ mod remedies;
 mod search;
 mod session;
 mod splice_marks;
+mod stages;
 mod state;
 mod strip;
 mod theme;
 mod view;
 mod widgets;
 mod worker;
+mod zone_table;
+mod zones;
 
 use std::path::{Path, PathBuf};
 
 pub use app::App;
 pub use command::{Command, Unsaved};
-pub use derived::{Counts, Derived};
+pub use derived::{Counts, Derived, Pending};
 pub use history::History;
 pub use panes::{Layout, Pane, PaneAct, Panes};
 pub use path_edit::PathEdit;
@@ -46,6 +49,8 @@ pub use session::STATE_DIR;
 pub use state::State;
 pub use strip::{NAME as STRIP, Picks, Span, StripAct, StripFront, StripView};
 pub use view::{Hand, ViewState};
+pub use zone_table::ZoneTable;
+pub use zones::{SnapStar, ZoneAct, ZoneView};
 
 use crate::document::{self, Design};
 

@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown, strip::StripView};
+use super::{command::Words, readings::Shown, strip::StripView, zones::ZoneView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -40,6 +40,8 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
     pub panel: Option<(u32, PanelName)>,
+    /// The picked zone, and how zones are dragged.
+    pub zones: ZoneView,
     /// What follows a dragged point.
     pub rule: DragRule,
     /// The finding that is shown in the picture.
@@ -61,6 +63,7 @@ impl Default for ViewState {
             strip: StripView::default(),
             point: None,
             panel: None,
+            zones: ZoneView::default(),
             rule: DragRule::Neighbours,
             finding: None,
             shown: None,

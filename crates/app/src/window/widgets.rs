@@ -25,6 +25,15 @@ pub(super) enum Drag {
         /// Where the pointer was.
         from: egui::Pos2,
     },
+    /// A zone follows the pointer; see [`Widgets::zones`].
+    Zone,
+}
+
+impl Drag {
+    /// Whether it changes the design.
+    pub(super) const fn edits(&self) -> bool {
+        matches!(self, Self::Point { .. } | Self::Zone)
+    }
 }
 
 /// The text of the path box and what it shows.
@@ -60,6 +69,8 @@ pub(super) struct Widgets {
     pub search: String,
     /// The drag that is going on.
     pub drag: Option<Drag>,
+    /// What the pointer is over among the zones, and what is dragged there.
+    pub zones: super::picture::ZoneWork,
     /// The pane that it goes on in.
     pub drag_pane: usize,
     /// The pane that the pointer is over.

@@ -10,3 +10,4 @@ mod panes;
 mod readings;
 mod strip;
 mod view;
+mod zones;

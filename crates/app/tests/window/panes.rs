@@ -165,6 +165,7 @@ fn keys_act_on_the_view_under_the_pointer_and_else_on_the_active_one() {
 #[test]
 fn a_point_is_dragged_in_a_drawing_and_the_drag_stays_in_its_plane() {
     let mut harness = four();
+    crate::common::snap_off(&mut harness);
     let old = point(harness.state(), 2);
     let camera = pane(&harness, 1).camera;
     let at = place(&harness, 1, old);

@@ -144,6 +144,8 @@ fn remember(state: &mut State) {
 }
 
 fn export(state: &mut State, folder: &Path) {
+    let design = std::sync::Arc::clone(state.design());
+    state.derived.catch_up(&design, state.history.revision());
     let derived = &state.derived;
     if derived.shell.panels.is_empty() {
         state.complain("There is nothing to export: the shell has no panels. Lay a course.");

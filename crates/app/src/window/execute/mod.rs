@@ -10,10 +10,12 @@ mod splice;
 mod steps;
 mod strip;
 mod view;
+mod zones;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use panes::{fit_when_pending, refit};
+pub(crate) use path::moved_path;
 
 use super::{command::Command, state::State};
 
@@ -61,6 +63,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FreePoints => shape::free_points(state),
         Command::ShareGap => path::share_gap(state),
         Command::Path(edit) => path::edit(state, edit),
+        Command::Zone(act) => zones::run(state, act),
         Command::SetPlacement(placement) => shape::set_placement(state, placement),
         Command::SetOutside(outside) => shape::set_outside(state, outside),
         Command::FlipOutside => shape::flip_outside(state),

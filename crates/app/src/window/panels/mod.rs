@@ -14,6 +14,9 @@ mod start_fields;
 mod start_panel;
 mod step_fields;
 mod steps_panel;
+mod tolerances_panel;
+mod zone_fields;
+mod zones_panel;
 
 pub(super) use directions::zone_name;
 use egui::{ScrollArea, Ui};
@@ -44,7 +47,9 @@ pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
                 finish_panel::finish_ui(cx, ui);
             });
             section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
+            section(ui, "Zones", true, |ui| zones_panel::zones_ui(cx, ui));
             section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
+            section(ui, "Tolerances", false, |ui| tolerances_panel::tolerances_ui(cx, ui));
         });
 }
 
