@@ -4,7 +4,10 @@
 //!
 //! FOLDER is docs/manual by default; with NAME only that picture is made.
 
-#![expect(clippy::unwrap_used, reason = "it makes pictures for the repository, and may stop where it stands")]
+#![expect(
+    clippy::unwrap_used,
+    reason = "it makes pictures for the repository, and may stop where it stands"
+)]
 
 mod pixels;
 mod scenes;

@@ -4,7 +4,7 @@ use std::{cell::RefCell, collections::BTreeMap, rc::Rc};
 
 use egui::{
     Color32, FullOutput, ImageData, Pos2, TextureId, TexturesDelta,
-    epaint::{ClippedPrimitive, Primitive, Vertex},
+    epaint::{ClippedPrimitive, ImageDelta, Primitive, Vertex},
 };
 use egui_kittest::TestRenderer;
 
@@ -26,25 +26,31 @@ fn key(id: TextureId) -> String {
 impl TestRenderer for Textures {
     fn handle_delta(&mut self, delta: &mut TexturesDelta) {
         let mut all = self.0.borrow_mut();
-        for (id, change) in std::mem::take(&mut delta.set) {
-            let ImageData::Color(image) = &change.image;
+        // Each texture has its changes in their order; textures do not touch each other, so their order does not matter.
+        #[expect(clippy::iter_over_hash_type, reason = "the order of textures does not matter")]
+        for (id, changes) in std::mem::take(&mut delta.set) {
             let texture = all.entry(key(id)).or_default();
-            match change.pos {
-                None => {
-                    texture.size = image.size;
-                    texture.colours.clone_from(&image.pixels);
-                }
-                Some([left, top]) => {
-                    for (row, line) in image.pixels.chunks(image.size[0]).enumerate() {
-                        let at = (top + row) * texture.size[0] + left;
-                        texture.colours[at..at + line.len()].copy_from_slice(line);
-                    }
-                }
+            for change in changes {
+                change_texture(texture, &change);
             }
         }
+        #[expect(clippy::iter_over_hash_type, reason = "the order of textures does not matter")]
         for id in std::mem::take(&mut delta.free) {
             all.remove(&key(id));
         }
+    }
+}
+
+fn change_texture(texture: &mut Texture, change: &ImageDelta) {
+    let ImageData::Color(image) = &change.image;
+    let Some([left, top]) = change.pos else {
+        texture.size = image.size;
+        texture.colours.clone_from(&image.pixels);
+        return;
+    };
+    for (row, line) in image.pixels.chunks(image.size[0]).enumerate() {
+        let at = (top + row) * texture.size[0] + left;
+        texture.colours[at..at + line.len()].copy_from_slice(line);
     }
 }
 
@@ -55,7 +61,13 @@ pub(crate) struct Canvas {
 }
 
 /// Draws what the window put out last; `scale` is pixels a point.
-pub(crate) fn draw(ctx: &egui::Context, output: &FullOutput, textures: &Textures, size: [usize; 2], scale: f32) -> Canvas {
+pub(crate) fn draw(
+    ctx: &egui::Context,
+    output: &FullOutput,
+    textures: &Textures,
+    size: [usize; 2],
+    scale: f32,
+) -> Canvas {
     let mut canvas = Canvas {
         size,
         pixels: vec![Color32::BLACK; size[0] * size[1]],

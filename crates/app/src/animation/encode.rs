@@ -93,7 +93,9 @@ fn gif(frames: usize, size: [u32; 2], rate: u16, frame: Draw<'_>) -> Result<Vec<
         coded.delay = delay(at, frames, rate);
         encoder.write_frame(&coded).map_err(failed)?;
     }
-    encoder.into_inner().map_err(|error| format!("the GIF cannot be written: {error}"))
+    encoder
+        .into_inner()
+        .map_err(|error| format!("the GIF cannot be written: {error}"))
 }
 
 /// How long a frame is shown, in hundredths of a second, so that all frames up to it take what the rate says.

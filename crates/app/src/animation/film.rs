@@ -75,7 +75,14 @@ impl Film {
         };
         if back {
             let forth = film.stills.len();
-            let returned: Vec<Still> = film.stills.iter().take(forth.saturating_sub(1)).skip(1).rev().cloned().collect();
+            let returned: Vec<Still> = film
+                .stills
+                .iter()
+                .take(forth.saturating_sub(1))
+                .skip(1)
+                .rev()
+                .cloned()
+                .collect();
             film.stills.extend(returned);
         }
         if film.stills.len() > MOST_FRAMES as usize {

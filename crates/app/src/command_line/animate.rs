@@ -83,7 +83,11 @@ fn save(output: &Path, kind: Kind, written: Vec<(String, Vec<u8>)>) -> Result<()
         fs::create_dir_all(output).map_err(|cause| unwritten(output, cause))?;
     }
     for (name, bytes) in written {
-        let path = if name.is_empty() { output.to_path_buf() } else { output.join(name) };
+        let path = if name.is_empty() {
+            output.to_path_buf()
+        } else {
+            output.join(name)
+        };
         write_whole(&path, &bytes).map_err(|cause| unwritten(&path, cause))?;
     }
     Ok(())

@@ -10,8 +10,8 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct, solving::SolveAct, strip::StripAct, view::Hand,
-    zones::ZoneAct,
+    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct,
+    solving::SolveAct, strip::StripAct, view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -294,7 +294,8 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
-            Self::Safe(act) => return act.words(), Self::Solving(act) => return act.words(),
+            Self::Safe(act) => return act.words(),
+            Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),
