@@ -8,6 +8,7 @@ use super::{
     backdrop::BackdropAct,
     command::Command,
     kinds,
+    ladder::LadderAct,
     panels::Cx,
     panes::{Layout, PaneAct},
 };
@@ -49,6 +50,8 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                 ui,
                 [Command::AddCourse, Command::RemoveCourse, Command::LayUntilStill],
             );
+            ui.separator();
+            items(cx, ui, LadderAct::LISTED.map(Command::Ladder));
             ui.separator();
             items(cx, ui, [Command::SwapSide]);
         });

@@ -6,6 +6,7 @@ mod backdrop;
 mod common;
 mod editing;
 mod import;
+mod ladder;
 mod panels;
 mod panes;
 mod readings;
