@@ -13,7 +13,7 @@ use zonewright_geometry::Shape;
 use zonewright_shop::text::Units;
 
 pub use backdrop::{Backdrop, BackdropPlacement, Drawn, MAX_BACKDROP_PARTS, MAX_BACKDROP_POINTS};
-pub use bounds::{MAX_FILE_BYTES, MAX_LETTERS, MAX_NAME_BYTES, MAX_NAMES, MAX_STEPS};
+pub use bounds::{MAX_FILE_BYTES, MAX_LETTERS, MAX_NAME_BYTES, MAX_NAMES, MAX_STEPS, weight};
 pub use bundled::bundled;
 pub use new::new_design;
 pub use read::{parse_design, read_design};

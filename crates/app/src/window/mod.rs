@@ -13,6 +13,8 @@ mod dialogs;
 mod execute;
 mod fields;
 mod history;
+mod history_pack;
+mod history_stack;
 mod kinds;
 mod ladder;
 mod menu;
