@@ -66,6 +66,10 @@ pub(super) fn solve_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
             .wrap(),
         );
     }
+    if !solving.wants.is_empty() && cx.state.view.ladder.climbed.is_some() {
+        let note = "Present values are of the part that is shown. Solving is for the whole.";
+        ui.add(Label::new(egui::RichText::new(note).color(cx.state.colours().accent())).wrap());
+    }
     for (row, (want, now)) in solving.wants.iter().zip(&cache.present).enumerate() {
         ui.push_id(("want", row), |ui| solve_fields::want_ui(cx, ui, row, *want, *now));
         ui.add_space(2.0);
