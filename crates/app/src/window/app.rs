@@ -1,6 +1,6 @@
 //! The window: `logic` changes the state, `ui` draws it and sends commands.
 
-use std::path::PathBuf;
+use std::{path::PathBuf, time::Instant};
 
 use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
 
@@ -8,7 +8,9 @@ use super::{
     command::{Command, Sender},
     derived::Counts,
     dialogs::Asked,
-    execute, menu,
+    execute,
+    frames::{FrameLog, Frames},
+    menu,
     panels::{self, Cx},
     panes::PaneAct,
     path_box, picture, prompts, search,
@@ -35,6 +37,7 @@ impl App {
     pub fn new(ctx: &egui::Context, design: Design, path: Option<PathBuf>) -> Self {
         let mut app = Self::on(ctx, State::new(design, path, Worker::start(ctx)));
         app.state.dialogs.system = Some(ctx.clone());
+        app.widgets.frames = Frames::watched();
         app
     }
 
@@ -59,6 +62,13 @@ impl App {
     #[must_use]
     pub fn with_session(mut self, session: Option<PathBuf>) -> Self {
         self.state.session = session;
+        self
+    }
+
+    /// Writes how long frames take.
+    #[must_use]
+    pub(super) fn with_frame_log(mut self, log: Option<FrameLog>) -> Self {
+        self.widgets.frames.set_log(log);
         self
     }
 
@@ -208,6 +218,8 @@ impl App {
 
 impl eframe::App for App {
     fn logic(&mut self, ctx: &egui::Context, _frame: &mut eframe::Frame) {
+        let panels = self.state.derived.totals.panels;
+        self.widgets.frames.begin(Instant::now(), panels);
         self.shortcuts(ctx);
         self.system_events(ctx);
         for command in self.sender.take() {
@@ -229,6 +241,7 @@ impl eframe::App for App {
         let sizes = self.state.theme.sizes;
         let widgets = &mut self.widgets;
         widgets.over_next = None;
+        let pictures = widgets.pictures;
         let bar = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(sizes.margin, 4));
         let side = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::same(sizes.margin));
         Panel::top("menu").frame(bar).show(ui, |ui| menu::menu_ui(cx, ui));
@@ -256,6 +269,11 @@ impl eframe::App for App {
         search::search_ui(cx, ui, widgets);
         path_box::path_box_ui(cx, ui, widgets);
         prompts::unsaved_ui(cx, ui);
+        let held = ui.ctx().input(|i| i.pointer.any_down());
+        let (changed, panels) = (widgets.pictures != pictures, self.state.derived.totals.panels);
+        if let Some(wait) = widgets.frames.end(Instant::now(), changed, held, panels) {
+            ui.ctx().request_repaint_after(wait);
+        }
         let moved_on = widgets.over != widgets.over_next;
         widgets.over = widgets.over_next;
         if moved_on || !self.sender.is_empty() {
