@@ -119,7 +119,7 @@ fn refused(error: &eframe::Error, renderer: Renderer, shown: bool) -> String {
         }
     };
     format!(
-        "No window can be opened: {why}. Everything also works without a window, from the command line: see zonewright --help."
+        "No window can be opened: {why}; everything also works from the command line, without a window: see zonewright --help."
     )
 }
 

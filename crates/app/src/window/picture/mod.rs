@@ -128,7 +128,6 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
     input::handle(cx, ui, seen, widgets);
     put_together(cx, at, widgets);
     let painter = ui.painter_at(rect);
-    painter.rect_filled(rect, 0.0, cx.state.colours().picture());
     let cache = &mut widgets.cache[at];
     let corner = rect.min.to_vec2();
     if cache.mesh.0 != Some(corner) {
