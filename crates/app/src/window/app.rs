@@ -10,7 +10,7 @@ use super::{
     dialogs::Asked,
     execute,
     frames::{FrameLog, Frames},
-    menu,
+    ladder, menu,
     panels::{self, Cx},
     panes::PaneAct,
     path_box, picture, prompts, search,
@@ -141,7 +141,8 @@ impl App {
             self.sender.send(Command::Redo);
         }
         let popup = egui::Popup::is_any_open(ctx);
-        if !typing && !popup && ctx.input(|i| i.key_pressed(Key::Escape)) {
+        let editing = self.widgets.drag.is_some_and(|drag| drag.edits());
+        if !typing && !popup && !editing && ctx.input(|i| i.key_pressed(Key::Escape)) {
             self.sender.send(Command::Dismiss);
         }
     }
@@ -203,6 +204,8 @@ impl App {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
+        execute::keep_climbed(state);
+        state.derived.climb(state.view.ladder.climbed);
         let revision = state.history.revision();
         state
             .derived
@@ -253,6 +256,11 @@ impl eframe::App for App {
             .default_size(sizes.left)
             .size_range(sizes.left..=520.0)
             .show(ui, |ui| panels::left_ui(cx, ui));
+        let upright = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(8, sizes.margin));
+        Panel::left("ladder")
+            .frame(upright)
+            .exact_size(sizes.ladder)
+            .show(ui, |ui| ladder::ladder_ui(cx, ui, widgets));
         Panel::right("readouts and findings")
             .frame(side)
             .default_size(sizes.right)
@@ -265,6 +273,7 @@ impl eframe::App for App {
         CentralPanel::no_frame().frame(side).show(ui, |ui| {
             prompts::banners_ui(cx, ui);
             picture::picture_ui(cx, ui, widgets);
+            ladder::banner_ui(cx, ui, ui.max_rect());
         });
         search::search_ui(cx, ui, widgets);
         path_box::path_box_ui(cx, ui, widgets);

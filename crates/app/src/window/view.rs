@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown, strip::StripView};
+use super::{command::Words, ladder::LadderView, readings::Shown, strip::StripView, zones::ZoneView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -40,8 +40,12 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
     pub panel: Option<(u32, PanelName)>,
+    /// The picked zone, and how zones are dragged.
+    pub zones: ZoneView,
     /// What follows a dragged point.
     pub rule: DragRule,
+    /// How far one has climbed on the ladder, and which step's card is open.
+    pub ladder: LadderView,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
     /// What a readout shows in the picture.
@@ -61,7 +65,9 @@ impl Default for ViewState {
             strip: StripView::default(),
             point: None,
             panel: None,
+            zones: ZoneView::default(),
             rule: DragRule::Neighbours,
+            ladder: LadderView::default(),
             finding: None,
             shown: None,
             dark: false,

@@ -5,8 +5,10 @@
 mod common;
 mod editing;
 mod import;
+mod ladder;
 mod panels;
 mod panes;
 mod readings;
 mod strip;
 mod view;
+mod zones;

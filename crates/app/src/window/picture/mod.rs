@@ -5,6 +5,12 @@ mod front_marks;
 mod hit;
 mod input;
 mod marks;
+mod overlay;
+mod point_snap;
+mod snapping;
+mod zone_drag;
+
+pub(super) use zone_drag::ZoneWork;
 
 use std::sync::Arc;
 
@@ -65,10 +71,12 @@ pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     let size = ui.available_size().max(egui::vec2(50.0, 50.0));
     let (whole, _) = ui.allocate_exact_size(size, Sense::hover());
     widgets.over_pane = None;
+    widgets.zones.over = None;
     let layout = cx.state.panes.layout;
     for (at, rect) in places(layout, whole, GAP).into_iter().enumerate() {
         pane_ui(cx, ui, at, rect, widgets);
         bar::pane_bar_ui(cx, ui, at, rect);
+        overlay::overlay_ui(cx, ui, at, rect, &widgets.zones);
     }
 }
 
@@ -126,6 +134,10 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
         response: &response,
     };
     input::handle(cx, ui, seen, widgets);
+    if let Some(said) = overlay::said(cx.state, at, &widgets.zones) {
+        ui.ctx()
+            .accesskit_node_builder(response.id, |node| node.set_description(said));
+    }
     put_together(cx, at, widgets);
     let painter = ui.painter_at(rect);
     let cache = &mut widgets.cache[at];
