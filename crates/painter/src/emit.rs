@@ -63,7 +63,7 @@ impl Scene {
             emitter.all_edges(false);
         } else {
             emitter.pieces(tints);
-            if look.hidden_edges {
+            if look.hidden_edges && !look.only_rims {
                 emitter.all_edges(true);
             }
         }
@@ -130,6 +130,7 @@ impl<'a> Emitter<'a> {
         let cull = self.look.cull && scene.encloses && !eye_inside && !findings_shown;
         let hollow = self.look.faces == Faces::Wireframe;
         let edges = self.look.faces != Faces::Shaded || self.look.colour == ColourBy::Fold;
+        let only_rims = self.look.only_rims;
         let colours: Vec<Option<Colour>> = scene
             .planes
             .iter()
@@ -170,6 +171,9 @@ impl<'a> Emitter<'a> {
                     continue;
                 }
                 let segment = segment as usize;
+                if only_rims && !scene.rim[scene.segments[segment].edge as usize] {
+                    continue;
+                }
                 left[segment] -= 1;
                 let shows = if cull {
                     drawn[segment] |= colour.is_some();

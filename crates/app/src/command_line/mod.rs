@@ -18,6 +18,8 @@ use clap::{Parser, Subcommand, error::ErrorKind};
 
 use start::Kind;
 
+use crate::window;
+
 /// Done.
 const DONE: u8 = 0;
 /// `check` found something of level stop.
@@ -41,8 +43,28 @@ const UNUSABLE: u8 = 2;
 struct Cli {
     #[command(subcommand)]
     command: Option<Command>,
+    /// What draws the window: opengl, wgpu (Vulkan), or auto, which takes the first of these that works.
+    #[arg(
+        long,
+        value_name = "WHICH",
+        value_enum,
+        default_value = "auto",
+        hide_possible_values = true
+    )]
+    renderer: WhichRenderer,
+    /// Write how long each frame takes while the picture changes, in ms, to a CSV file.
+    #[arg(long, value_name = "FILE.csv")]
+    frame_times: Option<PathBuf>,
     /// The design to open in the window.
     file: Option<PathBuf>,
+}
+
+/// What draws the window.
+#[derive(clap::ValueEnum, Clone, Copy, Debug)]
+enum WhichRenderer {
+    Auto,
+    Opengl,
+    Wgpu,
 }
 
 #[derive(Subcommand, Debug)]
@@ -109,8 +131,8 @@ enum Command {
 
 /// What the command line asks for.
 pub enum Asked {
-    /// The window, on a file or not.
-    Window(Option<PathBuf>),
+    /// The window.
+    Window(window::Options),
     /// Nothing more; leave with this status.
     Leave(ExitCode),
 }
@@ -123,7 +145,17 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Err(error) => return Asked::Leave(ExitCode::from(explain(&error))),
     };
     let done = match cli.command {
-        None => return Asked::Window(cli.file),
+        None => {
+            return Asked::Window(window::Options {
+                file: cli.file,
+                renderer: match cli.renderer {
+                    WhichRenderer::Auto => window::Renderer::Auto,
+                    WhichRenderer::Opengl => window::Renderer::OpenGl,
+                    WhichRenderer::Wgpu => window::Renderer::Wgpu,
+                },
+                frame_times: cli.frame_times,
+            });
+        }
         Some(Command::Start(kind)) => kind.make().map(|()| DONE),
         Some(Command::Fit(arguments)) => arguments.run().map(|()| DONE),
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),

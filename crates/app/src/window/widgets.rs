@@ -58,6 +58,8 @@ pub(super) struct PictureCache {
     pub key: Option<super::picture::Key>,
     /// The picture.
     pub picture: Picture,
+    /// The picture as triangles, and where its corner stands in them.
+    pub mesh: (Option<egui::Vec2>, std::sync::Arc<egui::Mesh>),
 }
 
 /// State of the widgets.
@@ -81,6 +83,8 @@ pub(super) struct Widgets {
     pub over: Option<(Side, usize)>,
     /// The same, as it is found while this frame is drawn.
     pub over_next: Option<(Side, usize)>,
+    /// How long frames take, and how much of the pictures is drawn.
+    pub frames: super::frames::Frames,
     /// The ladder.
     pub ladder: super::ladder::LadderWidgets,
     /// The front strip.

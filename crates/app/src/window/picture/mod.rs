@@ -14,12 +14,15 @@ mod zone_drag;
 
 pub(super) use zone_drag::ZoneWork;
 
+use std::sync::Arc;
+
 use egui::{Rect, Role, Sense, Ui, WidgetInfo};
 use zonewright_geometry::{Side, solve::Headroom};
 use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Tints, with_egui};
 
 use super::{
     command::Command,
+    frames::Detail,
     panels::Cx,
     panes::{Layout, PaneAct},
     state::State,
@@ -41,13 +44,9 @@ pub(super) struct Key {
     camera: Camera,
     view: ViewState,
     over: Option<(Side, usize)>,
-    light: bool,
+    detail: Detail,
     headroom: Vec<Headroom>,
 }
-
-/// Beyond this many panels edges are left out while the picture is dragged: the triangles that reach software OpenGL are what
-/// costs (a probe of 10,000 panels took 29 ms a frame filled, 93 ms with four edge strips each).
-const LIGHT_BEYOND: usize = 8000;
 
 /// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
 #[must_use]
@@ -144,8 +143,13 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
     }
     put_together(cx, at, widgets);
     let painter = ui.painter_at(rect);
-    painter.rect_filled(rect, 0.0, cx.state.colours().picture());
-    with_egui::paint(&widgets.cache[at].picture, &painter, rect);
+    let cache = &mut widgets.cache[at];
+    let corner = rect.min.to_vec2();
+    if cache.mesh.0 != Some(corner) {
+        cache.mesh.0 = Some(corner);
+        with_egui::mesh_into(&cache.picture, corner, Arc::make_mut(&mut cache.mesh.1));
+    }
+    with_egui::paint_with(&cache.picture, &cache.mesh.1, &painter, rect);
     if panes.layout != Layout::One && panes.active() == at {
         let edge = egui::Stroke::new(1.5, cx.state.colours().accent());
         painter.rect_stroke(rect, 0.0, edge, egui::StrokeKind::Inside);
@@ -167,8 +171,8 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         camera,
         view: state.view.clone(),
         over: widgets.over,
+        detail: widgets.frames.detail(),
         headroom: headroom_marks::wanted(state),
-        light: widgets.drag.is_some() && LIGHT_BEYOND < state.derived.totals.panels * state.panes.layout.shown(),
     };
     if widgets.cache[at].key.as_ref() == Some(&key) {
         return;
@@ -176,10 +180,9 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     let derived = &state.derived;
     let uncrossed = derived.inspection.as_ref().is_some_and(|i| i.crossings.is_empty());
     let look = Look {
-        faces: match state.view.faces {
-            Faces::ShadedWithEdges if key.light => Faces::Shaded,
-            faces => faces,
-        },
+        faces: state.view.faces,
+        // The triangles that reach a driver in software are what costs, and two of three belong to edges.
+        only_rims: key.detail == Detail::Rims && state.view.faces != Faces::Wireframe,
         hidden_edges: state.view.hidden_edges,
         colour: state.view.colour,
         palette: palette(state),
@@ -195,10 +198,13 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     };
     let mut marks = marks::marks(state, widgets.over);
     backdrop::marks(state, &mut marks);
-    let mut picture = derived.scene.picture(&derived.shell, &camera, &look, &tints, &marks);
-    backdrop::add(state, &camera, &look, &mut picture);
-    widgets.cache[at].picture = picture;
-    widgets.cache[at].key = Some(key);
+    let cache = &mut widgets.cache[at];
+    derived
+        .scene
+        .picture_into(&derived.shell, &camera, &look, &tints, &marks, &mut cache.picture);
+    backdrop::add(state, &camera, &look, &mut cache.picture);
+    cache.key = Some(key);
+    cache.mesh.0 = None;
     widgets.pictures += 1;
 }
 
