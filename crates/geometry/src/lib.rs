@@ -19,7 +19,7 @@ mod space;
 pub mod start;
 
 pub use finding::{Code, Finding, Level, Place, Unit};
-pub use grow::{grow, grow_until};
+pub use grow::{Stage, grow, grow_part, grow_until, split_lay};
 pub use parameter::{Parameter, ParameterKind, parameters, set_parameter};
 pub use record::{
     Act, Courses, Direction, Finish, FinishAct, LetterName, Maker, Outside, PanelName, Placement, RoleRule, Shape,

@@ -1,6 +1,6 @@
 //! The grown shell: shared vertices, panels, edges, rims, seams.
 
-use crate::{LetterName, Maker, PanelName, Point, Role, Side, Sign, Vector, ZoneRef, finding::Finding};
+use crate::{LetterName, Maker, PanelName, Point, Role, Side, Sign, StepId, Vector, ZoneRef, finding::Finding};
 
 /// Stands for "no panel" and "no letter" in the packed arrays.
 pub const NONE: u32 = u32::MAX;
@@ -156,6 +156,10 @@ pub struct Course {
     pub number: i32,
     /// Its panels.
     pub panels: u32,
+    /// The step that laid it.
+    pub step: StepId,
+    /// Which pass of that step laid it: 1 for the first. A pass that makes no panel counts too, but is no course.
+    pub pass: u32,
 }
 
 /// An open V of a front as it stands.

@@ -8,7 +8,7 @@ use super::{
     command::{Command, Sender},
     derived::Counts,
     dialogs::Asked,
-    execute, menu,
+    execute, ladder, menu,
     panels::{self, Cx},
     panes::PaneAct,
     path_box, picture, prompts, search,
@@ -194,6 +194,8 @@ impl App {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
+        execute::keep_climbed(state);
+        state.derived.climb(state.view.ladder.climbed);
         let revision = state.history.revision();
         state
             .derived
@@ -241,6 +243,11 @@ impl eframe::App for App {
             .default_size(sizes.left)
             .size_range(sizes.left..=520.0)
             .show(ui, |ui| panels::left_ui(cx, ui));
+        let upright = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(8, sizes.margin));
+        Panel::left("ladder")
+            .frame(upright)
+            .exact_size(sizes.ladder)
+            .show(ui, |ui| ladder::ladder_ui(cx, ui, widgets));
         Panel::right("readouts and findings")
             .frame(side)
             .default_size(sizes.right)
@@ -253,6 +260,7 @@ impl eframe::App for App {
         CentralPanel::no_frame().frame(side).show(ui, |ui| {
             prompts::banners_ui(cx, ui);
             picture::picture_ui(cx, ui, widgets);
+            ladder::banner_ui(cx, ui, ui.max_rect());
         });
         search::search_ui(cx, ui, widgets);
         path_box::path_box_ui(cx, ui, widgets);

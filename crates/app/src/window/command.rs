@@ -9,7 +9,10 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand, zones::ZoneAct};
+use super::{
+    ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand,
+    zones::ZoneAct,
+};
 use crate::document::Design;
 
 /// A command.
@@ -49,7 +52,7 @@ pub enum Command {
     RemoveCourse,
     /// Lays until no V is left to fill.
     LayUntilStill,
-    /// Adds a step at the end.
+    /// Adds a step: at the end, or where one has climbed to.
     AddStep(Box<Step>),
     /// Replaces the step at this place.
     SetStep(usize, Box<Step>),
@@ -57,6 +60,8 @@ pub enum Command {
     MoveStep(usize, usize),
     /// Deletes the step at this place.
     DeleteStep(usize),
+    /// Climbs the ladder, adds a step there, mends one.
+    Ladder(LadderAct),
     /// Leaves this panel of the shell out, in a finishing step.
     LeaveOut(u32),
     /// Replaces the finishing step at this place.
@@ -177,6 +182,9 @@ impl Command {
             Self::AddCourse,
             Self::RemoveCourse,
             Self::LayUntilStill,
+        ]);
+        all.extend(LadderAct::LISTED.map(Self::Ladder));
+        all.extend([
             Self::FreePoints,
             Self::ShareGap,
             Self::FlipOutside,
@@ -225,7 +233,8 @@ impl Command {
             Self::AddCourse => ("Add a course", "Fills every open V of the live front once."),
             Self::RemoveCourse => ("Remove a course", "Takes the last course of the live front away."),
             Self::LayUntilStill => ("Lay until still", "Lays courses until no V is left to fill."),
-            Self::AddStep(_) => ("Add a step", "Adds a step at the end of the record."),
+            Self::Ladder(act) => return act.words(),
+            Self::AddStep(_) => ("Add a step", "Adds a step at the end, or where you have climbed to."),
             Self::SetStep(..) => ("Change a step", "Changes what a step does."),
             Self::MoveStep(..) => ("Move a step", "Moves a step up or down in the record."),
             Self::DeleteStep(_) => ("Delete a step", "Takes a step out of the record."),
@@ -313,6 +322,7 @@ impl Command {
             Self::Strip(StripAct::SwapRepeat) => (Modifiers::COMMAND, Key::R),
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
+            Self::Ladder(act) => act.keys()?,
             Self::Pane(act) => act.shortcut()?,
             Self::Zone(act) => act.shortcut()?,
             _ => return None,

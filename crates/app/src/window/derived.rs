@@ -19,6 +19,7 @@ use zonewright_painter::Scene;
 use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 
 use super::{
+    ladder::{Climbed, Ladder, Laid},
     path_place::PlacedPath,
     stages::{Coarse, Grow, Grown, Inspect, Inspected, grow_stages},
     strip::StripFront,
@@ -63,7 +64,11 @@ pub enum Pending {
 pub struct Derived {
     /// The revision that the shell and its readouts are about.
     pub revision: u64,
-    /// The shell.
+    /// How far up the ladder the shell is shown; none is the whole.
+    pub climbed: Option<Climbed>,
+    /// The ladder of the design as it is: its steps at once, the courses of the whole shell when that has grown.
+    pub ladder: Ladder,
+    /// The shell, up to where one has climbed.
     pub shell: Arc<Shell>,
     /// What growing found, and, once it is there, what the inspection found.
     pub findings: Vec<Finding>,
@@ -93,10 +98,17 @@ pub struct Derived {
     pub inspection: Option<Inspection>,
     /// How often each stage was worked out.
     pub counts: Counts,
-    /// The revision that was asked for last.
+    /// The revision that was asked for last, and how far up the ladder.
+    asked_for: (u64, Option<Climbed>),
+    /// How far up the ladder is to be shown.
+    climbing: Option<Climbed>,
+    /// What the whole shell laid, and the revision that it is about.
+    laid: (u64, Laid),
+    /// Each growth that is asked for has a ticket, the newest the highest: a part of the same revision is another shell. These
+    /// are the tickets of the growth asked for last, of the shell that is there, and of the parts.
     wanted: u64,
-    /// The revision that the parts are about.
-    parts_revision: u64,
+    ticket: u64,
+    parts_ticket: u64,
     /// Whether the shell was asked for while something was dragged.
     by_drag: bool,
     changed_at: f64,
@@ -110,6 +122,8 @@ impl Derived {
         let shell = Shell::default();
         Self {
             revision: 0,
+            climbed: None,
+            ladder: Ladder::default(),
             totals: totals(&shell),
             parts: Parts::new(&shell, &FamilyTolerance::default()),
             families: Vec::new(),
@@ -125,8 +139,12 @@ impl Derived {
             findings: Vec::new(),
             inspection: None,
             counts: Counts::default(),
+            asked_for: (0, None),
+            climbing: None,
+            laid: (0, Laid::default()),
             wanted: 0,
-            parts_revision: 0,
+            ticket: 0,
+            parts_ticket: 0,
             by_drag: false,
             changed_at: f64::NEG_INFINITY,
             asked: false,
@@ -136,19 +154,25 @@ impl Derived {
     /// What is still being worked out for the revision that was asked for last.
     #[must_use]
     pub const fn pending(&self) -> Option<Pending> {
-        if self.revision != self.wanted {
+        if self.ticket != self.wanted {
             Some(Pending::Shell)
-        } else if self.parts_revision != self.revision {
+        } else if self.parts_ticket != self.ticket {
             Some(Pending::Parts)
         } else {
             None
         }
     }
 
-    /// The revision that the parts are about.
+    /// Which growth is there. A part of the same revision is another one.
+    #[must_use]
+    pub const fn growth(&self) -> u64 {
+        self.ticket
+    }
+
+    /// Which growth the parts are of; another one has another number.
     #[must_use]
     pub const fn parts_revision(&self) -> u64 {
-        self.parts_revision
+        self.parts_ticket
     }
 
     /// Whether the shell was asked for while something was dragged.
@@ -157,52 +181,66 @@ impl Derived {
         self.by_drag
     }
 
-    /// Asks for what follows from the design when the revision is another one, and takes what is there. `now` is in seconds.
+    /// How far up the ladder is to be shown from now on; none is the whole.
+    pub const fn climb(&mut self, to: Option<Climbed>) {
+        self.climbing = to;
+    }
+
+    /// Asks for what follows from the design when the revision is another one, or the place on the ladder, and takes what is
+    /// there. `now` is in seconds.
     pub fn follow(&mut self, design: &Arc<Design>, revision: u64, dragging: bool, worker: &mut Worker, now: f64) {
         let until = Instant::now() + PATIENCE;
-        let fresh = revision != self.wanted;
+        let fresh = (revision, self.climbing) != self.asked_for;
         if fresh {
-            self.wanted = revision;
-            worker.growing.request(Grow {
-                revision,
-                design: Arc::clone(design),
-                dragging,
-            });
+            let job = self.ask(design, revision, dragging);
+            worker.growing.request(job);
         }
         while let Some(grown) = if fresh && self.pending().is_some() {
             worker.growing.poll_until(until)
         } else {
             worker.growing.poll()
         } {
-            self.take(grown, now);
+            self.take(grown, design, now);
+        }
+    }
+
+    fn ask(&mut self, design: &Arc<Design>, revision: u64, dragging: bool) -> Grow {
+        if revision != self.asked_for.0 {
+            // The steps are those of the design at once; the courses stay what they were until it has grown.
+            self.ladder = Ladder::of(&design.shape, &self.laid.1);
+        }
+        self.asked_for = (revision, self.climbing);
+        self.wanted += 1;
+        Grow {
+            ticket: self.wanted,
+            revision,
+            design: Arc::clone(design),
+            dragging,
+            climbed: self.climbing,
+            lift_mm: (self.laid.0 == revision).then_some(self.laid.1.lift_mm),
         }
     }
 
     /// Works out at once what is pending: for what has to be of the design as it is, at whatever time it takes.
     pub fn catch_up(&mut self, design: &Arc<Design>, revision: u64) {
-        if self.revision == revision && self.parts_revision == revision {
+        if self.asked_for == (revision, self.climbing) && self.pending().is_none() {
             return;
         }
-        self.wanted = revision;
         let now = self.changed_at;
-        let job = Grow {
-            revision,
-            design: Arc::clone(design),
-            dragging: false,
-        };
+        let job = self.ask(design, revision, false);
         grow_stages(job, &mut |grown| {
-            self.take(grown, now);
+            self.take(grown, design, now);
             true
         });
     }
 
-    fn take(&mut self, grown: Grown, now: f64) {
+    fn take(&mut self, grown: Grown, design: &Design, now: f64) {
         match grown {
-            // Of an older revision than what is there, when that was caught up with meanwhile.
-            Grown::Coarse(coarse) if coarse.revision > self.revision => self.take_coarse(*coarse, now),
-            Grown::Parts { revision, parts } if revision == self.revision && self.parts_revision != revision => {
+            // Of an older growth than what is there, when that was caught up with meanwhile.
+            Grown::Coarse(coarse) if coarse.ticket > self.ticket => self.take_coarse(*coarse, design, now),
+            Grown::Parts { ticket, parts } if ticket == self.ticket && self.parts_ticket != ticket => {
                 self.parts = *parts;
-                self.parts_revision = revision;
+                self.parts_ticket = ticket;
                 let families: Vec<u32> = self.parts.panels.iter().map(|p| p.family).collect();
                 if families != self.families {
                     self.families = families;
@@ -214,8 +252,14 @@ impl Derived {
         }
     }
 
-    fn take_coarse(&mut self, coarse: Coarse, now: f64) {
+    fn take_coarse(&mut self, coarse: Coarse, design: &Design, now: f64) {
+        if let Some(laid) = coarse.laid {
+            self.laid = (coarse.revision, laid);
+            self.ladder = Ladder::of(&design.shape, &self.laid.1);
+        }
+        self.ticket = coarse.ticket;
         self.revision = coarse.revision;
+        self.climbed = coarse.climbed;
         self.by_drag = coarse.dragging;
         self.totals = coarse.totals;
         self.open = coarse.open;
@@ -247,7 +291,7 @@ impl Derived {
                 self.asked = true;
                 self.counts.requested += 1;
                 worker.inspecting.request(Inspect {
-                    revision: self.revision,
+                    ticket: self.ticket,
                     shell: Arc::clone(&self.shell),
                     tolerances: design.shape.tolerances,
                 });
@@ -257,11 +301,11 @@ impl Derived {
         }
         while let Some(inspected) = worker.inspecting.poll() {
             match inspected {
-                Inspected::Order { revision, scene } if revision == self.revision => {
+                Inspected::Order { ticket, scene } if ticket == self.ticket => {
                     self.scene = *scene;
                     self.scene_revision += 1;
                 }
-                Inspected::Inspection { revision, inspection } if revision == self.revision => {
+                Inspected::Inspection { ticket, inspection } if ticket == self.ticket => {
                     self.findings.extend(inspection.findings(&design.shape.tolerances));
                     self.put_into_words();
                     self.inspection = Some(*inspection);
@@ -278,7 +322,7 @@ impl Derived {
         self.findings.sort_by_key(Finding::level);
         self.levels = levels(&self.findings, self.shell.panels.len());
         let first = self.findings.iter().take(MOST_SHOWN);
-        self.texts = if self.findings.is_empty() || self.parts_revision != self.revision {
+        self.texts = if self.findings.is_empty() || self.parts_ticket != self.ticket {
             Vec::new()
         } else {
             let writer = FindingWriter::new(&self.shell, &self.parts);

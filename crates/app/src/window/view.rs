@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown, strip::StripView, zones::ZoneView};
+use super::{command::Words, ladder::LadderView, readings::Shown, strip::StripView, zones::ZoneView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -44,6 +44,8 @@ pub struct ViewState {
     pub zones: ZoneView,
     /// What follows a dragged point.
     pub rule: DragRule,
+    /// How far one has climbed on the ladder, and which step's card is open.
+    pub ladder: LadderView,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
     /// What a readout shows in the picture.
@@ -65,6 +67,7 @@ impl Default for ViewState {
             panel: None,
             zones: ZoneView::default(),
             rule: DragRule::Neighbours,
+            ladder: LadderView::default(),
             finding: None,
             shown: None,
             dark: false,

@@ -5,6 +5,7 @@
 mod common;
 mod editing;
 mod import;
+mod ladder;
 mod panels;
 mod panes;
 mod readings;

@@ -32,7 +32,7 @@ fn place(harness: &Harness<'_, App>, at: usize, of: zonewright_geometry::Point) 
 
 /// A place of a pane where there is only ground.
 fn ground(harness: &Harness<'_, App>, at: usize) -> egui::Pos2 {
-    harness.get_by_label(NAMES[at]).rect().right_bottom() - egui::vec2(12.0, 12.0)
+    harness.get_by_label(NAMES[at]).rect().right_bottom() - egui::vec2(4.0, 4.0)
 }
 
 #[test]

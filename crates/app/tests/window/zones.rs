@@ -378,7 +378,7 @@ fn the_pointer_over_an_edge_names_its_zone() {
 
 /// Folds the sections above the zones away, so that the zones are seen.
 fn show_zones(harness: &mut Harness<'_, App>) {
-    for section in ["Start", "Path", "Steps", "Directions in hand"] {
+    for section in ["Start", "Path", "Directions in hand"] {
         harness.get_by_role_and_label(Role::DisclosureTriangle, section).click();
         harness.run();
     }

@@ -2,6 +2,7 @@
 
 mod file;
 mod finish;
+mod ladder;
 mod panes;
 mod path;
 mod readings;
@@ -14,6 +15,7 @@ mod zones;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
+pub(crate) use ladder::keep_climbed;
 pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use path::moved_path;
 
@@ -50,6 +52,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetStep(at, step) => steps::set(state, at, *step),
         Command::MoveStep(from, to) => steps::shift(state, from, to),
         Command::DeleteStep(at) => steps::delete(state, at),
+        Command::Ladder(act) => ladder::run(state, act),
         Command::LeaveOut(panel) => finish::leave_out(state, panel),
         Command::SetFinish(at, step) => finish::set(state, at, *step),
         Command::PutBack(at, panel) => finish::put_back(state, at, panel),

@@ -92,7 +92,8 @@ pub(crate) fn fit_when_pending(state: &mut State) {
 /// Fits every camera again when the shell's box is another one and the user has left that camera alone. While something is
 /// dragged, and for what it leaves behind, the cameras stay: a dragged point must stay under the pointer.
 pub(crate) fn refit(state: &mut State, dragging: bool) {
-    if state.derived.pending() == Some(Pending::Shell) {
+    // A part of the shell is looked at from where the whole was: climbing must not move the picture.
+    if state.view.ladder.climbed.is_some() || state.derived.pending() == Some(Pending::Shell) {
         return;
     }
     let bounds = bounds(state);

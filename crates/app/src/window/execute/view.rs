@@ -56,10 +56,15 @@ fn dismiss(state: &mut State) {
     if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
         return;
     }
-    if state.message.take().is_none() {
+    if state.message.take().is_some() {
+        return;
+    }
+    // One looks at the whole again before anything is let go.
+    if state.view.ladder.climbed.take().is_none() {
         state.view.finding = None;
         state.view.shown = None;
         state.view.point = None;
         state.view.panel = None;
+        state.view.ladder.picked = None;
     }
 }
