@@ -229,6 +229,7 @@ impl App {
     fn follow(&mut self, ctx: &egui::Context) {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
+        execute::follow_fit(state);
         let design = std::sync::Arc::clone(state.design());
         execute::keep_climbed(state);
         state.derived.climb(state.view.ladder.climbed);

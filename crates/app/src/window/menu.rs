@@ -5,6 +5,7 @@ use zonewright_painter::{Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
+    backdrop::BackdropAct,
     command::Command,
     kinds,
     ladder::LadderAct,
@@ -24,7 +25,15 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             });
             items(cx, ui, [Command::Open]);
             safe::recent_ui(cx, ui);
-            items(cx, ui, [Command::OpenSample, Command::Import]);
+            items(
+                cx,
+                ui,
+                [
+                    Command::OpenSample,
+                    Command::Import,
+                    Command::Backdrop(BackdropAct::Load),
+                ],
+            );
             ui.separator();
             items(cx, ui, [Command::Save, Command::SaveAs, Command::Export]);
             ui.separator();

@@ -13,11 +13,13 @@ pub(in super::super) enum Dropped {
     Design(PathBuf),
     /// A path to import.
     Path(PathBuf),
+    /// A form to load as the backdrop.
+    Backdrop(PathBuf),
     /// Nothing that can be used; the text says why and what to do.
     Refused(String),
 }
 
-const WANTED: &str = "one design (.ron) or one path (.csv, .dxf, .svg)";
+const WANTED: &str = "one design (.ron), one path (.csv, .dxf, .svg) or one form (.obj, .stl)";
 
 /// Decides what dropped files are taken for.
 pub(in super::super) fn what(files: &[PathBuf]) -> Dropped {
@@ -38,6 +40,8 @@ pub(in super::super) fn what(files: &[PathBuf]) -> Dropped {
         Dropped::Design(file.clone())
     } else if fits_ending(file, Asked::Import.endings()) {
         Dropped::Path(file.clone())
+    } else if fits_ending(file, Asked::Backdrop.endings()) {
+        Dropped::Backdrop(file.clone())
     } else {
         refused(format!(
             "{} is neither a design nor a path that can be imported.",
@@ -62,6 +66,10 @@ pub(in super::super) fn hover_ui(cx: Cx<'_>, ui: &Ui) {
         Dropped::Design(file) => (format!("Drop to open {}", name(&file)), colours.accent()),
         Dropped::Path(file) => (
             format!("Drop to make the path in {} the start", name(&file)),
+            colours.accent(),
+        ),
+        Dropped::Backdrop(file) => (
+            format!("Drop to load {} as the backdrop", name(&file)),
             colours.accent(),
         ),
         Dropped::Refused(why) => (why, colours.stop()),
@@ -89,6 +97,9 @@ mod tests {
         assert!(matches!(what(&paths(&["A.RON"])), Dropped::Design(_)));
         for name in ["a.csv", "a.Dxf", "a.svg"] {
             assert!(matches!(what(&paths(&[name])), Dropped::Path(_)), "{name}");
+        }
+        for name in ["a.obj", "a.STL"] {
+            assert!(matches!(what(&paths(&[name])), Dropped::Backdrop(_)), "{name}");
         }
         for (files, part) in [
             (paths(&["a.pdf"]), "a.pdf is neither"),
