@@ -296,8 +296,8 @@ mod tests {
 
     #[test]
     fn a_long_session_on_a_long_path_holds_little_and_comes_back_exactly() {
-        const EDGES: u32 = 2000;
-        const STEPS: u32 = 300;
+        const EDGES: u32 = 400;
+        const STEPS: u32 = 100;
         let first = long_path(EDGES);
         let mut history = History::new(first.clone(), true);
         let open = 8 * crate::document::weight(&first);

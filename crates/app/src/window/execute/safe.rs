@@ -139,7 +139,7 @@ fn drop_files(state: &mut State, files: &[std::path::PathBuf]) {
     match what(files) {
         Dropped::Design(path) => file::run(state, Command::OpenPath(path)),
         Dropped::Path(path) => super::shape::import_path(state, &path),
-        Dropped::Backdrop(path) => super::backdrop::run(state, BackdropAct::LoadPath(path)),
+        Dropped::Backdrop(path) => super::run(state, Command::Backdrop(BackdropAct::LoadPath(path))),
         Dropped::Refused(text) => state.complain(text),
     }
 }

@@ -13,13 +13,13 @@ pub(in super::super) enum Dropped {
     Design(PathBuf),
     /// A path to import.
     Path(PathBuf),
-    /// A mesh to stand behind the shell.
+    /// A form to load as the backdrop.
     Backdrop(PathBuf),
     /// Nothing that can be used; the text says why and what to do.
     Refused(String),
 }
 
-const WANTED: &str = "one design (.ron), one path (.csv, .dxf, .svg) or one mesh for a backdrop (.obj, .stl)";
+const WANTED: &str = "one design (.ron), one path (.csv, .dxf, .svg) or one form (.obj, .stl)";
 
 /// Decides what dropped files are taken for.
 pub(in super::super) fn what(files: &[PathBuf]) -> Dropped {
