@@ -7,8 +7,8 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, readings::Remembered,
-    solving::Solving, theme::Theme, view::ViewState, worker::Worker,
+    backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes,
+    readings::Remembered, solving::Solving, theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -32,6 +32,8 @@ pub struct State {
     pub panes: Panes,
     /// What follows from the design.
     pub derived: Derived,
+    /// What is done with the backdrop.
+    pub backdrop: BackdropState,
     /// Slow stages.
     pub worker: Worker,
     /// Questions to the system.
@@ -68,6 +70,7 @@ impl State {
             view: ViewState::default(),
             panes: Panes::default(),
             derived: Derived::new(),
+            backdrop: BackdropState::default(),
             worker,
             dialogs: Dialogs::default(),
             message: None,
