@@ -79,7 +79,11 @@ fn pictures_of_the_corpus_agree_with_a_ray_cast_to_a_fiftieth_of_a_percent() {
             assert!(agreement.holds(), "{name} {view}: {agreement:?}");
             covered += agreement.covered;
         }
-        assert!(10_000 < covered, "{name} shows too little to say anything: {covered}");
+        // Below that a single wrong pixel in all views together would be more than is allowed.
+        assert!(
+            ray_cast::ONE_IN < covered,
+            "{name} shows too little to say anything: {covered}"
+        );
     }
 }
 
