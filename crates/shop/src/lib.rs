@@ -10,6 +10,7 @@ pub mod lists;
 pub mod marks;
 pub mod models;
 pub mod parts;
+pub mod spread;
 #[cfg(test)]
 mod test_shells;
 pub mod text;

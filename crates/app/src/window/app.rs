@@ -224,7 +224,7 @@ impl eframe::App for App {
             .frame(side)
             .default_size(sizes.right)
             .size_range(220.0..=480.0)
-            .show(ui, |ui| panels::right_ui(cx, ui));
+            .show(ui, |ui| panels::right_ui(cx, ui, widgets));
         Panel::bottom("strip")
             .frame(side)
             .exact_size(sizes.strip)

@@ -9,7 +9,7 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, view::Hand};
+use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, view::Hand};
 use crate::document::Design;
 
 /// A command.
@@ -119,6 +119,8 @@ pub enum Command {
     SelectPoint(Option<usize>),
     /// Picks a panel of the shell; none picks nothing.
     SelectPanel(Option<u32>),
+    /// What the readouts are told.
+    Readings(ReadingAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -187,6 +189,9 @@ impl Command {
             Self::HiddenEdges,
             Self::SwapUnits,
             Self::SwapSide,
+            Self::Readings(ReadingAct::Remember),
+            Self::Readings(ReadingAct::GoBack),
+            Self::Readings(ReadingAct::Forget),
             Self::SwapTheme,
             Self::Find,
         ]);
@@ -261,6 +266,7 @@ impl Command {
             Self::ShowFinding(_) => ("Show a finding", "Marks where a finding is."),
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
+            Self::Readings(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

@@ -7,8 +7,8 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, theme::Theme,
-    view::ViewState, worker::Worker,
+    command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, readings::Remembered,
+    theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -50,6 +50,8 @@ pub struct State {
     pub closing: bool,
     /// Where the session is remembered; none in tests that do not ask for it.
     pub session: Option<PathBuf>,
+    /// The state that the readouts are compared with.
+    pub remembered: Option<Remembered>,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -73,6 +75,7 @@ impl State {
             search: None,
             closing: false,
             session: None,
+            remembered: None,
             theme: Theme::bundled(),
         }
     }

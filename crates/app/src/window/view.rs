@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::command::Words;
+use super::{command::Words, readings::Shown};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -42,6 +42,8 @@ pub struct ViewState {
     pub rule: DragRule,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
+    /// What a readout shows in the picture.
+    pub shown: Option<Shown>,
     /// Whether the look is dark.
     pub dark: bool,
 }
@@ -58,6 +60,7 @@ impl Default for ViewState {
             panel: None,
             rule: DragRule::Neighbours,
             finding: None,
+            shown: None,
             dark: false,
         }
     }

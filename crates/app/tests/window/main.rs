@@ -7,4 +7,5 @@ mod editing;
 mod import;
 mod panels;
 mod panes;
+mod readings;
 mod view;

@@ -115,7 +115,7 @@ fn one_of_two_doubled_panels_is_left_out_by_its_finding() {
     let at = findings.iter().position(|f| f.code == Code::DoubledPanel).unwrap();
     let (count, all) = (doubled(&harness), panels(&harness));
     harness
-        .get_by_label(&format!("Leave one panel of finding {} out", at + 1))
+        .get_by_label(&format!("Leave one out: finding {}", at + 1))
         .click();
     harness.run();
     assert_eq!((doubled(&harness), panels(&harness)), (count - 1, all - 1));

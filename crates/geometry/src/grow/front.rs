@@ -1,5 +1,7 @@
 //! A front: the rim that grows, as a word.
 
+use std::collections::BTreeMap;
+
 use super::{
     alphabet::{Alphabet, Meeting, role_on},
     mesh::Mesh,
@@ -322,4 +324,17 @@ pub fn open_vs(shell: &Shell, side: Side) -> Vec<crate::OpenV> {
         });
     }
     found
+}
+
+/// Whether a front as it stands can be filled to nothing: it is closed, has letters, and its zones cancel.
+#[must_use]
+pub fn can_close(shell: &Shell, side: Side) -> bool {
+    let front = &shell.fronts[usize::from(side == Side::Aft)];
+    let mut counts: BTreeMap<u32, i64> = BTreeMap::new();
+    for letter in front.letters.iter().map(|l| &shell.letters[l.letter as usize]) {
+        let zone = &shell.zones[letter.zone as usize];
+        let along = (letter.sign == crate::Sign::Plus) != zone.reversed;
+        *counts.entry(zone.counts_as).or_default() += if along { 1 } else { -1 };
+    }
+    front.closed && !counts.is_empty() && counts.values().all(|count| *count == 0)
 }

@@ -26,7 +26,7 @@ mod unite;
 use alphabet::Alphabet;
 pub use alphabet::PARALLEL_SINE;
 use front::Front;
-pub use front::open_vs;
+pub use front::{can_close, open_vs};
 use lay::Laid;
 pub use mesh::MAX_PANELS;
 use mesh::Mesh;

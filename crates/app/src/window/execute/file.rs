@@ -100,6 +100,8 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     state.view.point = None;
     state.view.panel = None;
     state.view.finding = None;
+    state.view.shown = None;
+    state.remembered = None;
     state.panes.start_afresh();
     remember(state);
     state.say(format!("{} is open", state.file_name()));

@@ -4,6 +4,7 @@ mod file;
 mod finish;
 mod panes;
 mod path;
+mod readings;
 mod shape;
 mod splice;
 mod steps;
@@ -64,6 +65,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FlipOutside => shape::flip_outside(state),
         Command::SetUnits(units) => shape::set_units(state, units),
         Command::SwapUnits => shape::swap_units(state),
+        Command::Readings(act) => readings::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {
                 state.dialogs.open_own(asked);

@@ -26,7 +26,10 @@ pub(super) fn run(state: &mut State, command: Command) {
                 Side::Aft => Side::Fore,
             };
         }
-        Command::ShowFinding(finding) => view.finding = finding,
+        Command::ShowFinding(finding) => {
+            view.finding = finding;
+            view.shown = None;
+        }
         Command::SelectPoint(point) => {
             view.point = point;
             view.panel = None;
@@ -52,6 +55,7 @@ fn dismiss(state: &mut State) {
     }
     if state.message.take().is_none() {
         state.view.finding = None;
+        state.view.shown = None;
         state.view.point = None;
         state.view.panel = None;
     }

@@ -1,10 +1,14 @@
 //! What is to be said about the design; a click shows the place.
 
 use egui::{RichText, Ui};
-use zonewright_geometry::{Code, Finding, Level, Place};
+use zonewright_geometry::{Finding, Level, Place};
 
 use super::Cx;
-use crate::window::{command::Command, derived::MOST_SHOWN};
+use crate::window::{
+    command::Command,
+    derived::MOST_SHOWN,
+    remedies::{next_steps, remedy_of},
+};
 
 /// Draws the list of findings.
 pub(super) fn findings_ui(cx: Cx<'_>, ui: &mut Ui) {
@@ -20,6 +24,18 @@ pub(super) fn findings_ui(cx: Cx<'_>, ui: &mut Ui) {
     }
     if findings.len() > MOST_SHOWN {
         ui.weak(format!("and {} more", findings.len() - MOST_SHOWN));
+    }
+    let next = next_steps(cx.state);
+    if !next.is_empty() {
+        ui.horizontal_wrapped(|ui| {
+            ui.weak("Could be done next:");
+            for remedy in next {
+                let hint = "Adds this step to the live front.";
+                if ui.small_button(remedy.text).on_hover_text(hint).clicked() {
+                    cx.tx.send(remedy.command);
+                }
+            }
+        });
     }
 }
 
@@ -45,25 +61,14 @@ fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, finding: &Finding) {
                 cx.tx.send(Command::ShowFinding((!shown).then_some(at)));
             }
         }
-        if let Some(panel) = spare(finding) {
-            let name = format!("Leave one panel of finding {} out", at + 1);
-            if super::small(ui, true, "Leave one out", &name) {
-                cx.tx.send(Command::LeaveOut(panel));
+        if let Some(remedy) = remedy_of(cx.state, finding) {
+            let name = format!("{}: finding {}", remedy.text, at + 1);
+            if super::small(ui, true, remedy.text, &name) {
+                cx.tx.send(remedy.command);
             }
         }
         ui.label(said);
     });
-}
-
-/// The panel to leave out of two that lie on the same place: the later one.
-fn spare(finding: &Finding) -> Option<u32> {
-    match (&finding.code, &finding.place) {
-        (Code::DoubledPanel, Place::Panels(panels)) => match panels[..] {
-            [_, later] => Some(later),
-            _ => None,
-        },
-        _ => None,
-    }
 }
 
 /// Whether a finding has a place that can be shown in the picture.

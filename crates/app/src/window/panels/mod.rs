@@ -8,6 +8,7 @@ mod panel_panel;
 mod path_table;
 mod placement_panel;
 mod readouts;
+mod spread_panel;
 mod star_fields;
 mod start_fields;
 mod start_panel;
@@ -16,7 +17,9 @@ mod steps_panel;
 
 use egui::{ScrollArea, Ui};
 
-use super::{command::Sender, state::State};
+pub(super) use spread_panel::SpreadCache;
+
+use super::{command::Sender, state::State, widgets::Widgets};
 
 /// What a panel reads, and where it sends commands.
 #[derive(Clone, Copy, Debug)]
@@ -45,7 +48,7 @@ pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
 }
 
 /// The right panel: the picked panel, readouts and findings.
-pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     ScrollArea::vertical()
         .auto_shrink(false)
         .id_salt("right")
@@ -54,6 +57,7 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui) {
                 section(ui, "Panel", true, |ui| panel_panel::panel_ui(cx, ui, *panel));
             }
             section(ui, "Readouts", true, |ui| readouts::readouts_ui(cx, ui));
+            section(ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
             section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
         });
 }

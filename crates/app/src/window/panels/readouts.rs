@@ -1,17 +1,100 @@
-//! The readouts, live with every change.
+//! The readouts, live with every change, beside what they were when a state was remembered.
 
-use egui::{Align, Label, Layout, Role, Ui, WidgetInfo};
+use egui::{Align, Button, Label, Layout, Role, Ui, WidgetInfo};
 use zonewright_geometry::measure::Range;
-use zonewright_shop::text;
+use zonewright_shop::spread::Measure;
 
 use super::Cx;
+use crate::window::{
+    command::Command,
+    readings::{End, Reading, ReadingAct, Shown, Value, measured, readings},
+};
 
 /// Draws the readouts.
 pub(super) fn readouts_ui(cx: Cx<'_>, ui: &mut Ui) {
-    ui.spacing_mut().item_spacing.y = 3.0;
-    for (name, value) in rows(cx) {
-        readout(ui, name, &value);
+    ui.scope(|ui| {
+        ui.spacing_mut().item_spacing.y = 3.0;
+        for reading in readings(&cx.state.derived) {
+            one(cx, ui, &reading);
+        }
+    });
+    compare_ui(cx, ui);
+}
+
+fn one(cx: Cx<'_>, ui: &mut Ui, reading: &Reading) {
+    let units = cx.state.units();
+    match &reading.value {
+        Value::Range(measure, Some(range)) if !reads_one(*measure, range, cx) => {
+            range_ui(cx, ui, reading.name, *measure, range);
+        }
+        value => readout(ui, reading.name, &value.text(units)),
     }
+    let then = cx.state.remembered.as_ref().and_then(|r| r.reading(reading.name));
+    if let Some(change) = then.and_then(|then| reading.value.since(&then.value, units)) {
+        ui.with_layout(Layout::right_to_left(Align::Min), |ui| {
+            let name = format!("{} since remembered: {change}", reading.name);
+            let shown =
+                ui.add(Label::new(egui::RichText::new(change).small().color(cx.state.colours().accent())).truncate());
+            shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, &name));
+        });
+    }
+}
+
+fn reads_one(measure: Measure, range: &Range, cx: Cx<'_>) -> bool {
+    let units = cx.state.units();
+    measured(measure, range.least, units) == measured(measure, range.most, units)
+}
+
+/// The smallest and the largest, each a button that shows where it is.
+fn range_ui(cx: Cx<'_>, ui: &mut Ui, name: &'static str, measure: Measure, range: &Range) {
+    let units = cx.state.units();
+    ui.horizontal(|ui| {
+        ui.weak(name);
+        ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
+            ui.spacing_mut().item_spacing.x = 4.0;
+            ui.spacing_mut().button_padding = egui::vec2(3.0, 0.0);
+            for (end, word, value) in [
+                (End::Most, "largest", range.most),
+                (End::Least, "smallest", range.least),
+            ] {
+                let shown = Shown::Extreme(measure, end);
+                let is_shown = cx.state.view.shown == Some(shown);
+                let text = measured(measure, value, units);
+                let button = ui.add(Button::selectable(is_shown, &text).min_size(egui::vec2(0.0, 0.0)));
+                let button = button.on_hover_text("Click to show where it is.");
+                let accessible = format!("{name}, {word}: {text}");
+                button.widget_info(|| WidgetInfo::selected(Role::Button, true, is_shown, &accessible));
+                if button.clicked() {
+                    let show = (!is_shown).then_some(shown);
+                    cx.tx.send(Command::Readings(ReadingAct::Show(show)));
+                }
+                if end == End::Most {
+                    ui.weak("–");
+                }
+            }
+        });
+    });
+}
+
+/// Remembering a state, and what can be done with a remembered one.
+fn compare_ui(cx: Cx<'_>, ui: &mut Ui) {
+    let button = |ui: &mut Ui, text: &str, act: ReadingAct| {
+        let words = act.words();
+        let button = ui.small_button(text).on_hover_text(words.hint);
+        if button.accessible_name(words.name).clicked() {
+            cx.tx.send(Command::Readings(act));
+        }
+    };
+    ui.horizontal_wrapped(|ui| {
+        if cx.state.remembered.is_some() {
+            ui.weak("Compared with a remembered state");
+            button(ui, "Go back to it", ReadingAct::GoBack);
+            button(ui, "Remember this one instead", ReadingAct::Remember);
+            button(ui, "Forget it", ReadingAct::Forget);
+        } else {
+            button(ui, "Remember this state", ReadingAct::Remember);
+        }
+    });
 }
 
 /// One name and its value.
@@ -24,52 +107,4 @@ pub(super) fn readout(ui: &mut Ui, name: &str, value: &str) {
             shown.widget_info(|| WidgetInfo::labeled(Role::Label, true, format!("{name}: {value}")));
         });
     });
-}
-
-/// Names and values of all readouts, as they are shown.
-pub(super) fn rows(cx: Cx<'_>) -> Vec<(&'static str, String)> {
-    let derived = &cx.state.derived;
-    let (totals, units) = (&derived.totals, cx.state.units());
-    let range = |range: Option<Range>, show: &dyn Fn(f64) -> String| match range {
-        Some(r) if show(r.least) == show(r.most) => show(r.least),
-        Some(r) => format!("{} – {}", show(r.least), show(r.most)),
-        None => "–".to_owned(),
-    };
-    let degrees = |radians: f64| text::degrees(radians.to_degrees(), 2);
-    let mut rows = vec![
-        ("Panels", text::count(totals.panels)),
-        ("Families", text::count(derived.parts.families.len())),
-        ("Bevels", text::count(derived.parts.distinct_bevels)),
-        ("Vertices", text::count(totals.vertices)),
-        ("Edges", text::count(totals.edges)),
-        ("Open edges", text::count(totals.open_edges)),
-        ("Rims", text::count(totals.rims)),
-        ("Zones", text::count(totals.zones)),
-        ("Area", text::square_metres(totals.area_mm2)),
-        ("Sides", range(totals.lengths, &|mm| units.length(mm))),
-        ("Acute angles", range(totals.acute_angles, &degrees)),
-        ("Dihedrals", range(totals.dihedrals, &degrees)),
-        ("Size x", units.length(totals.size.x)),
-        ("Size y", units.length(totals.size.y)),
-        ("Size z", units.length(totals.size.z)),
-    ];
-    match volume(cx) {
-        Some(mm3) => rows.push(("Volume", text::cubic_metres(mm3))),
-        None if totals.open_edges > 0 => rows.push(("Volume", "open".to_owned())),
-        None => rows.push(("Volume", "–".to_owned())),
-    }
-    if let Some(gap) = derived.shell.closing_gap {
-        rows.push(("Closing gap", units.length(gap)));
-    }
-    rows
-}
-
-/// The volume, unless the inspection found panels that cross or lie on each other.
-fn volume(cx: Cx<'_>) -> Option<f64> {
-    let derived = &cx.state.derived;
-    let crossed = derived
-        .inspection
-        .as_ref()
-        .is_some_and(|i| !i.crossings.is_empty() || !i.doubled.is_empty());
-    derived.totals.volume_mm3.filter(|_| !crossed)
 }

@@ -23,8 +23,11 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
         let outline = [&at[..], &at[..1]].concat();
         marks.push(line(outline, 1.5, Tone::Preview));
     }
+    if let Some(place) = state.view.shown.and_then(|shown| shown.place(&state.derived)) {
+        place_marks(&state.derived.shell, &place, Tone::Selection, &mut marks);
+    }
     if let Some(finding) = state.view.finding.and_then(|at| state.derived.findings.get(at)) {
-        finding_marks(
+        place_marks(
             &state.derived.shell,
             &finding.place,
             Tone::Finding(finding.level()),
@@ -104,7 +107,7 @@ fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     marks.push(mark(fresh, MarkKind::Dot { radius: 4.0 }, Tone::Preview));
 }
 
-fn finding_marks(shell: &Shell, place: &Place, tone: Tone, marks: &mut Vec<Mark>) {
+fn place_marks(shell: &Shell, place: &Place, tone: Tone, marks: &mut Vec<Mark>) {
     let points = |of: &[u32]| -> Vec<Point> {
         of.iter()
             .take(MOST_MARKS)
