@@ -9,7 +9,7 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, view::Hand};
+use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, selection::SelectAct, view::Hand};
 use crate::document::Design;
 
 /// A command.
@@ -91,6 +91,8 @@ pub enum Command {
     Pan(egui::Vec2),
     /// Zooms by a factor, keeping the place under a point of the picture.
     Zoom(egui::Pos2, f32),
+    /// Picks things, measures between them.
+    Select(SelectAct),
     /// Does something to the views.
     Pane(PaneAct),
     /// Looks from this side.
@@ -196,6 +198,7 @@ impl Command {
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
+        all.extend(SelectAct::listed().map(Self::Select));
         all
     }
 
@@ -249,6 +252,7 @@ impl Command {
             Self::Pan(_) => ("Move the picture", "Moves the camera along the screen."),
             Self::Zoom(..) => ("Zoom", "Brings the shell nearer or farther."),
             Self::Pane(act) => return act.words(),
+            Self::Select(act) => return act.words(),
             Self::Look(view) => return super::view::look_words(*view),
             Self::SetProjection(Projection::Perspective) => ("Perspective", "Draws far things smaller."),
             Self::SetProjection(Projection::Parallel) => ("Parallel", "Draws equal lengths equal."),
@@ -305,6 +309,7 @@ impl Command {
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
             Self::Pane(act) => act.shortcut()?,
+            Self::Select(act) => act.shortcut()?,
             _ => return None,
         };
         Some(KeyboardShortcut::new(modifiers, key))

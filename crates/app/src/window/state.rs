@@ -30,6 +30,8 @@ pub struct State {
     pub view: ViewState,
     /// From where one looks, in each of the views.
     pub panes: Panes,
+    /// The revision that what is picked was found again in.
+    pub(crate) followed: u64,
     /// What follows from the design.
     pub derived: Derived,
     /// Slow stages.
@@ -65,6 +67,7 @@ impl State {
             path,
             view: ViewState::default(),
             panes: Panes::default(),
+            followed: 0,
             derived: Derived::new(),
             worker,
             dialogs: Dialogs::default(),

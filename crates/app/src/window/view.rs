@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown};
+use super::{command::Words, readings::Shown, selection::Selection};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -38,6 +38,8 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
     pub panel: Option<(u32, PanelName)>,
+    /// The picked vertex or edge, and what is measured.
+    pub selection: Selection,
     /// What follows a dragged point.
     pub rule: DragRule,
     /// The finding that is shown in the picture.
@@ -58,6 +60,7 @@ impl Default for ViewState {
             hand: Hand::default(),
             point: None,
             panel: None,
+            selection: Selection::default(),
             rule: DragRule::Neighbours,
             finding: None,
             shown: None,

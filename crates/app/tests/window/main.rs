@@ -8,4 +8,5 @@ mod import;
 mod panels;
 mod panes;
 mod readings;
+mod selection;
 mod view;

@@ -99,6 +99,7 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     state.message = None;
     state.view.point = None;
     state.view.panel = None;
+    state.view.selection = Default::default();
     state.view.finding = None;
     state.view.shown = None;
     state.remembered = None;

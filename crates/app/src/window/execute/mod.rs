@@ -5,6 +5,7 @@ mod finish;
 mod panes;
 mod path;
 mod readings;
+mod select;
 mod shape;
 mod splice;
 mod steps;
@@ -13,6 +14,7 @@ mod view;
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use panes::{fit_when_pending, refit};
+pub(crate) use select::picked;
 pub(crate) use splice::fresh_splice;
 
 use super::{command::Command, state::State};
@@ -71,6 +73,7 @@ pub(super) fn run(state: &mut State, command: Command) {
                 state.dialogs.open_own(asked);
             }
         }
+        Command::Select(act) => select::run(state, act),
         other => view::run(state, other),
     }
 }

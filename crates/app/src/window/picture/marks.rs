@@ -15,6 +15,7 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     panel_marks(state, &mut marks);
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
+    super::select_marks::select_marks(state, &mut marks);
     if let Some((side, index)) = over
         && let Some(v) = state.derived.open_on(side).get(index)
     {
@@ -37,11 +38,11 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     marks
 }
 
-const fn mark(at: Vec<Point>, kind: MarkKind, tone: Tone) -> Mark {
+pub(super) const fn mark(at: Vec<Point>, kind: MarkKind, tone: Tone) -> Mark {
     Mark { at, kind, tone }
 }
 
-const fn line(at: Vec<Point>, width: f32, tone: Tone) -> Mark {
+pub(super) const fn line(at: Vec<Point>, width: f32, tone: Tone) -> Mark {
     mark(at, MarkKind::Line { width, dashed: false }, tone)
 }
 
