@@ -40,7 +40,9 @@ pub(super) fn selection_ui(cx: Cx<'_>, ui: &mut Ui) {
 fn picked_ui(cx: Cx<'_>, ui: &mut Ui, thing: &Thing) {
     let derived = &cx.state.derived;
     let Some(index) = thing.index(derived) else { return };
-    readout(ui, "Picked", &thing.title(derived));
+    if !matches!(thing, Thing::Panel(_)) {
+        readout(ui, "Picked", &thing.title(derived));
+    }
     match thing {
         Thing::Point(at) => point_ui(cx, ui, *at),
         Thing::Vertex(_) => vertex_ui(cx, ui, index),
@@ -56,7 +58,7 @@ fn picked_ui(cx: Cx<'_>, ui: &mut Ui, thing: &Thing) {
     if let Some(from) = &cx.state.view.selection.from {
         ui.weak(format!(
             "Measuring from {}: click what to measure to, or step there by key and press Enter.",
-            from.title(derived).to_lowercase()
+            from.title(derived)
         ));
     }
 }
@@ -165,7 +167,7 @@ fn zone(cx: Cx<'_>, panel: u32, corner: u32) -> Option<usize> {
 
 fn dimension_ui(cx: Cx<'_>, ui: &mut Ui, at: usize, dimension: &Dimension) {
     let [a, b] = dimension.ends.each_ref().map(|t| t.title(&cx.state.derived));
-    let name = format!("{a} to {}", b.to_lowercase());
+    let name = format!("{a} to {b}");
     let found = measured(cx.state, dimension);
     let value = found.map_or_else(|| "gone for now".to_owned(), |f| dimension_text(cx.state, &f));
     ui.horizontal(|ui| {

@@ -157,7 +157,9 @@ fn hover_ui(cx: Cx<'_>, at: usize, rect: Rect, painter: &egui::Painter, widgets:
     let nothing = Shell::default();
     let camera = &cx.state.panes.pane(at).camera;
     let picture = Scene::quick(&nothing).picture(&nothing, camera, &look, &Tints::default(), &marks);
-    with_egui::paint(&picture, painter, rect);
+    // Without the ground that a whole picture has: it would cover what is there.
+    let mesh = with_egui::mesh(&picture, rect.min.to_vec2());
+    painter.add(egui::Shape::mesh(mesh));
 }
 
 fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
