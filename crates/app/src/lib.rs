@@ -2,6 +2,7 @@
 
 pub mod command_line;
 pub mod document;
+pub mod fitting;
 pub mod import;
 pub mod report;
 pub mod window;

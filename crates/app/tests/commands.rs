@@ -332,3 +332,73 @@ fn imports_are_embedded() {
             .contains("own(300.0, 0.0, 200.0)")
     );
 }
+
+/// A paraboloid of 4 by 3 m, which is a translation surface: its height is a part of x and a part of y, added (derived).
+fn paraboloid(scale: f64) -> String {
+    let mut text = String::new();
+    let height = |share: f64| 900.0 * (1.0 - (2.0 * share - 1.0).powi(2));
+    for j in 0..=6 {
+        for i in 0..=8 {
+            let (u, v) = (f64::from(i) / 8.0, f64::from(j) / 6.0);
+            let place = [4000.0 * u, 3000.0 * v, height(u) + height(v)].map(|c| c * scale);
+            text.push_str(&format!("v {} {} {}\n", place[0], place[1], place[2]));
+        }
+    }
+    for j in 0..6 {
+        for i in 0..8 {
+            let a = 9 * j + i + 1;
+            text.push_str(&format!("f {a} {} {} {}\n", a + 1, a + 10, a + 9));
+        }
+    }
+    text
+}
+
+#[test]
+fn fit_brings_a_design_to_a_mesh_and_prints_its_history() {
+    let folder = tempfile::tempdir().unwrap();
+    let at = folder.path();
+    done(at, "start polar --ribs 8 -o a.ron");
+    fs::write(at.join("a.obj"), paraboloid(0.001)).unwrap();
+    let history = done(
+        at,
+        "fit a.ron --target a.obj --unit m --zig 8 --zag 6 --smoothing 0 -o out.ron",
+    );
+    let lines: Vec<&str> = history.lines().collect();
+    assert_eq!(lines[0], "iteration,rms_mm,largest_mm");
+    let largest: f64 = lines[1].split(',').nth(2).unwrap().parse().unwrap();
+    assert!(largest < 1e-5, "{history}");
+    assert!(history.contains("# settled"));
+    let report: Value = serde_json::from_str(&done(at, "report out.ron --json")).unwrap();
+    assert_eq!(report["panels"], 48);
+    let size = report["size_mm"].as_array().unwrap();
+    for (size, want) in size.iter().zip([4000.0, 3000.0, 1800.0]) {
+        assert!((size.as_f64().unwrap() - want).abs() < 1e-6, "{size} {want}");
+    }
+    // The target is the backdrop of what was written: the next fit needs no other.
+    fs::remove_file(at.join("a.obj")).unwrap();
+    let again = done(at, "fit out.ron --begin shell --zig 8 --zag 6 -o a.ron --force");
+    assert!(again.starts_with("iteration"));
+}
+
+#[test]
+fn fit_refuses_what_it_cannot_use() {
+    let folder = tempfile::tempdir().unwrap();
+    let at = folder.path();
+    done(at, "start polar --ribs 8 -o a.ron");
+    fs::write(at.join("a.obj"), paraboloid(1.0)).unwrap();
+    for (line, why) in [
+        ("fit a.ron -o out.ron", "has no backdrop"),
+        ("fit a.ron --target a.obj -o a.ron", "is there already"),
+        ("fit a.ron --target a.obj --zig 0 -o out.ron", "0 parts"),
+        (
+            "fit a.ron --target a.obj --begin shell -o out.ron",
+            "translation surface",
+        ),
+        ("fit a.ron --target a.ron -o out.ron", "must end in"),
+    ] {
+        let output = run(at, line);
+        assert_eq!(status(&output), 2, "{line}");
+        assert!(errors(&output).contains(why), "{}", errors(&output));
+        assert!(!at.join("out.ron").exists());
+    }
+}

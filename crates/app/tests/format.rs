@@ -78,6 +78,9 @@ fn every_field_and_word_of_the_file_is_documented() {
     for _ in 0..400 {
         let mut design = designs::any_design().new_tree(&mut runner).unwrap().current();
         design.name = "n".to_owned();
+        if let Some(backdrop) = &mut design.backdrop {
+            backdrop.name = "n".to_owned();
+        }
         for name in design
             .shape
             .steps

@@ -5,7 +5,10 @@
 use std::{fs, path::PathBuf};
 
 use proptest::prelude::*;
-use zonewright::import::{ImportedPath, import};
+use zonewright::{
+    document::Drawn,
+    import::{ImportedPath, import, import_backdrop},
+};
 use zonewright_geometry::Point;
 
 fn file(name: &str, content: impl AsRef<[u8]>) -> (tempfile::TempDir, PathBuf) {
@@ -240,6 +243,122 @@ fn a_tolerance_that_cannot_be_used_is_refused() {
     let (_folder, path) = file("a.csv", "0,0\n1,1\n");
     for tolerance in [0.0, -1.0, f64::NAN, f64::INFINITY] {
         assert!(import(&path, tolerance).is_err());
+    }
+}
+
+fn drawn(name: &str, content: impl AsRef<[u8]>) -> Drawn {
+    let (_folder, path) = file(name, content);
+    import_backdrop(&path, 0.1).unwrap_or_else(|error| panic!("{error}"))
+}
+
+fn no_backdrop(name: &str, content: impl AsRef<[u8]>) -> String {
+    let (_folder, path) = file(name, content);
+    import_backdrop(&path, 0.1).unwrap_err().to_string()
+}
+
+#[test]
+fn obj_keeps_every_digit_polygons_and_lines() {
+    let text = "mtllib none.mtl\no roof\nv 0.1 0 0\nv 1000.000000001 0 0 0.5 0.5 0.5\nv 1 2 \\\n0\nv 0 1 0\nvn 0 0 1\n\
+        usemtl red\nf 1//1 2//1 3//1 4//1 # a quad\nf -4 -3 -2\nl 1 2 3 4\n";
+    let found = drawn("a.OBJ", text);
+    // A quad is two triangles; the relative face names the points 1, 2, 3.
+    assert_eq!(found.triangles, [[0, 1, 2], [0, 2, 3], [0, 1, 2]]);
+    assert_eq!(found.lines, [[0, 1, 2, 3]]);
+    assert_points(
+        &found.points,
+        &[
+            [0.1, 0.0, 0.0],
+            [1000.000000001, 0.0, 0.0],
+            [1.0, 2.0, 0.0],
+            [0.0, 1.0, 0.0],
+        ],
+        0.0,
+    );
+}
+
+const STL: &str = "solid two\nfacet normal 0 0 1\nouter loop\nvertex 0 0 0\nvertex 2 0 0\nvertex 0 2 0\nendloop\nendfacet\n\
+    facet normal 0 0 1\nouter loop\nvertex 2 0 0\nvertex 2 2 0\nvertex 0 2 0\nendloop\nendfacet\nendsolid two\n";
+
+/// The same two triangles in binary, under a header that begins like a text.
+fn binary_stl() -> Vec<u8> {
+    let mut bytes = b"solid but binary".to_vec();
+    bytes.resize(80, b' ');
+    bytes.extend(2_u32.to_le_bytes());
+    for corners in [
+        [[0.0_f32, 0.0], [2.0, 0.0], [0.0, 2.0]],
+        [[2.0, 0.0], [2.0, 2.0], [0.0, 2.0]],
+    ] {
+        bytes.extend([0.0_f32, 0.0, 1.0].iter().flat_map(|c| c.to_le_bytes()));
+        for [x, y] in corners {
+            bytes.extend([x, y, 0.0].iter().flat_map(|c| c.to_le_bytes()));
+        }
+        bytes.extend([0, 0]);
+    }
+    bytes
+}
+
+#[test]
+fn stl_in_text_and_binary_is_the_same_and_its_corners_are_joined() {
+    let text = drawn("a.stl", STL);
+    assert_eq!(text, drawn("b.stl", binary_stl()));
+    assert_eq!((text.points.len(), text.triangles.len()), (4, 2));
+}
+
+#[test]
+fn lines_become_backdrops_whether_they_join_or_not() {
+    let joined = drawn("a.csv", "x_m,y_m,z_m\n0,0,0\n1,0,2\n2,0,0\n");
+    assert_eq!(joined.lines, [[0, 1, 2]]);
+    assert!(joined.points[1].distance(Point::new(1000.0, 0.0, 2000.0)) < 1e-9);
+    let apart = r#"<svg xmlns="http://www.w3.org/2000/svg" width="100mm" height="100mm" viewBox="0 0 100 100">
+        <path d="M0 0 H50"/><path d="M0 20 H50 V60"/></svg>"#;
+    assert_eq!(drawn("a.svg", apart).lines, [vec![0, 1], vec![2, 3, 4]]);
+    assert!(refused("a.svg", apart).contains("do not touch"), "still no path");
+    let lines = dxf(4, "0\nLINE\n8\n0\n10\n0\n20\n0\n30\n0\n11\n5\n21\n0\n31\n0\n");
+    assert_eq!(drawn("a.dxf", lines).lines, [[0, 1]]);
+}
+
+#[test]
+fn files_that_are_no_backdrop_say_why() {
+    for (name, content, why) in [
+        ("a.obj", "v 0 0 0\nf 1 2 3\n".to_owned(), "no OBJ"),
+        ("a.obj", "v 0 0\n".to_owned(), "no OBJ"),
+        ("a.obj", "v 0 0 0\nv 1 0 0\n".to_owned(), "no triangle and no line"),
+        ("a.obj", "v 0 0 0\nv 1e12 0 0\nv 0 1 0\nf 1 2 3\n".to_owned(), "10 km"),
+        (
+            "a.obj",
+            "v 0 0 0\nv nan 0 0\nv 0 1 0\nf 1 2 3\n".to_owned(),
+            "not finite",
+        ),
+        ("a.stl", "solid\nfacet".to_owned(), "no STL"),
+        ("a.csv", "0,0\n".to_owned(), "no triangle and no line"),
+        ("a.ply", String::new(), "must end in .obj"),
+    ] {
+        let said = no_backdrop(name, &content);
+        assert!(said.contains(why), "{content}: {said}");
+    }
+    let cut = &binary_stl()[..150];
+    assert!(no_backdrop("a.stl", cut).contains("no STL"));
+    // One triangle more than are kept.
+    let most = zonewright::document::MAX_BACKDROP_PARTS;
+    let text = format!("v 0 0 0\nv 1 0 0\nv 0 1 0\n{}", "f 1 2 3\n".repeat(most + 1));
+    assert!(no_backdrop("a.obj", text).contains(&format!("{most} triangles")));
+}
+
+proptest! {
+    /// Any spoilt mesh is read or refused, never more.
+    #[test]
+    fn spoilt_meshes_never_panic(at in any::<prop::sample::Index>(), by in "[ -~\n]{0,6}", cut in 0_usize..4, kind in 0..3) {
+        let obj = "v 0.1 0 0\nv 1 0 0\nv 1 2 0\nv 0 1 0\nf 1//1 2/3 3 4\nf -4 -3 -2\nl 1 2 3 4\n";
+        let (name, mut bytes) = match kind {
+            0 => ("a.obj", obj.as_bytes().to_vec()),
+            1 => ("a.stl", STL.as_bytes().to_vec()),
+            _ => ("b.stl", binary_stl()),
+        };
+        let at = at.index(bytes.len());
+        let end = bytes.len().min(at + cut);
+        bytes.splice(at..end, by.bytes());
+        let (_folder, path) = file(name, bytes);
+        let _ = import_backdrop(&path, 0.1);
     }
 }
 

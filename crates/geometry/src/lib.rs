@@ -3,7 +3,9 @@
 //! Conventions: millimetres, radians, f64; right-handed with z up; panels counter-clockwise seen from outside; dihedral
 //! angles measured inside, from 0 to a full turn. Nothing here reads or writes files, knows colours, formats numbers or starts threads.
 
+pub mod ahead;
 pub mod finding;
+pub mod fit;
 pub mod grow;
 pub mod inspect;
 pub mod measure;

@@ -1,6 +1,7 @@
 //! The command line. It is kept stable: other programs call it.
 
 mod curve_words;
+mod fit;
 mod jobs;
 mod picture;
 mod refusal;
@@ -46,6 +47,8 @@ enum Command {
     /// Make a design.
     #[command(subcommand)]
     Start(Kind),
+    /// Bring the paths of a design to a drawn target: an arch, a site line, a form.
+    Fit(Box<fit::FitArguments>),
     /// Print the readouts of a design.
     Report {
         /// The design.
@@ -107,6 +110,7 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
     let done = match cli.command {
         None => return Asked::Window(cli.file),
         Some(Command::Start(kind)) => kind.make().map(|()| DONE),
+        Some(Command::Fit(arguments)) => arguments.run().map(|()| DONE),
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),

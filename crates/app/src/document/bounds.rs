@@ -28,7 +28,12 @@ pub(super) fn check(design: &Design) -> Result<(), DesignError> {
     let steps = shape.steps.iter().map(|s| &s.name);
     let given = steps.chain(shape.finish.iter().map(|f| &f.name)).flatten();
     let longest = given.chain([&design.name]).map(String::len).max();
-    bound("bytes in a name", longest.unwrap_or(0), MAX_NAME_BYTES)
+    bound("bytes in a name", longest.unwrap_or(0), MAX_NAME_BYTES)?;
+    if let Some(backdrop) = &design.backdrop {
+        bound("bytes in the name of its backdrop", backdrop.name.len(), MAX_NAME_BYTES)?;
+        backdrop.check().map_err(DesignError::Backdrop)?;
+    }
+    Ok(())
 }
 
 fn bound(what: &'static str, count: usize, limit: usize) -> Result<(), DesignError> {

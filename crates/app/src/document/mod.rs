@@ -2,6 +2,7 @@
 //!
 //! `docs/format.md` documents every field. Nothing outside this module knows the file's syntax.
 
+mod backdrop;
 mod bounds;
 mod bundled;
 mod new;
@@ -11,6 +12,7 @@ mod write;
 use zonewright_geometry::Shape;
 use zonewright_shop::text::Units;
 
+pub use backdrop::{Backdrop, BackdropPlacement, Drawn, MAX_BACKDROP_PARTS, MAX_BACKDROP_POINTS};
 pub use bounds::{MAX_FILE_BYTES, MAX_LETTERS, MAX_NAME_BYTES, MAX_NAMES, MAX_STEPS};
 pub use bundled::bundled;
 pub use new::new_design;
@@ -29,6 +31,8 @@ pub struct Design {
     pub units: Units,
     /// The shape: a start, steps, placement.
     pub shape: Shape,
+    /// What the shape is held against.
+    pub backdrop: Option<Backdrop>,
 }
 
 /// Why a design file cannot be read or written. Each says what, where, and what to do.
@@ -66,6 +70,9 @@ pub enum DesignError {
         /// The limit.
         limit: usize,
     },
+    /// The backdrop cannot be used.
+    #[error("its backdrop cannot be used: {0}")]
+    Backdrop(String),
     /// The text is not a design.
     #[error("line {line}, column {column}: {what}; mend it there (docs/format.md lists every field)")]
     Syntax {

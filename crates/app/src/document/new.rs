@@ -38,6 +38,7 @@ pub fn new_design(start: Start, courses: Option<u32>, spurs: Spurs) -> Result<De
         name: String::new(),
         units: Units::Mm,
         shape,
+        backdrop: None,
     })
 }
 

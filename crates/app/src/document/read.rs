@@ -7,7 +7,7 @@ use serde::{Deserialize, de::DeserializeOwned};
 use zonewright_geometry::Shape;
 use zonewright_shop::text::Units;
 
-use super::{Design, DesignError, MAX_FILE_BYTES, bounds, units_word};
+use super::{Backdrop, Design, DesignError, MAX_FILE_BYTES, bounds, units_word};
 
 /// How deep a file may nest. A letter spliced into a V of a spliced letter nests by three; deeper names than this are
 /// refused on reading and on writing alike.
@@ -32,6 +32,8 @@ struct FileOne {
     #[serde(default = "units_word::mm", with = "units_word")]
     units: Units,
     shape: Shape,
+    #[serde(default)]
+    backdrop: Option<Backdrop>,
 }
 
 /// What every format has.
@@ -94,6 +96,7 @@ fn migrate(format: u32, text: &str) -> Result<Design, DesignError> {
                 name: file.name,
                 units: file.units,
                 shape: file.shape,
+                backdrop: file.backdrop,
             })
         }
         newer => Err(DesignError::Newer { found: newer }),

@@ -12,7 +12,7 @@ use serde::Serialize;
 use zonewright_geometry::Shape;
 use zonewright_shop::text::Units;
 
-use super::{Design, DesignError, FORMAT, parse_design, read::syntax, units_word};
+use super::{Backdrop, Design, DesignError, FORMAT, parse_design, read::syntax, units_word};
 
 #[derive(Serialize)]
 struct FileOne<'a> {
@@ -22,6 +22,8 @@ struct FileOne<'a> {
     #[serde(with = "units_word")]
     units: Units,
     shape: &'a Shape,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    backdrop: Option<&'a Backdrop>,
 }
 
 /// The text of a design file.
@@ -39,6 +41,7 @@ pub fn to_text(design: &Design) -> String {
         name: &design.name,
         units: design.units,
         shape: &design.shape,
+        backdrop: design.backdrop.as_ref(),
     };
     // Writing to a string fails only where the nesting is too deep; the empty text is refused on reading back.
     let mut text = syntax().to_string_pretty(&file, layout).unwrap_or_default();

@@ -5,6 +5,7 @@ use zonewright_geometry::Point;
 use super::ImportedPath;
 
 /// A piece of a path: at least two points.
+#[derive(Clone)]
 pub(super) struct Piece {
     /// The points in order; a closed piece does not repeat its first.
     pub(super) points: Vec<Point>,

@@ -20,6 +20,14 @@ struct Corner {
 
 /// Reads the one path of a drawing's model space. Lengths are in the drawing's `$INSUNITS`, in millimetres where it has none.
 pub(super) fn read(bytes: &[u8], tolerance_mm: f64) -> Result<ImportedPath, String> {
+    chain(
+        pieces(bytes, tolerance_mm)?,
+        "LINE, POLYLINE or LWPOLYLINE in model space",
+    )
+}
+
+/// Reads all lines of the model space, in the same units.
+pub(super) fn pieces(bytes: &[u8], tolerance_mm: f64) -> Result<Vec<Piece>, String> {
     let drawing =
         Drawing::load(&mut &*bytes).map_err(|error| format!("it is no DXF drawing: {error}; save it again as DXF"))?;
     let mm = unit_mm(drawing.header.default_drawing_units)?;
@@ -36,7 +44,7 @@ pub(super) fn read(bytes: &[u8], tolerance_mm: f64) -> Result<ImportedPath, Stri
             ));
         }
     }
-    chain(pieces, "LINE, POLYLINE or LWPOLYLINE in model space")
+    Ok(pieces)
 }
 
 /// Millimetres in a drawing unit.

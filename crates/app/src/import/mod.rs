@@ -2,12 +2,16 @@
 
 mod chain;
 mod csv_points;
+mod drawn;
 mod dxf_lines;
+mod meshes;
 mod svg_paths;
 
 use std::{fs::File, io::Read, path::Path};
 
 use zonewright_geometry::Point;
+
+pub use drawn::{BACKDROPS, import_backdrop};
 
 /// The most bytes that an imported file may have.
 pub const MAX_IMPORT_BYTES: u64 = 64 << 20;
@@ -19,7 +23,7 @@ pub const MAX_IMPORT_POINTS: usize = 100_000;
 #[derive(Debug, thiserror::Error)]
 pub enum ImportError {
     /// The file is not there, or the system does not let it be read.
-    #[error("cannot read {path}: {cause}; give the path of a CSV, DXF or SVG file that may be read")]
+    #[error("cannot read {path}: {cause}; give the path of a file that may be read")]
     Read {
         /// The file.
         path: String,
@@ -31,6 +35,14 @@ pub enum ImportError {
         "cannot import {path}: the name must end in .csv, .dxf or .svg; rename it, or export it from where it comes from"
     )]
     Kind {
+        /// The file.
+        path: String,
+    },
+    /// The name does not say what a backdrop is.
+    #[error(
+        "cannot load {path}: the name must end in .obj, .stl, .csv, .dxf or .svg; rename it, or export it from where it comes from"
+    )]
+    BackdropKind {
         /// The file.
         path: String,
     },
@@ -72,20 +84,26 @@ pub fn import(path: &Path, tolerance_mm: f64) -> Result<ImportedPath, ImportErro
         Some("svg") => svg_paths::read,
         _ => return Err(ImportError::Kind { path: shown() }),
     };
-    let unread = |cause| ImportError::Read { path: shown(), cause };
     let wrong = |what| ImportError::InFile { path: shown(), what };
+    let bytes = read_bytes(path, "export only the path")?;
+    let found = reader(&bytes, tolerance_mm).map_err(wrong)?;
+    tidy(found).map_err(wrong)
+}
+
+/// The bytes of a file that is not too large; `remedy` says what to do about one that is.
+fn read_bytes(path: &Path, remedy: &str) -> Result<Vec<u8>, ImportError> {
+    let shown = || path.display().to_string();
+    let unread = |cause| ImportError::Read { path: shown(), cause };
     let mut bytes = Vec::new();
     let file = File::open(path).map_err(unread)?;
     file.take(MAX_IMPORT_BYTES + 1)
         .read_to_end(&mut bytes)
         .map_err(unread)?;
     if bytes.len() as u64 > MAX_IMPORT_BYTES {
-        return Err(wrong(format!(
-            "it is larger than {MAX_IMPORT_BYTES} bytes; export only the path"
-        )));
+        let what = format!("it is larger than {MAX_IMPORT_BYTES} bytes; {remedy}");
+        return Err(ImportError::InFile { path: shown(), what });
     }
-    let found = reader(&bytes, tolerance_mm).map_err(wrong)?;
-    tidy(found).map_err(wrong)
+    Ok(bytes)
 }
 
 /// Drops points that repeat the one before, and looks whether what is left is a path.

@@ -22,6 +22,12 @@ const STYLE: &str = "path,line,polyline,polygon,rect,circle,ellipse{fill:none !i
 
 /// Reads the one path of a drawing. The lower left corner of the page is the origin.
 pub(super) fn read(bytes: &[u8], tolerance_mm: f64) -> Result<ImportedPath, String> {
+    let what = "path, line, polyline or other shape that is shown";
+    chain(pieces(bytes, tolerance_mm)?, what)
+}
+
+/// Reads all lines of a drawing, in the same frame.
+pub(super) fn pieces(bytes: &[u8], tolerance_mm: f64) -> Result<Vec<Piece>, String> {
     let options = usvg::Options {
         style_sheet: Some(STYLE.to_owned()),
         ..usvg::Options::default()
@@ -32,7 +38,7 @@ pub(super) fn read(bytes: &[u8], tolerance_mm: f64) -> Result<ImportedPath, Stri
     let to_mm = Affine::new([PIXEL_MM, 0.0, 0.0, -PIXEL_MM, 0.0, height]);
     let mut pieces = Vec::new();
     collect(tree.root(), to_mm, tolerance_mm, &mut pieces)?;
-    chain(pieces, "path, line, polyline or other shape that is shown")
+    Ok(pieces)
 }
 
 fn collect(group: &usvg::Group, to_mm: Affine, tolerance_mm: f64, pieces: &mut Vec<Piece>) -> Result<(), String> {

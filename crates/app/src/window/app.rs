@@ -94,6 +94,23 @@ impl App {
         self.widgets.pictures
     }
 
+    /// How often an outline of the strip was drawn anew.
+    #[must_use]
+    pub const fn outlines(&self) -> u64 {
+        self.widgets.strip.outlines()
+    }
+
+    /// Draws the strip alone: one frame of it for its bench.
+    pub fn strip_frame(&mut self, ui: &mut Ui) {
+        let cx = Cx {
+            state: &self.state,
+            tx: &self.sender,
+        };
+        self.widgets.over_next = None;
+        strip::strip_ui(cx, ui, &mut self.widgets);
+        self.widgets.over = self.widgets.over_next;
+    }
+
     fn shortcuts(&self, ctx: &egui::Context) {
         let typing = ctx.text_edit_focused();
         let mut commands = Command::listed();

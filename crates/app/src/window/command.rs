@@ -9,7 +9,9 @@ use zonewright_geometry::{Finish, Outside, Placement, Side, Start, Step, VName, 
 use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
-use super::{panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, selection::SelectAct, view::Hand};
+use super::{
+    panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, selection::SelectAct, strip::StripAct, view::Hand,
+};
 use crate::document::Design;
 
 /// A command.
@@ -67,6 +69,8 @@ pub enum Command {
     DeleteFinish(usize),
     /// Splices the directions in hand at an open V, or takes that splice away again.
     ToggleSplice(Side, VName),
+    /// What the front strip sends.
+    Strip(StripAct),
     /// Takes other directions in hand.
     SetHand(Hand),
     /// Changes the kind of start, with that kind's usual parameters.
@@ -199,6 +203,7 @@ impl Command {
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(SelectAct::listed().map(Self::Select));
+        all.extend(StripAct::listed().map(Self::Strip));
         all
     }
 
@@ -234,6 +239,7 @@ impl Command {
                 "Splice here",
                 "Splices the directions in hand at an open V, or takes them out.",
             ),
+            Self::Strip(act) => return act.words(),
             Self::SetHand(_) => ("Directions in hand", "Chooses what the next splice inserts."),
             Self::SetKind(_) => ("Kind of start", "Changes where the first word comes from."),
             Self::SetStart(..) => ("Change the start", "Changes a parameter of the start."),
@@ -306,6 +312,7 @@ impl Command {
             Self::HiddenEdges => (Modifiers::COMMAND, Key::H),
             Self::SwapUnits => (Modifiers::COMMAND, Key::U),
             Self::SwapSide => (Modifiers::COMMAND, Key::B),
+            Self::Strip(StripAct::SwapRepeat) => (Modifiers::COMMAND, Key::R),
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
             Self::Pane(act) => act.shortcut()?,

@@ -16,6 +16,7 @@ use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 
 use super::{
     path_place::PlacedPath,
+    strip::StripFront,
     worker::{Job, Worker},
 };
 use crate::document::Design;
@@ -59,6 +60,8 @@ pub struct Derived {
     pub levels: Vec<Option<Level>>,
     /// Open Vs of the fore and the aft front.
     pub open: [Vec<OpenV>; 2],
+    /// The fore and the aft front as the strip shows them.
+    pub strip: [StripFront; 2],
     /// The start's path where it stands in the picture.
     pub path: Option<PlacedPath>,
     /// What is drawn.
@@ -86,6 +89,7 @@ impl Derived {
             texts: Vec::new(),
             levels: Vec::new(),
             open: [Vec::new(), Vec::new()],
+            strip: [StripFront::empty(), StripFront::empty()],
             path: None,
             scene: Scene::quick(&shell),
             scene_revision: 0,
@@ -109,6 +113,8 @@ impl Derived {
         self.parts = Parts::new(&shell, &FamilyTolerance::default());
         self.families = self.parts.panels.iter().map(|p| p.family).collect();
         self.open = [open_vs(&shell, Side::Fore), open_vs(&shell, Side::Aft)];
+        self.strip =
+            [Side::Fore, Side::Aft].map(|side| StripFront::of(&design.shape, &shell, side, self.open_on(side)));
         self.path = PlacedPath::of(&design.shape, &shell);
         self.scene = Scene::quick(&shell);
         self.scene_revision += 1;
@@ -165,6 +171,15 @@ impl Derived {
             let writer = FindingWriter::new(&self.shell, &self.parts);
             first.map(|f| writer.write(f).text).collect()
         };
+    }
+
+    /// A front as the strip shows it.
+    #[must_use]
+    pub const fn strip_on(&self, side: Side) -> &StripFront {
+        match side {
+            Side::Fore => &self.strip[0],
+            Side::Aft => &self.strip[1],
+        }
     }
 
     /// Open Vs of a front.

@@ -28,7 +28,6 @@ mod session;
 mod splice_marks;
 mod state;
 mod strip;
-mod strip_layout;
 mod theme;
 mod thing;
 mod view;
@@ -48,6 +47,7 @@ pub use readings::{End, ReadingAct, Remembered, Shown};
 pub use selection::{Dimension, SelectAct, Selection};
 pub use session::STATE_DIR;
 pub use state::State;
+pub use strip::{NAME as STRIP, Picks, Span, StripAct, StripFront, StripView};
 pub use thing::{Held, Kind, Thing};
 pub use view::{Hand, ViewState};
 

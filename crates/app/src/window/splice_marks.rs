@@ -1,10 +1,8 @@
-//! Which open Vs were just made by a splice, and how an open V is named.
+//! How an open V is named.
 
-use std::collections::BTreeSet;
+use zonewright_geometry::{Side, VName};
 
-use zonewright_geometry::{Act, Side, VName};
-
-use super::{execute::fresh_splice, state::State};
+use super::state::State;
 
 /// The name of an open V, by its place among the open Vs of a front.
 #[must_use]
@@ -19,15 +17,13 @@ pub(super) fn v_name(state: &State, side: Side, index: usize) -> Option<VName> {
     })
 }
 
-/// The open Vs of a front that a click would unsplice, by their places among the open Vs.
+/// The place among the open Vs of a front of the V with this name.
 #[must_use]
-pub(super) fn spliced(state: &State, side: Side) -> BTreeSet<usize> {
-    let shape = state.shape();
-    let last = shape.steps.iter().rev().find(|s| s.on && s.side == side);
-    if !last.is_some_and(|s| matches!(s.act, Act::Splice { .. })) {
-        return BTreeSet::new();
-    }
-    (0..state.derived.open_on(side).len())
-        .filter(|at| v_name(state, side, *at).is_some_and(|v| fresh_splice(shape, side, &v).is_some()))
-        .collect()
+pub(super) fn v_at(state: &State, side: Side, v: &VName) -> Option<usize> {
+    let shell = &state.derived.shell;
+    let front = &shell.fronts[usize::from(side == Side::Aft)];
+    state.derived.open_on(side).iter().position(|open| {
+        let letter = front.letters[open.position].letter;
+        shell.letters[letter as usize].index == v.zig.index && shell.letter_name(letter) == v.zig
+    })
 }

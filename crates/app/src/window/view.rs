@@ -3,7 +3,7 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown, selection::Selection};
+use super::{command::Words, readings::Shown, selection::Selection, strip::StripView};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -34,6 +34,8 @@ pub struct ViewState {
     pub side: Side,
     /// The directions in hand.
     pub hand: Hand,
+    /// What of the front strip belongs to the view.
+    pub strip: StripView,
     /// The picked point of the path.
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
@@ -58,6 +60,7 @@ impl Default for ViewState {
             colour: ColourBy::Zone,
             side: Side::Fore,
             hand: Hand::default(),
+            strip: StripView::default(),
             point: None,
             panel: None,
             selection: Selection::default(),

@@ -72,6 +72,8 @@ pub(super) struct Widgets {
     pub over: Option<(Side, usize)>,
     /// The same, as it is found while this frame is drawn.
     pub over_next: Option<(Side, usize)>,
+    /// The front strip.
+    pub strip: super::strip::StripWidgets,
     /// How sides, angles and folds are spread.
     pub spreads: super::panels::SpreadCache,
     /// The picture of each pane.

@@ -2,7 +2,7 @@
 #![allow(dead_code, reason = "each test file uses its part")]
 
 use proptest::{collection::vec, option, prelude::*};
-use zonewright::document::Design;
+use zonewright::document::{Backdrop, BackdropPlacement, Design, Drawn};
 use zonewright_geometry::{start::*, *};
 use zonewright_shop::text::Units;
 
@@ -310,7 +310,40 @@ pub(crate) fn any_design() -> BoxedStrategy<Design> {
             tolerances,
         });
     let units = prop_oneof![Just(Units::Mm), Just(Units::Inch)];
-    ("\\PC{0,20}", units, shape)
-        .prop_map(|(name, units, shape)| Design { name, units, shape })
+    ("\\PC{0,20}", units, shape, proptest::option::of(backdrop()))
+        .prop_map(|(name, units, shape, backdrop)| Design {
+            name,
+            units,
+            shape,
+            backdrop,
+        })
         .boxed()
+}
+
+fn backdrop() -> impl Strategy<Value = Backdrop> {
+    let near = || -1e6..1e6_f64;
+    let point = || (near(), near(), near()).prop_map(|(x, y, z)| Point::new(x, y, z));
+    let drawn = (
+        vec(point(), 4..9),
+        vec([0_u32..4, 0..4, 0..4], 0..5),
+        vec(vec(0_u32..4, 2..5), 1..3),
+    )
+        .prop_map(|(points, triangles, lines)| Drawn {
+            points,
+            triangles,
+            lines,
+        });
+    let placement =
+        (point(), near(), 1e-3..2.0_f64, any::<bool>()).prop_map(|(shift, turn, scale, y_up)| BackdropPlacement {
+            shift: shift.0,
+            turn: Angle::from_degrees(turn),
+            scale,
+            y_up,
+        });
+    ("\\PC{0,20}", any::<bool>(), placement, drawn).prop_map(|(name, shown, placement, drawn)| Backdrop {
+        name,
+        shown,
+        placement,
+        drawn: std::sync::Arc::new(drawn),
+    })
 }

@@ -9,4 +9,5 @@ mod panels;
 mod panes;
 mod readings;
 mod selection;
+mod strip;
 mod view;

@@ -14,7 +14,7 @@ mod lay;
 mod mesh;
 mod outside;
 mod pick;
-mod place;
+pub(crate) mod place;
 mod rims;
 mod roles;
 mod seams;
@@ -30,6 +30,7 @@ pub use front::{can_close, open_vs};
 use lay::Laid;
 pub use mesh::MAX_PANELS;
 use mesh::Mesh;
+pub use place::placed_vector;
 
 use crate::{Act, Code, Courses, Finding, FirstWord, Place, Shape, Side, Spurs, Step, Unit, shell::Grown};
 

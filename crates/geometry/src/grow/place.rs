@@ -2,7 +2,7 @@
 
 use glam::{DMat3, DVec3};
 
-use crate::{Code, Finding, Place, Placement, Point, Unit};
+use crate::{Code, Finding, Place, Placement, Point, Unit, Vector};
 
 /// Refuses a placement that would leave no shell.
 pub(super) fn usable(placement: &Placement) -> Result<(), Finding> {
@@ -18,7 +18,7 @@ pub(super) fn usable(placement: &Placement) -> Result<(), Finding> {
 
 /// A placement as one map of points.
 #[derive(Clone, Copy, Debug)]
-pub(super) struct Placed {
+pub(crate) struct Placed {
     turned: DMat3,
     shift: DVec3,
     /// Added before everything else: puts the lowest vertex at z = 0.
@@ -27,7 +27,7 @@ pub(super) struct Placed {
 }
 
 impl Placed {
-    pub(super) fn new(placement: &Placement, lift: f64) -> Self {
+    pub(crate) fn new(placement: &Placement, lift: f64) -> Self {
         let [x, y, z] = placement.turn.map(crate::Angle::radians);
         let mirror = DVec3::new(if placement.mirrored { -1.0 } else { 1.0 }, 1.0, 1.0);
         let turned = DMat3::from_rotation_z(z)
@@ -47,7 +47,7 @@ impl Placed {
         self.identity && self.lift == DVec3::ZERO
     }
 
-    pub(super) fn apply(&self, p: Point) -> Point {
+    pub(crate) fn apply(&self, p: Point) -> Point {
         let lifted = p.0 + self.lift;
         if self.identity {
             Point(lifted)
@@ -55,4 +55,19 @@ impl Placed {
             Point(self.turned * lifted + self.shift)
         }
     }
+
+    /// A movement after placement, as it is before.
+    pub(crate) fn back(&self, movement: DVec3) -> DVec3 {
+        if self.identity {
+            movement
+        } else {
+            self.turned.inverse() * movement
+        }
+    }
+}
+
+/// A vector of the grown frame as a placement turns, mirrors and scales it; in millimetres.
+#[must_use]
+pub fn placed_vector(placement: &Placement, vector: Vector) -> Vector {
+    Placed::new(placement, 0.0).turned * vector
 }

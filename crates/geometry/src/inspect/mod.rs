@@ -14,7 +14,7 @@ mod newcomers;
 mod pair;
 mod plate;
 mod report;
-mod tree;
+pub(crate) mod tree;
 
 use contact::Contact;
 pub use newcomers::crossings_of_new;

@@ -4,20 +4,20 @@ use crate::{Point, Vector};
 
 /// A box along the axes.
 #[derive(Clone, Copy)]
-pub(super) struct Extent {
-    pub(super) least: Vector,
-    pub(super) most: Vector,
+pub(crate) struct Extent {
+    pub(crate) least: Vector,
+    pub(crate) most: Vector,
 }
 
 impl Extent {
     /// The box of nothing.
-    pub(super) const NOTHING: Self = Self {
+    pub(crate) const NOTHING: Self = Self {
         least: Vector::INFINITY,
         most: Vector::NEG_INFINITY,
     };
 
     /// The box of this and a place.
-    pub(super) fn and(self, place: Point) -> Self {
+    pub(crate) fn and(self, place: Point) -> Self {
         Self {
             least: self.least.min(place.0),
             most: self.most.max(place.0),
@@ -33,11 +33,17 @@ impl Extent {
     }
 
     /// The box moved out by `by` on all sides.
-    pub(super) fn grown(self, by: f64) -> Self {
+    pub(crate) fn grown(self, by: f64) -> Self {
         Self {
             least: self.least - Vector::splat(by),
             most: self.most + Vector::splat(by),
         }
+    }
+
+    /// The squared distance to a place; 0 inside.
+    fn squared_distance(&self, place: Vector) -> f64 {
+        let outside = (self.least - place).max(place - self.most).max(Vector::ZERO);
+        outside.length_squared()
     }
 
     /// All six comparisons without a branch between them: most pairs that are asked for are a toss-up.
@@ -52,7 +58,7 @@ impl Extent {
 }
 
 /// Items with boxes, and boxes of boxes above them, two by two.
-pub(super) struct Tree {
+pub(crate) struct Tree {
     items: Vec<(u32, Extent)>,
     /// `levels[0]` has a box for each run of [`RUN`] items, every further level one for two of the level below.
     levels: Vec<Vec<Extent>>,
@@ -66,7 +72,7 @@ const CELLS: f64 = 2_097_151.0;
 
 impl Tree {
     /// A tree over items with finite boxes.
-    pub(super) fn new(items: Vec<(u32, Extent)>) -> Self {
+    pub(crate) fn new(items: Vec<(u32, Extent)>) -> Self {
         let all = items.iter().fold(Extent::NOTHING, |all, item| all.with(item.1));
         let span = (all.most - all.least).max_element();
         let scale = if span > 0.0 { 0.5 * CELLS / span } else { 0.0 };
@@ -91,13 +97,13 @@ impl Tree {
     }
 
     /// The items along the curve.
-    pub(super) fn order(&self) -> impl Iterator<Item = u32> {
+    pub(crate) fn order(&self) -> impl Iterator<Item = u32> {
         self.items.iter().map(|item| item.0)
     }
 
     /// Calls for every two items whose boxes overlap, once each, with their positions in [`Tree::order`]. The order of the calls
     /// depends only on the boxes.
-    pub(super) fn pairs(&self, mut visit: impl FnMut(usize, usize)) {
+    pub(crate) fn pairs(&self, mut visit: impl FnMut(usize, usize)) {
         let mut stack = vec![(self.levels.len() - 1, 0, 0)];
         while let Some((level, i, j)) = stack.pop() {
             let boxes = &self.levels[level];
@@ -120,6 +126,32 @@ impl Tree {
                 ];
                 stack.extend(four.map(|(p, q)| (level - 1, p, q)));
             }
+        }
+    }
+
+    /// Calls for the items whose boxes are within a distance of a place, given squared; nearer boxes go first where the tree can tell.
+    /// What a call gives back is the squared distance that counts from then on.
+    pub(crate) fn near(&self, place: Vector, mut within: f64, mut visit: impl FnMut(u32) -> f64) {
+        let mut stack = vec![(self.levels.len() - 1, 0, 0.0)];
+        while let Some((level, node, far)) = stack.pop() {
+            if far > within {
+                continue;
+            }
+            if level == 0 {
+                let run = node * RUN..self.items.len().min(node * RUN + RUN);
+                for (item, extent) in &self.items[run] {
+                    if extent.squared_distance(place) <= within {
+                        within = visit(*item);
+                    }
+                }
+                continue;
+            }
+            let below = &self.levels[level - 1];
+            let far = |child: usize| below.get(child).map(|e| (level - 1, child, e.squared_distance(place)));
+            let [one, other] = [far(2 * node), far(2 * node + 1)];
+            let one_first = one.is_some_and(|a| other.is_none_or(|b| a.2 <= b.2));
+            let ordered = if one_first { [other, one] } else { [one, other] };
+            stack.extend(ordered.into_iter().flatten());
         }
     }
 

@@ -9,13 +9,13 @@ mod select;
 mod shape;
 mod splice;
 mod steps;
+mod strip;
 mod view;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use select::picked;
-pub(crate) use splice::fresh_splice;
 
 use super::{command::Command, state::State};
 
@@ -54,7 +54,8 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetFinish(at, step) => finish::set(state, at, *step),
         Command::PutBack(at, panel) => finish::put_back(state, at, panel),
         Command::DeleteFinish(at) => finish::delete(state, at),
-        Command::ToggleSplice(side, v) => splice::toggle(state, side, v),
+        Command::ToggleSplice(side, v) => splice::toggle(state, side, &v),
+        Command::Strip(act) => strip::run(state, act),
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),
         Command::SetStart(start, field) => shape::set_start(state, *start, field),

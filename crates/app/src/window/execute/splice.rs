@@ -1,66 +1,117 @@
 //! A click on an open V: splice the directions in hand there, or take that splice away again.
 
-use zonewright_geometry::{Act, LetterName, Maker, Shape, Side, Step, StepId, VName, Vs, grow::open_vs, grow_until};
+use std::collections::{BTreeMap, BTreeSet};
 
-use crate::window::state::State;
+use zonewright_geometry::{
+    Act, Direction, LetterName, Maker, Shape, Side, Step, StepId, VName, Vs, grow::open_vs, grow_until,
+};
 
-/// Splices at a V, or, when the V was made by a splice that nothing was laid upon yet, takes that splice away.
-pub(super) fn toggle(state: &mut State, side: Side, v: VName) {
-    if let Some((at, spliced)) = fresh_splice(state.shape(), side, &v) {
-        take_away(state, side, at, &spliced);
+use crate::window::{
+    splice_marks::{v_at, v_name},
+    state::State,
+    strip::{clicked, directions_at},
+};
+
+/// Splices at a V and those that an act there reaches, or, when the V was made by a splice that nothing was laid upon yet, takes
+/// that away.
+pub(super) fn toggle(state: &mut State, side: Side, v: &VName) {
+    match v_at(state, side, v) {
+        Some(at) => toggle_all(state, side, &[at]),
+        None => state.say("This V is not open any more"),
+    }
+}
+
+/// The same at several Vs, given by their places among the open Vs: when all of them are spliced already, these splices go.
+pub(super) fn toggle_all(state: &mut State, side: Side, at: &[usize]) {
+    let fresh = &state.derived.strip_on(side).fresh;
+    let reached = clicked(state, side, at);
+    if at.iter().all(|at| fresh[*at]) {
+        let all = reached.iter().filter(|r| fresh[r.at]);
+        let found = all.filter_map(|r| fresh_splice(state.shape(), side, &v_name(state, side, r.at)?));
+        let found = found.collect();
+        take_away(state, side, found);
         return;
     }
-    let directions = state.view.hand.directions.clone();
-    if directions.is_empty() {
-        state.say("No directions are in hand: add one in the list of steps");
+    if state.view.hand.directions.is_empty() {
+        state.say("No directions are in hand: add one in the list on the left");
         return;
     }
-    let same = |step: &Step| {
+    let wanted = reached.iter().filter(|r| !fresh[r.at]);
+    let whole = wanted.clone().count() == reached.len();
+    // Vs that get the same directions share a step; turned directions need a step for each turn.
+    let mut groups: Vec<(Vec<Direction>, Vec<VName>)> = Vec::new();
+    for r in wanted {
+        let Some(name) = v_name(state, side, r.at) else {
+            continue;
+        };
+        let directions = directions_at(state, side, *r);
+        match groups.iter_mut().find(|(known, _)| *known == directions) {
+            Some((_, names)) => names.push(name),
+            None => groups.push((directions, vec![name])),
+        }
+    }
+    // One V and those like it are a rule, which goes on counting when the start gets more of them.
+    let rule = match (state.view.strip.repeat, at, groups.len(), whole) {
+        (Some(k), [one], 1, true) => v_name(state, side, *one).map(|v| Vs::EveryKth { from: v.zig, k }),
+        _ => None,
+    };
+    let count: usize = groups.iter().map(|(_, names)| names.len()).sum();
+    splice(state, side, groups, rule);
+    state.say(match count {
+        1 => "Spliced; lay a course to grow along the new directions".to_owned(),
+        n => format!("Spliced at {n} Vs; lay a course to grow along the new directions"),
+    });
+}
+
+/// Adds the steps, or the Vs to the last step when that one splices the same directions.
+fn splice(state: &mut State, side: Side, groups: Vec<(Vec<Direction>, Vec<VName>)>, rule: Option<Vs>) {
+    let steps = &state.shape().steps;
+    let joined = steps.last().is_some_and(|last| {
         let Act::Splice {
             at: Vs::Picked(_),
-            directions: d,
-        } = &step.act
+            directions,
+        } = &last.act
         else {
             return false;
         };
-        step.on && step.side == side && *d == directions
+        let [(wanted, names)] = &groups[..] else { return false };
+        let apart = names.iter().all(|v| !made_by_step(v, last.id));
+        rule.is_none() && last.on && last.side == side && directions == wanted && apart
+    });
+    let first = state.shape().next_step_id().0;
+    let label = match &groups[..] {
+        [(_, names)] if names.len() == 1 => "Splice at a V",
+        _ => "Splice at several Vs",
     };
-    let id = state.shape().next_step_id();
-    let steps = &state.shape().steps;
-    let joined = steps.last().is_some_and(same) && !made_by_step(&v, steps.last().map(|s| s.id));
-    state.change("Splice at a V", None, |design| {
+    state.change(label, None, |design| {
         let steps = &mut design.shape.steps;
-        match steps.last_mut().map(|s| &mut s.act) {
-            Some(Act::Splice {
-                at: Vs::Picked(names), ..
-            }) if joined => names.push(v),
-            _ => {
-                let act = Act::Splice {
-                    at: Vs::Picked(vec![v]),
-                    directions,
-                };
-                steps.push(Step {
-                    id,
+        for (id, (directions, names)) in (first..).zip(groups) {
+            match steps.last_mut().map(|s| &mut s.act) {
+                Some(Act::Splice {
+                    at: Vs::Picked(known), ..
+                }) if joined => known.extend(names),
+                _ => steps.push(Step {
+                    id: StepId(id),
                     name: None,
                     on: true,
                     side,
-                    act,
-                });
+                    act: Act::Splice {
+                        at: rule.clone().unwrap_or(Vs::Picked(names)),
+                        directions,
+                    },
+                }),
             }
         }
     });
-    state.say("Spliced; lay a course to grow along the new directions");
 }
 
-fn made_by_step(v: &VName, step: Option<StepId>) -> bool {
-    [&v.zig, &v.zag]
-        .into_iter()
-        .any(|l| Some(l.maker) == step.map(Maker::Step))
+fn made_by_step(v: &VName, step: StepId) -> bool {
+    [&v.zig, &v.zag].into_iter().any(|l| l.maker == Maker::Step(step))
 }
 
 /// The splice that made one of a V's letters, when no step of that front comes after it but other splices: its place in
 /// the record, and the zig letter of the V that was spliced.
-pub(crate) fn fresh_splice(shape: &Shape, side: Side, v: &VName) -> Option<(usize, LetterName)> {
+fn fresh_splice(shape: &Shape, side: Side, v: &VName) -> Option<(usize, LetterName)> {
     for (at, step) in shape
         .steps
         .iter()
@@ -77,25 +128,46 @@ pub(crate) fn fresh_splice(shape: &Shape, side: Side, v: &VName) -> Option<(usiz
     None
 }
 
-fn take_away(state: &mut State, side: Side, at: usize, spliced: &LetterName) {
+/// Takes splices away, each given by its place in the record and the zig letter of the V that was spliced; steps that are left
+/// without a V go.
+fn take_away(state: &mut State, side: Side, found: Vec<(usize, LetterName)>) {
+    let mut by_step: BTreeMap<usize, BTreeSet<LetterName>> = BTreeMap::new();
+    for (at, zig) in found {
+        by_step.entry(at).or_default().insert(zig);
+    }
     let shape = state.shape();
-    let Act::Splice { at: vs, .. } = &shape.steps[at].act else {
-        return;
+    let mut left: Vec<(usize, Vec<VName>)> = Vec::new();
+    for (&at, gone) in &by_step {
+        let Act::Splice { at: vs, .. } = &shape.steps[at].act else {
+            continue;
+        };
+        let names = match vs {
+            Vs::Picked(names) => names.clone(),
+            // A rule becomes a list of the Vs that it found, so that one of them can be left out.
+            Vs::All | Vs::EveryKth { .. } => found_by(shape, side, at, vs),
+        };
+        left.push((at, names.into_iter().filter(|v| !gone.contains(&v.zig)).collect()));
+    }
+    let gone: usize = by_step.values().map(BTreeSet::len).sum();
+    let label = if gone == 1 {
+        "Take a splice away"
+    } else {
+        "Take splices away"
     };
-    let names = match vs {
-        Vs::Picked(names) => names.clone(),
-        // A rule becomes a list of the Vs that it found, so that one of them can be left out.
-        Vs::All | Vs::EveryKth { .. } => found_by(shape, side, at, vs),
-    };
-    let left: Vec<VName> = names.into_iter().filter(|v| v.zig != *spliced).collect();
-    state.change("Take a splice away", None, |design| {
-        if left.is_empty() {
-            design.shape.steps.remove(at);
-        } else if let Act::Splice { at: vs, .. } = &mut design.shape.steps[at].act {
-            *vs = Vs::Picked(left);
+    state.change(label, None, |design| {
+        // From the back, so that places in front stay what they are.
+        for (at, names) in left.into_iter().rev() {
+            if names.is_empty() {
+                design.shape.steps.remove(at);
+            } else if let Act::Splice { at: vs, .. } = &mut design.shape.steps[at].act {
+                *vs = Vs::Picked(names);
+            }
         }
     });
-    state.say("The splice was taken away");
+    state.say(match gone {
+        1 => "The splice was taken away".to_owned(),
+        n => format!("{n} splices were taken away"),
+    });
 }
 
 /// The Vs that a splice by a rule works on: those of the front before it whose zig letter has a spliced letter behind it after it.
@@ -106,7 +178,7 @@ fn found_by(shape: &Shape, side: Side, at: usize, rule: &Vs) -> Vec<VName> {
     }
     let (after, _) = grow_until(shape, at + 1);
     let step = Maker::Step(shape.steps[at].id);
-    let spliced: Vec<LetterName> = (0..after.letters.len())
+    let spliced: BTreeSet<LetterName> = (0..after.letters.len())
         .filter_map(|l| u32::try_from(l).ok())
         .filter(|l| after.letters[*l as usize].maker == step)
         .filter_map(|l| after.letter_name(l).at.map(|name| *name))
@@ -114,7 +186,8 @@ fn found_by(shape: &Shape, side: Side, at: usize, rule: &Vs) -> Vec<VName> {
     before.into_iter().filter(|v| spliced.contains(&v.zig)).collect()
 }
 
-fn v_names(shape: &Shape, side: Side, steps: usize) -> Vec<VName> {
+/// The names of all open Vs of a front as it stands before the step at a place in the record.
+pub(super) fn v_names(shape: &Shape, side: Side, steps: usize) -> Vec<VName> {
     let (shell, _) = grow_until(shape, steps);
     let front = &shell.fronts[usize::from(side == Side::Aft)];
     let count = front.letters.len();

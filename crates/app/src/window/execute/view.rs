@@ -49,8 +49,12 @@ pub(super) fn run(state: &mut State, command: Command) {
     }
 }
 
-/// Closes what is open: the search first, then a question, then a message, then a measure that was begun, then what is picked.
+/// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then a measure that was begun,
+/// then what is picked.
 fn dismiss(state: &mut State) {
+    if state.view.strip.span.take().is_some() {
+        return;
+    }
     if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
         return;
     }

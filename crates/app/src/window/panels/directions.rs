@@ -100,7 +100,7 @@ fn zone(cx: Cx<'_>, ui: &mut Ui, name: &str, direction: &mut Direction) -> bool 
 }
 
 /// How a zone is called in lists.
-fn zone_name(zone: ZoneRef) -> String {
+pub(in crate::window) fn zone_name(zone: ZoneRef) -> String {
     match zone {
         ZoneRef::Start(index) => format!("Zone {}", index + 1),
         ZoneRef::Spliced(step, index) => format!("Spliced {}.{}", step.0, index + 1),

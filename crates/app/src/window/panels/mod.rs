@@ -16,6 +16,7 @@ mod start_panel;
 mod step_fields;
 mod steps_panel;
 
+pub(super) use directions::zone_name;
 use egui::{ScrollArea, Ui};
 
 pub(super) use spread_panel::SpreadCache;

@@ -3,11 +3,11 @@
 use zonewright_geometry::{Place, Point, Shell, Side};
 use zonewright_painter::{Colour, Mark, MarkKind, Tone};
 
-use super::hit;
-use crate::window::{splice_marks, state::State};
+use super::{front_marks, hit};
+use crate::window::state::State;
 
 /// More marks than this would hide the picture and slow the window down.
-const MOST_MARKS: usize = 2000;
+pub(super) const MOST_MARKS: usize = 2000;
 
 /// All marks.
 pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
@@ -16,14 +16,8 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
     super::select_marks::select_marks(state, &mut marks);
-    if let Some((side, index)) = over
-        && let Some(v) = state.derived.open_on(side).get(index)
-    {
-        let at = vec![v.nodes[0], v.nodes[1], v.nodes[2], v.new];
-        marks.push(mark(at.clone(), MarkKind::Polygon, Tone::Preview));
-        let outline = [&at[..], &at[..1]].concat();
-        marks.push(line(outline, 1.5, Tone::Preview));
-    }
+    front_marks::letter_marks(state, &mut marks);
+    front_marks::preview_marks(state, over, &mut marks);
     if let Some(place) = state.view.shown.and_then(|shown| shown.place(&state.derived)) {
         place_marks(&state.derived.shell, &place, Tone::Selection, &mut marks);
     }
@@ -77,14 +71,14 @@ fn path_marks(state: &State, marks: &mut Vec<Mark>) {
 
 fn v_marks(state: &State, marks: &mut Vec<Mark>) {
     let vs = state.derived.open_on(state.view.side);
-    let spliced = splice_marks::spliced(state, state.view.side);
+    let strip = state.derived.strip_on(state.view.side);
     let mut open = Vec::new();
     let mut fresh = Vec::new();
     let mut held = Vec::new();
     for (index, v) in vs.iter().enumerate().take(MOST_MARKS) {
-        let dots = if spliced.contains(&index) {
+        let dots = if strip.fresh[index] {
             &mut fresh
-        } else if v.degenerate {
+        } else if strip.held[index] {
             &mut held
         } else {
             &mut open

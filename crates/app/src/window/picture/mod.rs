@@ -1,6 +1,7 @@
 //! The picture of the shell in the middle of the window.
 
 mod bar;
+mod front_marks;
 mod hit;
 mod input;
 mod marks;

@@ -102,7 +102,17 @@ fn dimension_marks(state: &State, dimension: &Dimension, marks: &mut Vec<Mark>) 
         }
     }
     let text = dimension_text(state, &found);
-    marks.push(mark(found.feet.to_vec(), MarkKind::Dimension { text, size: TEXT }, ink));
+    let mut at = found.feet.to_vec();
+    if found.distance_mm.is_none() {
+        // Only an angle: the line joins what it is between and has no length to tell, so it has no ticks.
+        let dashed = MarkKind::Line {
+            width: 1.0,
+            dashed: true,
+        };
+        let middle = at[0] + found.run() * 0.5;
+        marks.push(mark(std::mem::replace(&mut at, vec![middle; 2]), dashed, ink));
+    }
+    marks.push(mark(at, MarkKind::Dimension { text, size: TEXT }, ink));
 }
 
 /// Where the line begins that leads from an edge or a panel to a foot beyond it; none when the foot lies on it.

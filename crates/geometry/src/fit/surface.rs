@@ -1,0 +1,119 @@
+//! The iteration.
+
+use super::{
+    hurry::Hurry,
+    net::{Net, Solver, many},
+    paths::{Fit, FitEnd, FitOptions, FitStep, Paths},
+    target::{Closest, Target},
+};
+use crate::{Point, Vector};
+
+/// Fits the two paths of a translation surface to a target, from where they are.
+///
+/// `watch` is told each step and says whether to go on. The fit is the best there was, whenever it ends.
+pub fn fit_translation(
+    begin: &Paths,
+    target: &Target,
+    options: &FitOptions,
+    mut watch: impl FnMut(&FitStep) -> bool,
+) -> Fit {
+    let mut now = State::new(Net::of(begin), target, None);
+    let solver = Solver::new(&now.net, options);
+    let mut step = now.step(&solver);
+    let mut history = vec![step];
+    let mut hurry = Hurry::default();
+    let mut end = FitEnd::Iterations;
+    if !watch(&step) {
+        end = FitEnd::Stopped;
+    } else {
+        for _ in 0..options.iterations {
+            let plain = solver.solve(&now.net, &now.places());
+            let moved = moved(&now.net, &plain);
+            if moved <= options.settled_mm {
+                end = FitEnd::Settled;
+                break;
+            }
+            let ahead = hurry.ahead(&now.net, &plain);
+            let mut next = ahead.map(|net| State::new(net, target, Some(&now)));
+            if next
+                .as_ref()
+                .is_none_or(|next| next.step(&solver).sum_mm2 > step.sum_mm2)
+            {
+                if next.is_some() {
+                    hurry.forget();
+                }
+                next = Some(State::new(plain, target, Some(&now)));
+            }
+            let Some(next) = next else { break };
+            let after = next.step(&solver);
+            // Only rounding can make it grow: there is nothing left to gain.
+            if after.sum_mm2 > step.sum_mm2 {
+                end = FitEnd::Settled;
+                break;
+            }
+            now = next;
+            step = after;
+            history.push(step);
+            if !watch(&step) {
+                end = FitEnd::Stopped;
+                break;
+            }
+        }
+    }
+    Fit {
+        paths: now.net.paths(),
+        history,
+        left_mm: now.closest.iter().map(|c| c.distance_mm).collect(),
+        end,
+    }
+}
+
+/// Fits one path to a target: to the line of an arch or a site.
+///
+/// `begin` are its points. Without smoothing the points that are near the target go to its closest places and stay there.
+/// `watch` as in [`fit_translation`]; the fit's second path is empty.
+pub fn fit_path(begin: &[Point], target: &Target, options: &FitOptions, watch: impl FnMut(&FitStep) -> bool) -> Fit {
+    let paths = Paths {
+        origin: begin.first().copied().unwrap_or_default(),
+        a: begin.windows(2).map(|two| two[1] - two[0]).collect(),
+        b: Vec::new(),
+    };
+    fit_translation(&paths, target, options, watch)
+}
+
+/// A net with the closest places of its nodes.
+struct State {
+    net: Net,
+    closest: Vec<Closest>,
+}
+
+impl State {
+    fn new(net: Net, target: &Target, before: Option<&Self>) -> Self {
+        let hint = |k: usize| before.and_then(|b| b.closest.get(k)).map(|c| c.part);
+        let closest = net
+            .nodes()
+            .enumerate()
+            .map(|(k, node)| target.closest_from(node, hint(k)))
+            .collect();
+        Self { net, closest }
+    }
+
+    fn places(&self) -> Vec<Point> {
+        self.closest.iter().map(|c| c.at).collect()
+    }
+
+    fn step(&self, solver: &Solver) -> FitStep {
+        let squares: f64 = self.closest.iter().map(|c| c.distance_mm * c.distance_mm).sum();
+        FitStep {
+            rms_mm: (squares / many(self.closest.len())).sqrt(),
+            largest_mm: self.closest.iter().map(|c| c.distance_mm).fold(0.0, f64::max),
+            sum_mm2: squares + solver.roughness(&self.net),
+        }
+    }
+}
+
+/// How far a node can have moved.
+fn moved(from: &Net, to: &Net) -> f64 {
+    let most = |a: &[Vector], b: &[Vector]| a.iter().zip(b).map(|(a, b)| a.distance(*b)).fold(0.0, f64::max);
+    most(&from.r, &to.r) + most(&from.s, &to.s)
+}
