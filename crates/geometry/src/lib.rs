@@ -4,6 +4,7 @@
 //! angles measured inside, from 0 to a full turn. Nothing here reads or writes files, knows colours, formats numbers or starts threads.
 
 pub mod ahead;
+pub mod edit;
 pub mod finding;
 pub mod fit;
 pub mod grow;
@@ -13,11 +14,12 @@ pub mod parameter;
 mod record;
 mod shell;
 mod shell_check;
+pub mod snap;
 mod space;
 pub mod start;
 
 pub use finding::{Code, Finding, Level, Place, Unit};
-pub use grow::{grow, grow_until};
+pub use grow::{Stage, grow, grow_part, grow_until, split_lay};
 pub use parameter::{Parameter, ParameterKind, parameters, set_parameter};
 pub use record::{
     Act, Courses, Direction, Finish, FinishAct, LetterName, Maker, Outside, PanelName, Placement, RoleRule, Shape,

@@ -1,6 +1,6 @@
 //! The grown shell: shared vertices, panels, edges, rims, seams.
 
-use crate::{LetterName, Maker, PanelName, Point, Role, Side, Sign, Vector, ZoneRef, finding::Finding};
+use crate::{LetterName, Maker, PanelName, Point, Role, Side, Sign, StepId, Vector, ZoneRef, finding::Finding};
 
 /// Stands for "no panel" and "no letter" in the packed arrays.
 pub const NONE: u32 = u32::MAX;
@@ -156,6 +156,10 @@ pub struct Course {
     pub number: i32,
     /// Its panels.
     pub panels: u32,
+    /// The step that laid it.
+    pub step: StepId,
+    /// Which pass of that step laid it: 1 for the first. A pass that makes no panel counts too, but is no course.
+    pub pass: u32,
 }
 
 /// An open V of a front as it stands.
@@ -265,6 +269,21 @@ impl Shell {
         let turn = usize::try_from(name.turn).ok()?;
         let (found, panel) = (0_u32..).zip(&self.panels).filter(|(_, p)| named(p)).nth(turn)?;
         Some((found, panel.letters != [a, b]))
+    }
+
+    /// The zone of an edge, by index in [`Shell::zones`]; none for an edge without a panel.
+    #[must_use]
+    pub fn edge_zone(&self, edge: u32) -> Option<u32> {
+        let Edge { ends, panels } = *self.edges.get(edge as usize)?;
+        let panel = panels.into_iter().find(|p| *p != NONE)?;
+        let Panel { corners, letters, .. } = self.panels[panel as usize];
+        let side = (0_u8..4).find(|side| {
+            let k = usize::from(*side);
+            let own = [corners[k], corners[(k + 1) % 4]];
+            let on = |v: &u32| own.contains(v) || self.tee_vertices(panel, *side).contains(v);
+            ends.iter().all(on)
+        })?;
+        Some(self.zone_of(letters[usize::from(side % 2)]))
     }
 
     /// The vertices inside side `side` of a panel, in order; empty unless the side is split.

@@ -70,7 +70,12 @@ pub(crate) fn shell_of(
         .collect();
     shell.courses = counts
         .into_iter()
-        .map(|(number, panels)| Course { number, panels })
+        .map(|(number, panels)| Course {
+            number,
+            panels,
+            step: zonewright_geometry::StepId(1),
+            pass: number.unsigned_abs(),
+        })
         .collect();
     shell
 }

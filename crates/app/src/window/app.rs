@@ -8,7 +8,7 @@ use super::{
     command::{Command, Sender},
     derived::Counts,
     dialogs::Asked,
-    execute, menu,
+    execute, ladder, menu,
     panels::{self, Cx},
     panes::PaneAct,
     path_box, picture, prompts, search,
@@ -41,7 +41,7 @@ impl App {
     /// The window on a design for tests: slow stages are worked out at once, and the system is asked nothing.
     #[must_use]
     pub fn new_headless(ctx: &egui::Context, design: Design) -> Self {
-        Self::on(ctx, State::new(design, None, Worker::Inline(None)))
+        Self::on(ctx, State::new(design, None, Worker::inline()))
     }
 
     fn on(ctx: &egui::Context, state: State) -> Self {
@@ -131,7 +131,8 @@ impl App {
             self.sender.send(Command::Redo);
         }
         let popup = egui::Popup::is_any_open(ctx);
-        if !typing && !popup && ctx.input(|i| i.key_pressed(Key::Escape)) {
+        let editing = self.widgets.drag.is_some_and(|drag| drag.edits());
+        if !typing && !popup && !editing && ctx.input(|i| i.key_pressed(Key::Escape)) {
             self.sender.send(Command::Dismiss);
         }
     }
@@ -190,16 +191,21 @@ impl App {
 
     /// Works out what follows from the design. When it is worked out anew, the camera may have something to be fitted to.
     fn follow(&mut self, ctx: &egui::Context) {
-        let now = ctx.input(|i| i.time);
+        let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
         let design = std::sync::Arc::clone(state.design());
-        state.derived.follow(&design, state.history.revision(), now);
+        execute::keep_climbed(state);
+        state.derived.climb(state.view.ladder.climbed);
+        let revision = state.history.revision();
+        state
+            .derived
+            .follow(&design, revision, dragging, &mut state.worker, now);
         execute::keep_picked(state);
         if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
         }
         execute::fit_when_pending(state);
-        execute::refit(state, ctx.input(|i| i.pointer.any_down() || i.pointer.any_released()));
+        execute::refit(state, dragging || state.derived.by_drag());
     }
 }
 
@@ -237,6 +243,11 @@ impl eframe::App for App {
             .default_size(sizes.left)
             .size_range(sizes.left..=520.0)
             .show(ui, |ui| panels::left_ui(cx, ui));
+        let upright = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(8, sizes.margin));
+        Panel::left("ladder")
+            .frame(upright)
+            .exact_size(sizes.ladder)
+            .show(ui, |ui| ladder::ladder_ui(cx, ui, widgets));
         Panel::right("readouts and findings")
             .frame(side)
             .default_size(sizes.right)
@@ -249,6 +260,7 @@ impl eframe::App for App {
         CentralPanel::no_frame().frame(side).show(ui, |ui| {
             prompts::banners_ui(cx, ui);
             picture::picture_ui(cx, ui, widgets);
+            ladder::banner_ui(cx, ui, ui.max_rect());
         });
         search::search_ui(cx, ui, widgets);
         path_box::path_box_ui(cx, ui, widgets);

@@ -10,7 +10,8 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, selection::SelectAct, strip::StripAct, view::Hand,
+    ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, selection::SelectAct,
+    strip::StripAct, view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -51,7 +52,7 @@ pub enum Command {
     RemoveCourse,
     /// Lays until no V is left to fill.
     LayUntilStill,
-    /// Adds a step at the end.
+    /// Adds a step: at the end, or where one has climbed to.
     AddStep(Box<Step>),
     /// Replaces the step at this place.
     SetStep(usize, Box<Step>),
@@ -59,6 +60,8 @@ pub enum Command {
     MoveStep(usize, usize),
     /// Deletes the step at this place.
     DeleteStep(usize),
+    /// Climbs the ladder, adds a step there, mends one.
+    Ladder(LadderAct),
     /// Leaves this panel of the shell out, in a finishing step.
     LeaveOut(u32),
     /// Replaces the finishing step at this place.
@@ -99,6 +102,8 @@ pub enum Command {
     Select(SelectAct),
     /// Does something to the views.
     Pane(PaneAct),
+    /// Changes, links or picks zones.
+    Zone(ZoneAct),
     /// Looks from this side.
     Look(View),
     /// Perspective or parallel.
@@ -179,6 +184,9 @@ impl Command {
             Self::AddCourse,
             Self::RemoveCourse,
             Self::LayUntilStill,
+        ]);
+        all.extend(LadderAct::LISTED.map(Self::Ladder));
+        all.extend([
             Self::FreePoints,
             Self::ShareGap,
             Self::FlipOutside,
@@ -203,6 +211,7 @@ impl Command {
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(SelectAct::listed().map(Self::Select));
+        all.extend(ZoneAct::listed().map(Self::Zone));
         all.extend(StripAct::listed().map(Self::Strip));
         all
     }
@@ -227,7 +236,8 @@ impl Command {
             Self::AddCourse => ("Add a course", "Fills every open V of the live front once."),
             Self::RemoveCourse => ("Remove a course", "Takes the last course of the live front away."),
             Self::LayUntilStill => ("Lay until still", "Lays courses until no V is left to fill."),
-            Self::AddStep(_) => ("Add a step", "Adds a step at the end of the record."),
+            Self::Ladder(act) => return act.words(),
+            Self::AddStep(_) => ("Add a step", "Adds a step at the end, or where you have climbed to."),
             Self::SetStep(..) => ("Change a step", "Changes what a step does."),
             Self::MoveStep(..) => ("Move a step", "Moves a step up or down in the record."),
             Self::DeleteStep(_) => ("Delete a step", "Takes a step out of the record."),
@@ -259,6 +269,7 @@ impl Command {
             Self::Zoom(..) => ("Zoom", "Brings the shell nearer or farther."),
             Self::Pane(act) => return act.words(),
             Self::Select(act) => return act.words(),
+            Self::Zone(act) => return act.words(),
             Self::Look(view) => return super::view::look_words(*view),
             Self::SetProjection(Projection::Perspective) => ("Perspective", "Draws far things smaller."),
             Self::SetProjection(Projection::Parallel) => ("Parallel", "Draws equal lengths equal."),
@@ -315,8 +326,10 @@ impl Command {
             Self::Strip(StripAct::SwapRepeat) => (Modifiers::COMMAND, Key::R),
             Self::SwapTheme => (Modifiers::COMMAND, Key::L),
             Self::Find => (Modifiers::COMMAND, Key::K),
+            Self::Ladder(act) => act.keys()?,
             Self::Pane(act) => act.shortcut()?,
             Self::Select(act) => act.shortcut()?,
+            Self::Zone(act) => act.shortcut()?,
             _ => return None,
         };
         Some(KeyboardShortcut::new(modifiers, key))

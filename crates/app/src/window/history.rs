@@ -92,6 +92,15 @@ impl History {
         self.open = None;
     }
 
+    /// Takes an undo step back that further changes would join, as if it had never been made. Gives whether there was one.
+    pub fn take_back(&mut self) -> bool {
+        if self.open.take().is_none() {
+            return false;
+        }
+        let entry = self.past.pop();
+        entry.map(|entry| self.show(entry.design)).is_some()
+    }
+
     /// Goes one step back; gives the label of the change taken back.
     pub fn undo(&mut self) -> Option<String> {
         let entry = self.past.pop()?;
@@ -201,6 +210,18 @@ mod tests {
         assert_eq!(history.now().name, "a");
         assert_eq!(history.undo(), None);
         assert!(!history.unsaved(), "back at what the file holds");
+    }
+
+    #[test]
+    fn an_open_step_taken_back_leaves_nothing_to_undo_or_redo() {
+        let mut history = History::new(design("a"), true);
+        history.change(design("b"), "Drag", Some("zone".to_owned()));
+        history.change(design("c"), "Drag", Some("zone".to_owned()));
+        assert!(history.take_back());
+        assert_eq!(history.now().name, "a");
+        assert_eq!((history.undo_label(), history.redo_label()), (None, None));
+        assert!(!history.take_back(), "nothing is open");
+        history.check().unwrap();
     }
 
     #[test]

@@ -7,6 +7,7 @@ use zonewright_shop::text::Units;
 use super::{
     command::Command,
     kinds,
+    ladder::LadderAct,
     panels::Cx,
     panes::{Layout, PaneAct},
 };
@@ -39,6 +40,8 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                 ui,
                 [Command::AddCourse, Command::RemoveCourse, Command::LayUntilStill],
             );
+            ui.separator();
+            items(cx, ui, LadderAct::LISTED.map(Command::Ladder));
             ui.separator();
             items(cx, ui, [Command::SwapSide]);
         });

@@ -12,6 +12,7 @@ mod execute;
 mod fields;
 mod history;
 mod kinds;
+mod ladder;
 mod menu;
 mod panels;
 mod panes;
@@ -26,6 +27,7 @@ mod search;
 mod selection;
 mod session;
 mod splice_marks;
+mod stages;
 mod state;
 mod strip;
 mod theme;
@@ -33,13 +35,16 @@ mod thing;
 mod view;
 mod widgets;
 mod worker;
+mod zone_table;
+mod zones;
 
 use std::path::{Path, PathBuf};
 
 pub use app::App;
 pub use command::{Command, Unsaved};
-pub use derived::{Counts, Derived};
+pub use derived::{Counts, Derived, Pending};
 pub use history::History;
+pub use ladder::{Climbed, Ladder, LadderAct, LadderView, Laid, Row, RowKind, Said};
 pub use panes::{Layout, Pane, PaneAct, Panes};
 pub use path_edit::PathEdit;
 pub use picture::NAME as PICTURE;
@@ -50,6 +55,8 @@ pub use state::State;
 pub use strip::{NAME as STRIP, Picks, Span, StripAct, StripFront, StripView};
 pub use thing::{Held, Kind, Thing};
 pub use view::{Hand, ViewState};
+pub use zone_table::ZoneTable;
+pub use zones::{SnapStar, ZoneAct, ZoneView};
 
 use crate::document::{self, Design};
 

@@ -57,6 +57,12 @@ impl PlacedPath {
     pub fn own_movement(&self, movement: Vector) -> Vector {
         own_movement(&self.placement, movement)
     }
+
+    /// A movement in the path's own frame, as a movement in the picture.
+    #[must_use]
+    pub(super) fn placed_movement(&self, movement: Vector) -> Vector {
+        turned(&self.placement) * movement
+    }
 }
 
 /// A movement in the placed frame, as a movement in the frame before placement.
@@ -66,7 +72,7 @@ pub(super) fn own_movement(placement: &Placement, movement: Vector) -> Vector {
 }
 
 /// The linear part of a placement: mirrored, then scaled, then turned about x, y and z.
-fn turned(placement: &Placement) -> DMat3 {
+pub(super) fn turned(placement: &Placement) -> DMat3 {
     let [x, y, z] = placement.turn.map(zonewright_geometry::Angle::radians);
     let mirror = if placement.mirrored { -1.0 } else { 1.0 };
     let scale = DMat3::from_diagonal(DVec3::new(mirror, 1.0, 1.0) * placement.scale);

@@ -1,6 +1,6 @@
 //! What the executor changes and what the widgets read.
 
-use std::{path::PathBuf, sync::Arc};
+use std::{borrow::Cow, path::PathBuf, sync::Arc};
 
 use zonewright_geometry::Shape;
 use zonewright_painter::Camera;
@@ -30,7 +30,7 @@ pub struct State {
     pub view: ViewState,
     /// From where one looks, in each of the views.
     pub panes: Panes,
-    /// The revision that what is picked was found again in.
+    /// The growth that what is picked was found again in.
     pub(crate) followed: u64,
     /// What follows from the design.
     pub derived: Derived,
@@ -99,6 +99,16 @@ impl State {
     #[must_use]
     pub fn shape(&self) -> &Shape {
         &self.design().shape
+    }
+
+    /// The shape up to where one has climbed on the ladder: what is shown, and what a step is added to.
+    #[must_use]
+    pub fn shown_shape(&self) -> Cow<'_, Shape> {
+        let shape = self.shape();
+        match self.view.ladder.climbed.and_then(|place| place.stage(shape)) {
+            Some(stage) => Cow::Owned(shape.up_to(stage)),
+            None => Cow::Borrowed(shape),
+        }
     }
 
     /// The unit of lengths.

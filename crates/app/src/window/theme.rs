@@ -49,6 +49,8 @@ pub struct Sizes {
     pub control: f32,
     /// Width of the left panel.
     pub left: f32,
+    /// Width of the course ladder.
+    pub ladder: f32,
     /// Width of the right panel.
     pub right: f32,
     /// Height of the front strip.

@@ -162,9 +162,9 @@ impl Thing {
             Self::Vertex(held) => held.outline(shell)?.get(held.slot).copied(),
             Self::Edge(held) => {
                 let side = sides(&held.outline(shell)?).nth(held.slot)?;
-                let parts = derived.parts.panels.get(held.panel as usize)?;
-                let at = parts.edges.get(held.slot).map(|e| e.edge);
-                at.filter(|e| shell.edges.get(*e as usize).is_some_and(|e| same(e.ends, side)))
+                // Not from the parts: they may still be those of an older shell.
+                let at = shell.edges.iter().position(|e| same(e.ends, side))?;
+                u32::try_from(at).ok()
             }
             Self::Panel(held) => held.outline(shell).map(|_| held.panel),
         }

@@ -3,7 +3,9 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, readings::Shown, selection::Selection, strip::StripView};
+use super::{
+    command::Words, ladder::LadderView, readings::Shown, selection::Selection, strip::StripView, zones::ZoneView,
+};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -42,8 +44,12 @@ pub struct ViewState {
     pub panel: Option<(u32, PanelName)>,
     /// The picked vertex or edge, and what is measured.
     pub selection: Selection,
+    /// The picked zone, and how zones are dragged.
+    pub zones: ZoneView,
     /// What follows a dragged point.
     pub rule: DragRule,
+    /// How far one has climbed on the ladder, and which step's card is open.
+    pub ladder: LadderView,
     /// The finding that is shown in the picture.
     pub finding: Option<usize>,
     /// What a readout shows in the picture.
@@ -64,7 +70,9 @@ impl Default for ViewState {
             point: None,
             panel: None,
             selection: Selection::default(),
+            zones: ZoneView::default(),
             rule: DragRule::Neighbours,
+            ladder: LadderView::default(),
             finding: None,
             shown: None,
             dark: false,

@@ -25,6 +25,15 @@ pub(super) enum Drag {
         /// Where the pointer was.
         from: egui::Pos2,
     },
+    /// A zone follows the pointer; see [`Widgets::zones`].
+    Zone,
+}
+
+impl Drag {
+    /// Whether it changes the design.
+    pub(super) const fn edits(&self) -> bool {
+        matches!(self, Self::Point { .. } | Self::Zone)
+    }
 }
 
 /// The text of the path box and what it shows.
@@ -60,6 +69,8 @@ pub(super) struct Widgets {
     pub search: String,
     /// The drag that is going on.
     pub drag: Option<Drag>,
+    /// What the pointer is over among the zones, and what is dragged there.
+    pub zones: super::picture::ZoneWork,
     /// The pane that it goes on in.
     pub drag_pane: usize,
     /// The pane that the pointer is over.
@@ -72,6 +83,8 @@ pub(super) struct Widgets {
     pub over: Option<(Side, usize)>,
     /// The same, as it is found while this frame is drawn.
     pub over_next: Option<(Side, usize)>,
+    /// The ladder.
+    pub ladder: super::ladder::LadderWidgets,
     /// The front strip.
     pub strip: super::strip::StripWidgets,
     /// How sides, angles and folds are spread.

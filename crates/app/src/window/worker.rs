@@ -1,133 +1,200 @@
-//! The one worker: slow stages run here, and the newest request wins.
+//! Work off the window's thread: the newest request wins, answers come in parts.
+//!
+//! Growing has a thread of its own beside inspecting, so that a drag never waits for an inspection that is going on.
 
 use std::{
-    sync::{Arc, Condvar, Mutex, PoisonError, mpsc},
+    collections::VecDeque,
+    fmt,
+    sync::{
+        Arc, Condvar, Mutex, PoisonError,
+        atomic::{AtomicBool, Ordering},
+        mpsc,
+    },
     thread,
+    time::{Duration, Instant},
 };
 
-use zonewright_geometry::{
-    Shell, Tolerances,
-    inspect::{Inspection, inspect},
-};
-use zonewright_painter::Scene;
+use super::stages::{Grow, Grown, Inspect, Inspected, grow_stages, inspect_stages};
 
-/// What to work out.
-#[derive(Clone, Debug)]
-pub struct Job {
-    /// The revision that it is about.
-    pub revision: u64,
-    /// The shell.
-    pub shell: Arc<Shell>,
-    /// What counts as the same place.
-    pub tolerances: Tolerances,
-}
-
-/// What was worked out.
+/// The threads of a window.
 #[derive(Debug)]
-pub struct Done {
-    /// The revision that it is about.
-    pub revision: u64,
-    /// Crossings, doubled panels, near misses.
-    pub inspection: Inspection,
-    /// The scene whose depth order is exact.
-    pub scene: Scene,
+pub struct Worker {
+    /// Shell, readouts, parts.
+    pub growing: Lane<Grow, Grown>,
+    /// Crossings and the exact depth order.
+    pub inspecting: Lane<Inspect, Inspected>,
 }
 
-fn work(job: &Job) -> Done {
-    Done {
-        revision: job.revision,
-        inspection: inspect(&job.shell, &job.tolerances),
-        scene: Scene::exact(&job.shell),
+impl Worker {
+    /// Starts the threads; `ctx` is woken when something has been worked out that nobody waits for.
+    #[must_use]
+    pub fn start(ctx: &egui::Context) -> Self {
+        Self {
+            growing: Lane::start("zonewright-grow", ctx, grow_stages),
+            inspecting: Lane::start("zonewright-inspect", ctx, inspect_stages),
+        }
+    }
+
+    /// No threads: everything is worked out when it is asked for, so that tests do not depend on timing.
+    #[must_use]
+    pub const fn inline() -> Self {
+        Self {
+            growing: Lane::inline(grow_stages),
+            inspecting: Lane::inline(inspect_stages),
+        }
     }
 }
 
-/// What waits for the thread.
-#[derive(Debug, Default)]
-struct Slot {
-    job: Option<Job>,
+/// Works one request out. `answer` takes each part as it is there; it says whether to go on: not when a newer request waits.
+pub(super) type Stages<J, A> = fn(J, answer: &mut dyn FnMut(A) -> bool);
+
+/// A thread that works out the newest request, or, in tests, work done at once.
+pub struct Lane<J, A> {
+    work: Stages<J, A>,
+    way: Way<J, A>,
+}
+
+enum Way<J, A> {
+    Thread {
+        shared: Arc<Shared<J>>,
+        answers: mpsc::Receiver<A>,
+    },
+    Inline(VecDeque<A>),
+}
+
+struct Shared<J> {
+    slot: Mutex<Slot<J>>,
+    filled: Condvar,
+    /// Whether the window's thread waits for the next answer: it need not be woken then.
+    awaited: AtomicBool,
+}
+
+struct Slot<J> {
+    job: Option<J>,
     closed: bool,
 }
 
-/// The worker, or, in tests, work done at once.
-#[derive(Debug)]
-pub enum Worker {
-    /// A thread of its own.
-    Thread {
-        /// The newest request.
-        slot: Arc<(Mutex<SlotBox>, Condvar)>,
-        /// What was worked out.
-        results: mpsc::Receiver<Done>,
-    },
-    /// Everything is worked out when it is asked for, so that tests do not depend on timing.
-    Inline(Option<Box<Done>>),
+impl<J> Shared<J> {
+    fn slot(&self) -> std::sync::MutexGuard<'_, Slot<J>> {
+        self.slot.lock().unwrap_or_else(PoisonError::into_inner)
+    }
+
+    fn next(&self) -> Option<J> {
+        let mut slot = self.slot();
+        loop {
+            if slot.closed {
+                return None;
+            }
+            if let Some(job) = slot.job.take() {
+                return Some(job);
+            }
+            slot = self.filled.wait(slot).unwrap_or_else(PoisonError::into_inner);
+        }
+    }
 }
 
-/// Keeps the slot's fields to this file.
-#[derive(Debug, Default)]
-pub struct SlotBox(Slot);
-
-impl Worker {
-    /// Starts the thread; `ctx` is woken when something has been worked out. When the system gives no thread, work is done at once.
+impl<J: Send + 'static, A: Send + 'static> Lane<J, A> {
+    /// Starts the thread. When the system gives none, work is done at once.
     #[must_use]
-    pub fn start(ctx: &egui::Context) -> Self {
-        let slot = Arc::new((Mutex::new(SlotBox::default()), Condvar::new()));
-        let (send, results) = mpsc::channel();
-        let (shared, ctx) = (Arc::clone(&slot), ctx.clone());
-        let started = thread::Builder::new()
-            .name("zonewright-inspect".to_owned())
-            .spawn(move || {
-                while let Some(job) = next(&shared) {
-                    if send.send(work(&job)).is_err() {
-                        break;
+    pub fn start(name: &str, ctx: &egui::Context, work: Stages<J, A>) -> Self {
+        let shared = Arc::new(Shared {
+            slot: Mutex::new(Slot {
+                job: None,
+                closed: false,
+            }),
+            filled: Condvar::new(),
+            awaited: AtomicBool::new(false),
+        });
+        let (send, answers) = mpsc::channel();
+        let (own, ctx) = (Arc::clone(&shared), ctx.clone());
+        let started = thread::Builder::new().name(name.to_owned()).spawn(move || {
+            while let Some(job) = own.next() {
+                work(job, &mut |answer| {
+                    let heard = send.send(answer).is_ok();
+                    if !own.awaited.load(Ordering::SeqCst) {
+                        ctx.request_repaint();
                     }
-                    ctx.request_repaint();
-                }
-            });
-        match started {
-            Ok(_) => Self::Thread { slot, results },
-            Err(_) => Self::Inline(None),
+                    let slot = own.slot();
+                    heard && slot.job.is_none() && !slot.closed
+                });
+            }
+        });
+        let way = match started {
+            Ok(_) => Way::Thread { shared, answers },
+            Err(_) => Way::Inline(VecDeque::new()),
+        };
+        Self { work, way }
+    }
+
+    /// Work done at once.
+    #[must_use]
+    pub const fn inline(work: Stages<J, A>) -> Self {
+        Self {
+            work,
+            way: Way::Inline(VecDeque::new()),
         }
+    }
+
+    /// Whether work is done at once.
+    #[must_use]
+    pub const fn is_inline(&self) -> bool {
+        matches!(self.way, Way::Inline(_))
     }
 
     /// Asks for something; an older request that has not begun is dropped.
-    pub fn request(&mut self, job: Job) {
-        match self {
-            Self::Thread { slot, .. } => {
-                slot.0.lock().unwrap_or_else(PoisonError::into_inner).0.job = Some(job);
-                slot.1.notify_one();
+    pub fn request(&mut self, job: J) {
+        match &mut self.way {
+            Way::Thread { shared, .. } => {
+                shared.slot().job = Some(job);
+                shared.filled.notify_one();
             }
-            Self::Inline(done) => *done = Some(Box::new(work(&job))),
+            Way::Inline(answers) => (self.work)(job, &mut |answer| {
+                answers.push_back(answer);
+                true
+            }),
         }
     }
 
-    /// The newest that has been worked out since it was last asked.
-    pub fn poll(&mut self) -> Option<Done> {
-        match self {
-            Self::Thread { results, .. } => results.try_iter().last(),
-            Self::Inline(done) => done.take().map(|done| *done),
+    /// The next answer, if one is there.
+    pub fn poll(&mut self) -> Option<A> {
+        match &mut self.way {
+            Way::Thread { answers, .. } => answers.try_recv().ok(),
+            Way::Inline(answers) => answers.pop_front(),
         }
+    }
+
+    /// The next answer, waited for until `until` at the longest.
+    pub fn poll_until(&mut self, until: Instant) -> Option<A> {
+        let Way::Thread { shared, answers } = &self.way else {
+            return self.poll();
+        };
+        let left = until.saturating_duration_since(Instant::now());
+        if left == Duration::ZERO {
+            return answers.try_recv().ok();
+        }
+        shared.awaited.store(true, Ordering::SeqCst);
+        let answer = answers.recv_timeout(left).ok();
+        shared.awaited.store(false, Ordering::SeqCst);
+        // What was sent just before the wait ended woke nobody.
+        answer.or_else(|| answers.try_recv().ok())
     }
 }
 
-impl Drop for Worker {
+impl<J, A> fmt::Debug for Lane<J, A> {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        f.write_str(match self.way {
+            Way::Thread { .. } => "Lane::Thread",
+            Way::Inline(_) => "Lane::Inline",
+        })
+    }
+}
+
+impl<J, A> Drop for Lane<J, A> {
     fn drop(&mut self) {
-        if let Self::Thread { slot, .. } = self {
-            slot.0.lock().unwrap_or_else(PoisonError::into_inner).0.closed = true;
-            slot.1.notify_one();
+        if let Way::Thread { shared, .. } = &self.way {
+            shared.slot().closed = true;
+            shared.filled.notify_one();
         }
-    }
-}
-
-fn next(shared: &(Mutex<SlotBox>, Condvar)) -> Option<Job> {
-    let mut slot = shared.0.lock().unwrap_or_else(PoisonError::into_inner);
-    loop {
-        if slot.0.closed {
-            return None;
-        }
-        if let Some(job) = slot.0.job.take() {
-            return Some(job);
-        }
-        slot = shared.1.wait(slot).unwrap_or_else(PoisonError::into_inner);
     }
 }
 
@@ -135,23 +202,58 @@ fn next(shared: &(Mutex<SlotBox>, Condvar)) -> Option<Job> {
 mod tests {
     use super::*;
 
+    const SOON: Duration = Duration::from_secs(5);
+
+    fn twice(job: u64, answer: &mut dyn FnMut((u64, bool)) -> bool) {
+        if answer((job, false)) {
+            answer((job, true));
+        }
+    }
+
     #[test]
     fn the_newest_request_wins() {
-        let ctx = egui::Context::default();
-        let mut worker = Worker::start(&ctx);
-        for revision in 1..=50 {
-            worker.request(Job {
-                revision,
-                shell: Arc::new(Shell::default()),
-                tolerances: Tolerances::default(),
-            });
+        let mut lane = Lane::start("test", &egui::Context::default(), twice);
+        for job in 1..=50 {
+            lane.request(job);
         }
-        let deadline = std::time::Instant::now() + std::time::Duration::from_secs(5);
-        let mut last = 0;
-        while last != 50 && std::time::Instant::now() < deadline {
-            last = worker.poll().map_or(last, |done| done.revision);
-            thread::yield_now();
+        let until = Instant::now() + SOON;
+        let mut answers = Vec::new();
+        while answers.last() != Some(&(50, true)) {
+            answers.push(lane.poll_until(until).expect("an answer within five seconds"));
         }
-        assert_eq!(last, 50);
+        // In the order of the requests, each whole one after its first part.
+        assert!(answers.is_sorted());
+        for (job, _) in answers.iter().filter(|(_, whole)| *whole) {
+            assert!(answers.contains(&(*job, false)));
+        }
+    }
+
+    /// A request that is out of date is left after the part that is being worked out.
+    #[test]
+    fn a_newer_request_ends_the_older_one_between_its_parts() {
+        fn slow(job: u64, answer: &mut dyn FnMut((u64, bool)) -> bool) {
+            // Long enough for the second request to be made meanwhile.
+            thread::sleep(Duration::from_millis(if job == 1 { 200 } else { 0 }));
+            twice(job, answer);
+        }
+        let mut lane = Lane::start("test", &egui::Context::default(), slow);
+        lane.request(1);
+        thread::sleep(Duration::from_millis(50));
+        lane.request(2);
+        let until = Instant::now() + SOON;
+        let answers: Vec<_> = std::iter::from_fn(|| lane.poll_until(until)).take(3).collect();
+        assert_eq!(answers, [(1, false), (2, false), (2, true)]);
+    }
+
+    #[test]
+    fn waiting_ends_in_time_and_what_comes_later_is_kept() {
+        fn late(job: u64, answer: &mut dyn FnMut(u64) -> bool) {
+            thread::sleep(Duration::from_millis(300));
+            answer(job);
+        }
+        let mut lane = Lane::start("test", &egui::Context::default(), late);
+        lane.request(7);
+        assert_eq!(lane.poll_until(Instant::now() + Duration::from_millis(10)), None);
+        assert_eq!(lane.poll_until(Instant::now() + SOON), Some(7));
     }
 }

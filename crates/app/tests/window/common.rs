@@ -3,7 +3,7 @@
 use egui_kittest::{Harness, kittest::Queryable};
 use zonewright::{
     document::{Design, new_design},
-    window::{App, PICTURE},
+    window::{App, Command, PICTURE, ZoneAct},
 };
 use zonewright_geometry::{
     Angle, Point, Role, Spurs, Start, Vector,
@@ -66,6 +66,13 @@ pub(crate) fn point(app: &App, at: usize) -> Point {
         panic!("free points")
     };
     path.first_word().unwrap().nodes()[at]
+}
+
+/// Lets drags go exactly where the pointer goes.
+pub(crate) fn snap_off(harness: &mut Harness<'_, App>) {
+    harness.state().send(Command::Zone(ZoneAct::Snap));
+    harness.run();
+    assert!(!harness.state().state().view.zones.snap);
 }
 
 /// Drags with the pointer in ten movements.

@@ -9,7 +9,7 @@ use zonewright::{
 };
 use zonewright_geometry::{Act, Angle, Side, Spurs, Start, Vector};
 
-use crate::common::{drag, open, picture_place, point, polar, zigzag};
+use crate::common::{drag, open, picture_place, point, polar, snap_off, zigzag};
 
 /// Heron-free area of two parallelograms on three edges: |a x b| each (derived).
 fn area(edges: [Vector; 4]) -> f64 {
@@ -23,6 +23,7 @@ fn edges(app: &App) -> [Vector; 4] {
 #[test]
 fn a_dragged_vertex_changes_the_readouts_by_the_computed_amount_and_is_one_undo_step() {
     let mut harness = open(zigzag());
+    snap_off(&mut harness);
     let before = harness.state().state().derived.totals.area_mm2;
     // |(3,0,-4) x (3,0,4)| = 24, |(0,3,-4) x (0,3,4)| = 24, in units of 100 mm: 480000 mm2.
     assert!((before - 480_000.0).abs() < 1e-6, "{before}");
@@ -54,6 +55,7 @@ fn dragging_a_point_of_a_parametric_start_frees_it_in_one_undo_step() {
         assert!(near.fold(f64::INFINITY, f64::min) < 1e-6, "{placed:?}");
     }
     let at = picture_place(&harness, path.placed[1]);
+    snap_off(&mut harness);
     drag(&mut harness, at, egui::vec2(20.0, 20.0));
     assert_eq!(harness.state().state().shape().start.kind(), "zigzag");
     let dropped = picture_place(&harness, point(harness.state(), 1));

@@ -5,9 +5,11 @@
 mod common;
 mod editing;
 mod import;
+mod ladder;
 mod panels;
 mod panes;
 mod readings;
 mod selection;
 mod strip;
 mod view;
+mod zones;

@@ -64,6 +64,8 @@ fn a_clicked_panel_is_shown_left_out_and_put_back() {
     assert_eq!(panels(&harness), 8, "a step that is off leaves nothing out");
     harness.get_by_label("Finishing step 1 on").click();
     harness.run();
+    harness.get_by_label("Finishing step 1: 2 panels left out, on").click();
+    harness.run();
     harness.get_by_label("Put back panel 1 of finishing step 1").click();
     harness.run();
     assert_eq!(panels(&harness), 7);
@@ -75,6 +77,8 @@ fn a_clicked_panel_is_shown_left_out_and_put_back() {
     }
     harness.run();
     assert_eq!(panels(&harness), 6);
+    harness.get_by_label("Finishing step 1: 2 panels left out, on").click();
+    harness.run();
     harness.get_by_label("Delete finishing step 1").click();
     harness.run();
     assert_eq!(harness.state().state().design(), &before);

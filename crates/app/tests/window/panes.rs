@@ -32,7 +32,7 @@ fn place(harness: &Harness<'_, App>, at: usize, of: zonewright_geometry::Point) 
 
 /// A place of a pane where there is only ground.
 fn ground(harness: &Harness<'_, App>, at: usize) -> egui::Pos2 {
-    harness.get_by_label(NAMES[at]).rect().right_bottom() - egui::vec2(12.0, 12.0)
+    harness.get_by_label(NAMES[at]).rect().right_bottom() - egui::vec2(4.0, 4.0)
 }
 
 #[test]
@@ -165,6 +165,7 @@ fn keys_act_on_the_view_under_the_pointer_and_else_on_the_active_one() {
 #[test]
 fn a_point_is_dragged_in_a_drawing_and_the_drag_stays_in_its_plane() {
     let mut harness = four();
+    crate::common::snap_off(&mut harness);
     let old = point(harness.state(), 2);
     let camera = pane(&harness, 1).camera;
     let at = place(&harness, 1, old);

@@ -95,7 +95,12 @@ impl Alphabet {
     ) -> Result<u32, Finding> {
         usable(vector, Place::Step(step))?;
         let name = ZoneRef::Spliced(step, index);
-        let zone = self.add_zone(name, vector, ZoneKind::Own, shape)?;
+        let zone = self
+            .add_zone(name, vector, ZoneKind::Own, shape)
+            .map_err(|refusal| Finding {
+                place: Place::Step(step),
+                ..refusal
+            })?;
         if let Some((to, sign)) = link_of(shape, name) {
             self.link(zone, to, sign)?;
         }

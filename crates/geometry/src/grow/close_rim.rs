@@ -29,6 +29,15 @@ pub(super) struct Closed {
     pub(super) crossings: usize,
 }
 
+/// What filling on the hull keeps about a front, so that two steps do what one does.
+#[derive(Clone, PartialEq, Debug)]
+pub(super) struct Hull {
+    /// The middle of the silhouette, from before the first step.
+    centre: Vector,
+    /// The zones that have met.
+    met: BTreeSet<[u32; 2]>,
+}
+
 /// A word while a way to fill it is looked for: a chord number and a vector a letter, and the places before them.
 #[derive(Clone)]
 struct Sketch {
@@ -70,10 +79,15 @@ pub(super) fn close(front: &mut Front, growing: &mut Growing<'_>) -> Option<Clos
 /// Fills a front whose panels must lie on the convex hull of the sum of its zones, for a number of courses or until nothing is left.
 pub(super) fn fill_on_hull(front: &mut Front, courses: Courses, growing: &mut Growing<'_>) -> Laid {
     let zones: Vec<Vector> = growing.alphabet.zones.iter().map(|z| z.vector).collect();
-    // The sum of the segments is centred on the middle of the silhouette.
-    let nodes: Vec<Vector> = front.nodes.iter().map(|v| growing.mesh.points[*v as usize].0).collect();
-    let centre = nodes.iter().sum::<Vector>() / nodes.len().max(1) as f64;
-    let mut met: BTreeSet<[u32; 2]> = BTreeSet::new();
+    let of_side = usize::from(front.side == Side::Aft);
+    let Hull { centre, mut met } = growing.hull[of_side].take().unwrap_or_else(|| {
+        // The sum of the segments is centred on the middle of the silhouette.
+        let nodes: Vec<Vector> = front.nodes.iter().map(|v| growing.mesh.points[*v as usize].0).collect();
+        Hull {
+            centre: nodes.iter().sum::<Vector>() / nodes.len().max(1) as f64,
+            met: BTreeSet::new(),
+        }
+    });
     let mut left = match courses {
         Courses::Count(count) => count,
         Courses::UntilStill => u32::MAX,
@@ -81,7 +95,7 @@ pub(super) fn fill_on_hull(front: &mut Front, courses: Courses, growing: &mut Gr
     loop {
         retract_any(front, growing);
         if left == 0 {
-            return Laid::Done;
+            break;
         }
         left -= 1;
         let before = growing.mesh.panels.len();
@@ -104,9 +118,11 @@ pub(super) fn fill_on_hull(front: &mut Front, courses: Courses, growing: &mut Gr
         }
         growing.mesh.close_course(course, before);
         if before == growing.mesh.panels.len() {
-            return Laid::Done;
+            break;
         }
     }
+    growing.hull[of_side] = Some(Hull { centre, met });
+    Laid::Done
 }
 
 /// Whether the panel at `prev` (from the centre) with sides a and b supports the sum of segments +-zone/2: with `a x b` outwards on

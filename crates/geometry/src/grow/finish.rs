@@ -22,6 +22,7 @@ pub(super) fn finish(
         shape,
         alphabet,
         mut mesh,
+        lift,
         ..
     } = growing;
     let front_points: [Vec<Point>; 2] = [0, 1].map(|k| {
@@ -48,7 +49,7 @@ pub(super) fn finish(
     if !finite {
         return Err(Finding::new(Code::NotFinite, Place::Design));
     }
-    let lift = if word.grounded { -lowest } else { 0.0 };
+    let lift = if word.grounded { lift.unwrap_or(-lowest) } else { 0.0 };
     let placed = Placed::new(&shape.placement, lift);
     if !placed.is_nothing() {
         for point in &mut mesh.points {

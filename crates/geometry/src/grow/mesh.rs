@@ -1,7 +1,7 @@
 //! The mesh while it grows: vertices, panels and edges, and the debts that finishing settles.
 
 use crate::{
-    Edge, NONE, Panel, Point, Seam, Side, Tee,
+    Edge, NONE, Panel, Point, Seam, Side, StepId, Tee,
     shell::{Course, CrowdedEdge},
 };
 
@@ -19,6 +19,8 @@ pub(super) struct Mesh {
     pub(super) courses: Vec<Course>,
     /// How many courses lie on the fore and on the aft side.
     pub(super) laid: [i32; 2],
+    /// The step that is being taken, and how many passes it has made so far.
+    pub(super) taking: (StepId, u32),
     /// Vertices that the word zips together.
     pub(super) vertex_links: Vec<[u32; 2]>,
     /// Edges that the word zips together.
@@ -100,9 +102,16 @@ impl Mesh {
     /// Closes a course that was opened with this many panels present; a course without panels is not kept.
     pub(super) fn close_course(&mut self, number: i32, panels_before: usize) {
         let panels = as_index(self.panels.len() - panels_before);
+        self.taking.1 += 1;
         if 0 < panels {
             self.laid[usize::from(number < 0)] += 1;
-            self.courses.push(Course { number, panels });
+            let (step, pass) = self.taking;
+            self.courses.push(Course {
+                number,
+                panels,
+                step,
+                pass,
+            });
         }
     }
 }

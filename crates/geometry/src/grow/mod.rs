@@ -13,6 +13,7 @@ mod join;
 mod lay;
 mod mesh;
 mod outside;
+mod part;
 mod pick;
 pub(crate) mod place;
 mod rims;
@@ -30,6 +31,7 @@ pub use front::{can_close, open_vs};
 use lay::Laid;
 pub use mesh::MAX_PANELS;
 use mesh::Mesh;
+pub use part::{Stage, grow_part, split_lay};
 pub use place::placed_vector;
 
 use crate::{Act, Code, Courses, Finding, FirstWord, Place, Shape, Side, Spurs, Step, Unit, shell::Grown};
@@ -41,6 +43,10 @@ struct Growing<'a> {
     mesh: Mesh,
     /// How many zones the start has: spliced ones come behind them.
     start_zones: u32,
+    /// What filling on the hull keeps about each front from step to step.
+    hull: [Option<close_rim::Hull>; 2],
+    /// By how much a grounded start is lifted; none to put its own lowest vertex at z = 0.
+    lift: Option<f64>,
 }
 
 /// Grows a shape: replays all its steps.
@@ -54,8 +60,12 @@ pub fn grow(shape: &Shape) -> Grown {
 /// Grows a shape with only its first `steps` growing steps; the finishing steps still apply.
 #[must_use]
 pub fn grow_until(shape: &Shape, steps: usize) -> Grown {
+    grow_lifted(shape, steps, None)
+}
+
+fn grow_lifted(shape: &Shape, steps: usize, lift: Option<f64>) -> Grown {
     let mut findings = Vec::new();
-    match replay(shape, steps, &mut findings) {
+    match finished(shape, steps, lift, &mut findings) {
         Ok(shell) => {
             if shell.panels.is_empty() {
                 findings.push(Finding::new(Code::NoPanels, Place::Design));
@@ -69,7 +79,33 @@ pub fn grow_until(shape: &Shape, steps: usize) -> Grown {
     }
 }
 
-fn replay(shape: &Shape, steps: usize, findings: &mut Vec<Finding>) -> Result<crate::Shell, Finding> {
+fn finished(
+    shape: &Shape,
+    steps: usize,
+    lift: Option<f64>,
+    findings: &mut Vec<Finding>,
+) -> Result<crate::Shell, Finding> {
+    let Replayed {
+        mut growing,
+        fronts,
+        word,
+        closing_gap,
+        join_mm,
+    } = replay(shape, steps, findings)?;
+    growing.lift = lift;
+    finish::finish(growing, &fronts, &word, closing_gap, join_mm, findings)
+}
+
+/// A record whose growing steps are taken, and nothing more.
+struct Replayed<'a> {
+    growing: Growing<'a>,
+    fronts: [Front; 2],
+    word: FirstWord,
+    closing_gap: Option<f64>,
+    join_mm: f64,
+}
+
+fn replay<'a>(shape: &'a Shape, steps: usize, findings: &mut Vec<Finding>) -> Result<Replayed<'a>, Finding> {
     place::usable(&shape.placement)?;
     let word = shape.start.first_word()?;
     if word.letters.is_empty() {
@@ -86,6 +122,8 @@ fn replay(shape: &Shape, steps: usize, findings: &mut Vec<Finding>) -> Result<cr
         alphabet,
         mesh,
         start_zones,
+        hull: [None, None],
+        lift: None,
     };
     let closing_gap = closing_gap(&word, &growing.alphabet);
     let closes = closing_gap.is_some_and(|gap| gap <= shape.tolerances.join_mm);
@@ -96,6 +134,7 @@ fn replay(shape: &Shape, steps: usize, findings: &mut Vec<Finding>) -> Result<cr
     let mut fronts = Front::both(&word, closes, &growing.alphabet, &mut growing.mesh);
     let mut join_mm = shape.tolerances.join_mm;
     for step in shape.steps.iter().take(steps).filter(|s| s.on) {
+        growing.mesh.taking = (step.id, 0);
         let front = &mut fronts[usize::from(step.side == Side::Aft)];
         if let Act::JoinRims { within_mm } = step.act {
             join_mm = join_mm.max(within_mm);
@@ -103,7 +142,13 @@ fn replay(shape: &Shape, steps: usize, findings: &mut Vec<Finding>) -> Result<cr
             take_step(step, front, word.on_hull, &mut growing, findings)?;
         }
     }
-    finish::finish(growing, &fronts, &word, closing_gap, join_mm, findings)
+    Ok(Replayed {
+        growing,
+        fronts,
+        word,
+        closing_gap,
+        join_mm,
+    })
 }
 
 /// By how much the word of a front that is meant to close misses; none when it is meant to be open.
@@ -144,7 +189,7 @@ fn take_step(
             match laid {
                 Laid::Done => {}
                 Laid::NeverStill => findings.push(Finding::new(Code::NeverStill, place())),
-                Laid::TooMany => return Err(too_many(growing)),
+                Laid::TooMany => return Err(too_many(step, growing)),
             }
             (growing.mesh.panels.len() - present).max(before - front.slots.len())
         }
@@ -184,7 +229,7 @@ fn take_step(
         findings.push(Finding::new(Code::StepFoundNothing, place()));
     }
     if MAX_PANELS < growing.mesh.panels.len() {
-        return Err(too_many(growing));
+        return Err(too_many(step, growing));
     }
     Ok(())
 }
@@ -193,7 +238,7 @@ fn lay(front: &mut Front, courses: Courses, spurs: Spurs, growing: &mut Growing<
     front.lay(courses, spurs, &growing.alphabet, &mut growing.mesh)
 }
 
-fn too_many(growing: &Growing<'_>) -> Finding {
+fn too_many(step: &Step, growing: &Growing<'_>) -> Finding {
     let limit = Some(MAX_PANELS as f64);
-    Finding::new(Code::TooManyPanels, Place::Design).with(growing.mesh.panels.len() as f64, limit, Unit::Count)
+    Finding::new(Code::TooManyPanels, Place::Step(step.id)).with(growing.mesh.panels.len() as f64, limit, Unit::Count)
 }

@@ -29,6 +29,7 @@ pub(super) fn splice(
         alphabet,
         mesh,
         start_zones,
+        ..
     } = growing;
     let mut lost = 0;
     let mut common: Vec<Option<Spur>> = Vec::with_capacity(directions.len());

@@ -9,6 +9,7 @@ use crate::{
     start::{FreeLetter, FreePath, FreeVector},
 };
 
+mod part;
 mod properties;
 
 fn shape(path: FreePath, acts: Vec<Act>) -> Shape {

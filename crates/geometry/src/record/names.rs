@@ -5,7 +5,7 @@ use serde::{Deserialize, Serialize};
 use super::Side;
 
 /// A step's number. It is given once, and never changes when steps are moved.
-#[derive(Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Hash, Debug, Serialize, Deserialize)]
+#[derive(Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Hash, Debug, Default, Serialize, Deserialize)]
 #[serde(transparent)]
 pub struct StepId(pub u32);
 

@@ -6,7 +6,7 @@
 use core::f64::consts::FRAC_PI_4;
 
 /// Cosine and sine of `k / n` of a full turn; `n` is not 0.
-pub(super) fn part_of_turn(k: i64, n: u32) -> (f64, f64) {
+pub(crate) fn part_of_turn(k: i64, n: u32) -> (f64, f64) {
     let n = i64::from(n);
     let eighths = k.rem_euclid(n) * 8;
     let (octant, over) = (eighths / n, eighths % n);
@@ -15,7 +15,7 @@ pub(super) fn part_of_turn(k: i64, n: u32) -> (f64, f64) {
 }
 
 /// Cosine and sine of an angle in degrees; finite.
-pub(super) fn degrees(angle: f64) -> (f64, f64) {
+pub(crate) fn degrees(angle: f64) -> (f64, f64) {
     let eighths = angle.rem_euclid(360.0) / 45.0;
     let part = eighths - eighths.floor();
     #[expect(clippy::cast_possible_truncation, reason = "between 0 and 8")]

@@ -64,7 +64,7 @@ pub(super) fn letter_count(name: &'static str, letters: usize) -> Result<u32, Fi
 }
 
 /// Refuses a length that no edge can have, in millimetres.
-pub(super) fn length(name: &'static str, value: f64) -> Result<f64, Finding> {
+pub(crate) fn length(name: &'static str, value: f64) -> Result<f64, Finding> {
     within(name, value, MIN_LENGTH_MM, MAX_LENGTH_MM, Unit::Millimetres)
 }
 
@@ -74,7 +74,7 @@ pub(super) fn length_or_zero(name: &'static str, value: f64) -> Result<f64, Find
 }
 
 /// Refuses a rise or fall beyond the greatest length, in millimetres.
-pub(super) fn signed_length(name: &'static str, value: f64) -> Result<f64, Finding> {
+pub(crate) fn signed_length(name: &'static str, value: f64) -> Result<f64, Finding> {
     within(name, value, -MAX_LENGTH_MM, MAX_LENGTH_MM, Unit::Millimetres)
 }
 

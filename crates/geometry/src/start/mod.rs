@@ -2,7 +2,7 @@
 //!
 //! Every kind checks its parameters, gives a [`FirstWord`], and can be turned into free points.
 
-mod circle;
+pub(crate) mod circle;
 mod column;
 mod curve;
 mod free;

@@ -6,6 +6,7 @@ use std::{
 };
 
 use zonewright_geometry::Spurs;
+use zonewright_shop::{FamilyTolerance, Parts};
 
 use crate::{
     document::{self, Design},
@@ -101,6 +102,7 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     state.view.panel = None;
     state.view.selection = Default::default();
     state.view.finding = None;
+    state.view.ladder = crate::window::ladder::LadderView::default();
     state.view.shown = None;
     state.remembered = None;
     state.panes.start_afresh();
@@ -145,12 +147,23 @@ fn remember(state: &mut State) {
 }
 
 fn export(state: &mut State, folder: &Path) {
-    let derived = &state.derived;
-    if derived.shell.panels.is_empty() {
+    let design = std::sync::Arc::clone(state.design());
+    // Lists are always those of the whole shell, however far one has climbed on the ladder.
+    let grown;
+    let (shell, parts) = if state.view.ladder.climbed.is_some() {
+        let (whole, _) = zonewright_geometry::grow(&design.shape);
+        grown = (Parts::new(&whole, &FamilyTolerance::default()), whole);
+        (&grown.1, &grown.0)
+    } else {
+        state.derived.climb(None);
+        state.derived.catch_up(&design, state.history.revision());
+        (&*state.derived.shell, &state.derived.parts)
+    };
+    if shell.panels.is_empty() {
         state.complain("There is nothing to export: the shell has no panels. Lay a course.");
         return;
     }
-    let files = zonewright_shop::export(&derived.shell, &derived.parts, &[]);
+    let files = zonewright_shop::export(shell, parts, &[]);
     let files = match files {
         Ok(files) => files,
         Err(error) => return state.complain(error.to_string()),

@@ -93,11 +93,11 @@ pub(super) fn delete(state: &mut State, at: usize) {
 
 /// Keeps what is picked and measured after the shell has grown anew, as long as it is there.
 pub(crate) fn keep_picked(state: &mut State) {
-    let revision = state.derived.revision;
-    if state.followed == revision {
+    let growth = state.derived.growth();
+    if state.followed == growth {
         return;
     }
-    state.followed = revision;
+    state.followed = growth;
     let shell = &state.derived.shell;
     if let Some((panel, name)) = &mut state.view.panel {
         let stays = (*panel as usize) < shell.panels.len() && shell.panel_name(*panel) == *name;

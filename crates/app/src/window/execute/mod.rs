@@ -2,6 +2,7 @@
 
 mod file;
 mod finish;
+mod ladder;
 mod panes;
 mod path;
 mod readings;
@@ -11,10 +12,13 @@ mod splice;
 mod steps;
 mod strip;
 mod view;
+mod zones;
 
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
+pub(crate) use ladder::keep_climbed;
 pub(crate) use panes::{fit_when_pending, refit};
+pub(crate) use path::moved_path;
 pub(crate) use select::picked;
 
 use super::{command::Command, state::State};
@@ -50,6 +54,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetStep(at, step) => steps::set(state, at, *step),
         Command::MoveStep(from, to) => steps::shift(state, from, to),
         Command::DeleteStep(at) => steps::delete(state, at),
+        Command::Ladder(act) => ladder::run(state, act),
         Command::LeaveOut(panel) => finish::leave_out(state, panel),
         Command::SetFinish(at, step) => finish::set(state, at, *step),
         Command::PutBack(at, panel) => finish::put_back(state, at, panel),
@@ -63,6 +68,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FreePoints => shape::free_points(state),
         Command::ShareGap => path::share_gap(state),
         Command::Path(edit) => path::edit(state, edit),
+        Command::Zone(act) => zones::run(state, act),
         Command::SetPlacement(placement) => shape::set_placement(state, placement),
         Command::SetOutside(outside) => shape::set_outside(state, outside),
         Command::FlipOutside => shape::flip_outside(state),

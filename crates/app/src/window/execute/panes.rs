@@ -3,6 +3,7 @@
 use zonewright_painter::{Bounds, View};
 
 use crate::window::{
+    derived::Pending,
     panes::{PaneAct, Wait},
     state::State,
 };
@@ -76,6 +77,10 @@ fn bounds(state: &State) -> Option<Bounds> {
 
 /// Looks and fits anew with each camera that waits for it, once there is something to fit it to and a picture to fit it into.
 pub(crate) fn fit_when_pending(state: &mut State) {
+    // What is shown may still be the design before.
+    if state.derived.revision != state.history.revision() {
+        return;
+    }
     let Some(bounds) = bounds(state) else { return };
     for pane in state.panes.all_mut().filter(|p| p.camera.size[0] > 1.0) {
         if pane.wait == Wait::Fresh {
@@ -87,6 +92,10 @@ pub(crate) fn fit_when_pending(state: &mut State) {
 /// Fits every camera again when the shell's box is another one and the user has left that camera alone. While something is
 /// dragged, and for what it leaves behind, the cameras stay: a dragged point must stay under the pointer.
 pub(crate) fn refit(state: &mut State, dragging: bool) {
+    // A part of the shell is looked at from where the whole was: climbing must not move the picture.
+    if state.view.ladder.climbed.is_some() || state.derived.pending() == Some(Pending::Shell) {
+        return;
+    }
     let bounds = bounds(state);
     for pane in state.panes.all_mut() {
         if pane.fitted == bounds {

@@ -2,7 +2,7 @@
 
 use zonewright_geometry::{
     Finding, Point, Shape, Start, Vector,
-    start::{FreePath, PathEnd},
+    start::{DragRule, FreePath, PathEnd},
 };
 
 use crate::window::{path_edit::PathEdit, state::State};
@@ -25,6 +25,19 @@ pub(super) fn edit(state: &mut State, edit: PathEdit) {
         return state.say(refusal(edit.label(), &finding));
     }
     commit(state, shape, edit, converts);
+}
+
+/// The shape with a point of its path moved, as the next movement of a drag would make it; none when it cannot be.
+pub(crate) fn moved_path(shape: &Shape, point: usize, to: Point, rule: DragRule) -> Option<Shape> {
+    let mut moved = match shape.start {
+        Start::Zigzag(_) => shape.clone(),
+        _ => super::shape::freed(shape).ok()?,
+    };
+    let Start::Zigzag(path) = &mut moved.start else {
+        return None;
+    };
+    path.set_point(point, to, rule).ok()?;
+    Some(moved)
 }
 
 fn commit(state: &mut State, shape: Shape, edit: PathEdit, converts: bool) {

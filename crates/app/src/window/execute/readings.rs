@@ -14,6 +14,8 @@ use crate::{
 pub(super) fn run(state: &mut State, act: ReadingAct) {
     match act {
         ReadingAct::Remember => {
+            let design = Arc::clone(state.design());
+            state.derived.catch_up(&design, state.history.revision());
             state.remembered = Some(Remembered::new(state.design(), &state.derived));
             state.say("Remembered: the readouts show what changes from here");
         }

@@ -6,6 +6,7 @@ use zonewright_geometry::{
     Act, Direction, LetterName, Maker, Shape, Side, Step, StepId, VName, Vs, grow::open_vs, grow_until,
 };
 
+use super::steps;
 use crate::window::{
     splice_marks::{v_at, v_name},
     state::State,
@@ -27,7 +28,8 @@ pub(super) fn toggle_all(state: &mut State, side: Side, at: &[usize]) {
     let reached = clicked(state, side, at);
     if at.iter().all(|at| fresh[*at]) {
         let all = reached.iter().filter(|r| fresh[r.at]);
-        let found = all.filter_map(|r| fresh_splice(state.shape(), side, &v_name(state, side, r.at)?));
+        let shown = state.shown_shape();
+        let found = all.filter_map(|r| fresh_splice(&shown, side, &v_name(state, side, r.at)?));
         let found = found.collect();
         take_away(state, side, found);
         return;
@@ -65,8 +67,10 @@ pub(super) fn toggle_all(state: &mut State, side: Side, at: &[usize]) {
 
 /// Adds the steps, or the Vs to the last step when that one splices the same directions.
 fn splice(state: &mut State, side: Side, groups: Vec<(Vec<Direction>, Vec<VName>)>, rule: Option<Vs>) {
-    let steps = &state.shape().steps;
-    let joined = steps.last().is_some_and(|last| {
+    let shown = state.shown_shape();
+    let last = shown.steps.len().checked_sub(1);
+    let joined = last.filter(|at| {
+        let last = &shown.steps[*at];
         let Act::Splice {
             at: Vs::Picked(_),
             directions,
@@ -78,31 +82,34 @@ fn splice(state: &mut State, side: Side, groups: Vec<(Vec<Direction>, Vec<VName>
         let apart = names.iter().all(|v| !made_by_step(v, last.id));
         rule.is_none() && last.on && last.side == side && directions == wanted && apart
     });
-    let first = state.shape().next_step_id().0;
+    drop(shown);
     let label = match &groups[..] {
         [(_, names)] if names.len() == 1 => "Splice at a V",
         _ => "Splice at several Vs",
     };
-    state.change(label, None, |design| {
-        let steps = &mut design.shape.steps;
-        for (id, (directions, names)) in (first..).zip(groups) {
-            match steps.last_mut().map(|s| &mut s.act) {
-                Some(Act::Splice {
-                    at: Vs::Picked(known), ..
-                }) if joined => known.extend(names),
-                _ => steps.push(Step {
-                    id: StepId(id),
-                    name: None,
-                    on: true,
-                    side,
-                    act: Act::Splice {
-                        at: rule.clone().unwrap_or(Vs::Picked(names)),
-                        directions,
-                    },
-                }),
+    if let Some(at) = joined {
+        state.change(label, None, |design| {
+            if let Act::Splice {
+                at: Vs::Picked(known), ..
+            } = &mut design.shape.steps[at].act
+            {
+                known.extend(groups.into_iter().flat_map(|(_, names)| names));
             }
-        }
+        });
+        return;
+    }
+    let splices = groups.into_iter().map(|(directions, names)| Step {
+        // The number is given where the step is put in.
+        id: StepId(0),
+        name: None,
+        on: true,
+        side,
+        act: Act::Splice {
+            at: rule.clone().unwrap_or(Vs::Picked(names)),
+            directions,
+        },
     });
+    steps::insert(state, state.view.ladder.climbed, splices.collect(), label);
 }
 
 fn made_by_step(v: &VName, step: StepId) -> bool {
@@ -154,6 +161,8 @@ fn take_away(state: &mut State, side: Side, found: Vec<(usize, LetterName)>) {
     } else {
         "Take splices away"
     };
+    let emptied: Vec<usize> = left.iter().filter(|(_, n)| n.is_empty()).map(|(at, _)| *at).collect();
+    steps::step_down(state, &emptied);
     state.change(label, None, |design| {
         // From the back, so that places in front stay what they are.
         for (at, names) in left.into_iter().rev() {

@@ -2,9 +2,12 @@
 
 use std::collections::BTreeSet;
 
-use zonewright_geometry::{Act, Side, Step, VName, Vs};
+use zonewright_geometry::{Act, Side, Step, StepId, VName, Vs};
 
-use super::splice::{self, v_names};
+use super::{
+    splice::{self, v_names},
+    steps,
+};
 use crate::window::{
     splice_marks::v_name,
     state::State,
@@ -30,7 +33,8 @@ pub(super) fn run(state: &mut State, act: StripAct) {
 /// Whether the places are those of the front as it is: nothing sent before has changed it.
 fn stands(state: &State, picks: &Picks) -> bool {
     let open = state.derived.open_on(picks.side).len();
-    let now = state.derived.revision == state.history.revision();
+    let derived = &state.derived;
+    let now = derived.revision == state.history.revision() && derived.climbed == state.view.ladder.climbed;
     now && picks.revision == state.derived.revision && picks.at.iter().all(|at| *at < open)
 }
 
@@ -68,7 +72,8 @@ fn fill(state: &mut State, picks: &Picks) {
         _ => None,
     };
     let step = Step {
-        id: state.shape().next_step_id(),
+        // The number is given where the step is put in.
+        id: StepId(0),
         name: None,
         on: true,
         side,
@@ -76,17 +81,18 @@ fn fill(state: &mut State, picks: &Picks) {
             at: vs.unwrap_or(Vs::Picked(names)),
         },
     };
-    state.change("Fill Vs", None, |design| design.shape.steps.push(step));
+    steps::insert(state, state.view.ladder.climbed, vec![step], "Fill Vs");
     state.say(filled);
 }
 
 /// The last step of a front, when it fills picked Vs and all of these were open before it too.
 fn joins(state: &State, side: Side, names: &[VName]) -> Option<usize> {
-    let steps = &state.shape().steps;
+    let shown = state.shown_shape();
+    let steps = &shown.steps;
     let at = steps.iter().rposition(|s| s.on && s.side == side)?;
     if !matches!(steps[at].act, Act::Fill { at: Vs::Picked(_) }) {
         return None;
     }
-    let before: BTreeSet<VName> = v_names(state.shape(), side, at).into_iter().collect();
+    let before: BTreeSet<VName> = v_names(&shown, side, at).into_iter().collect();
     names.iter().all(|name| before.contains(name)).then_some(at)
 }

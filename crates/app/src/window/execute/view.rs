@@ -58,11 +58,16 @@ fn dismiss(state: &mut State) {
     if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
         return;
     }
-    if state.message.take().is_none() && state.view.selection.from.take().is_none() {
+    if state.message.take().is_some() {
+        return;
+    }
+    // One looks at the whole again before anything is let go.
+    if state.view.selection.from.take().is_none() && state.view.ladder.climbed.take().is_none() {
         state.view.finding = None;
         state.view.shown = None;
         state.view.point = None;
         state.view.panel = None;
         state.view.selection.part = None;
+        state.view.ladder.picked = None;
     }
 }

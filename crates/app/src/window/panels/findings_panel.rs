@@ -6,7 +6,7 @@ use zonewright_geometry::{Finding, Level, Place};
 use super::Cx;
 use crate::window::{
     command::Command,
-    derived::MOST_SHOWN,
+    derived::{MOST_SHOWN, Pending},
     remedies::{next_steps, remedy_of},
 };
 
@@ -14,7 +14,9 @@ use crate::window::{
 pub(super) fn findings_ui(cx: Cx<'_>, ui: &mut Ui) {
     let findings = &cx.state.derived.findings;
     if findings.is_empty() {
-        ui.weak(match cx.state.derived.inspection {
+        let derived = &cx.state.derived;
+        ui.weak(match derived.inspection {
+            _ if derived.pending() == Some(Pending::Shell) => "Being worked out…",
             Some(_) => "Nothing to report.",
             None => "Being inspected…",
         });

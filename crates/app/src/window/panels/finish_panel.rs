@@ -1,64 +1,60 @@
-//! The finishing steps: which panels are left out.
+//! The card of the finishing step that is picked on the ladder: which panels are left out.
 
 use egui::{Align, Layout, Ui};
 use zonewright_geometry::{Finish, FinishAct, LetterName, Maker, PanelName, Side};
 
-use super::{Cx, small};
+use super::{Cx, card_head, small, steps_panel::said_ui};
 use crate::window::command::Command;
 
 /// Panels of one step that are listed; putting back one by one is for a few.
 const MOST_LISTED: usize = 100;
 
-/// Draws the list of finishing steps; nothing when there are none.
-pub(super) fn finish_ui(cx: Cx<'_>, ui: &mut Ui) {
-    for (at, step) in cx.state.shape().finish.iter().enumerate() {
-        ui.push_id(("finish", step.id.0), |ui| one(cx, ui, at, step));
-    }
-}
-
-fn one(cx: Cx<'_>, ui: &mut Ui, at: usize, step: &Finish) {
-    let mut edited = step.clone();
-    let mut changed = false;
+/// Draws the card; nothing when no finishing step is picked.
+pub(super) fn card_ui(cx: Cx<'_>, ui: &mut Ui) {
+    let picked = cx.state.view.ladder.picked;
+    let steps = &cx.state.shape().finish;
+    let Some(at) = steps.iter().position(|s| Some(s.id) == picked) else {
+        return;
+    };
+    let step = &steps[at];
     let number = at + 1;
-    ui.horizontal(|ui| {
-        let on = ui
-            .checkbox(&mut edited.on, "")
-            .on_hover_text("A finishing step switched off is kept and skipped: its panels are in the shell.");
-        changed |= on.accessible_name(format!("Finishing step {number} on")).changed();
-        ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
-            if small(ui, true, "×", &format!("Delete finishing step {number}")) {
-                cx.tx.send(Command::DeleteFinish(at));
-            }
-            let mut name = step.name.clone().unwrap_or_default();
-            let field = egui::TextEdit::singleline(&mut name)
-                .hint_text("Leave panels out")
-                .desired_width(f32::INFINITY);
-            let field = ui
-                .add(field)
-                .accessible_name(format!("Name of finishing step {number}"));
-            if field.changed() {
-                edited.name = (!name.is_empty()).then_some(name);
-                changed = true;
-            }
-        });
-    });
-    ui.indent("left out", |ui| {
-        let FinishAct::Drop(names) = &step.act;
-        for (panel, name) in names.iter().enumerate().take(MOST_LISTED) {
-            ui.horizontal(|ui| {
-                let of = format!("panel {} of finishing step {number}", panel + 1);
-                ui.add(egui::Label::new(format!("{}  {}", panel + 1, described(name))).truncate());
+    let of = format!("finishing step {number}");
+    card_head(cx, ui, &format!("Finishing step {number}"), &of);
+    for said in cx.state.derived.ladder.said.get(&step.id).into_iter().flatten() {
+        said_ui(cx, ui, said);
+    }
+    let mut name = step.name.clone().unwrap_or_default();
+    let field = egui::TextEdit::singleline(&mut name)
+        .hint_text("Name")
+        .desired_width(f32::INFINITY);
+    let field = ui.add(field).accessible_name(format!("Name of {of}"));
+    if field.changed() {
+        let edited = Finish {
+            name: (!name.is_empty()).then_some(name),
+            ..step.clone()
+        };
+        cx.tx.send(Command::SetFinish(at, Box::new(edited)));
+    }
+    let FinishAct::Drop(names) = &step.act;
+    for (panel, name) in names.iter().enumerate().take(MOST_LISTED) {
+        ui.horizontal(|ui| {
+            let of = format!("panel {} of finishing step {number}", panel + 1);
+            ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
                 if small(ui, true, "Put back", &format!("Put back {of}")) {
                     cx.tx.send(Command::PutBack(at, panel));
                 }
+                ui.with_layout(Layout::left_to_right(Align::Center), |ui| {
+                    ui.add(egui::Label::new(format!("{}  {}", panel + 1, described(name))).truncate());
+                });
             });
-        }
-        if names.len() > MOST_LISTED {
-            ui.weak(format!("and {} more", names.len() - MOST_LISTED));
-        }
-    });
-    if changed {
-        cx.tx.send(Command::SetFinish(at, Box::new(edited)));
+        });
+    }
+    if names.len() > MOST_LISTED {
+        ui.weak(format!("and {} more", names.len() - MOST_LISTED));
+    }
+    let delete = ui.button("Delete the step").accessible_name(format!("Delete {of}"));
+    if delete.on_hover_text("Brings all these panels back.").clicked() {
+        cx.tx.send(Command::DeleteFinish(at));
     }
 }
 

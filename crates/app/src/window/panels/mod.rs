@@ -15,13 +15,21 @@ mod start_fields;
 mod start_panel;
 mod step_fields;
 mod steps_panel;
+mod tolerances_panel;
+mod zone_fields;
+mod zones_panel;
 
 pub(super) use directions::zone_name;
-use egui::{ScrollArea, Ui};
+use egui::{Align, Frame, Layout, Margin, Panel, RichText, ScrollArea, Ui};
 
 pub(super) use spread_panel::SpreadCache;
 
-use super::{command::Sender, state::State, widgets::Widgets};
+use super::{
+    command::{Command, Sender},
+    ladder::LadderAct,
+    state::State,
+    widgets::Widgets,
+};
 
 /// What a panel reads, and where it sends commands.
 #[derive(Clone, Copy, Debug)]
@@ -32,20 +40,36 @@ pub(super) struct Cx<'a> {
     pub tx: &'a Sender,
 }
 
-/// The left panel: the start, its path, the steps, where the shell stands.
+/// The left panel: the start, its path, where the shell stands; below, the card of the step that is picked on the ladder.
 pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
+    if cx.state.view.ladder.picked.is_some() {
+        let most = (ui.available_height() * 0.6).max(120.0);
+        let frame = Frame::side_top_panel(ui.style()).inner_margin(Margin::symmetric(0, 8));
+        Panel::bottom("card of a step")
+            .frame(frame)
+            .resizable(false)
+            .show(ui, |ui| {
+                ScrollArea::vertical()
+                    .max_height(most)
+                    .min_scrolled_height(most)
+                    .auto_shrink([false, true])
+                    .id_salt("card")
+                    .show(ui, |ui| {
+                        steps_panel::card_ui(cx, ui);
+                        finish_panel::card_ui(cx, ui);
+                    });
+            });
+    }
     ScrollArea::vertical()
         .auto_shrink(false)
         .id_salt("left")
         .show(ui, |ui| {
             section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
             section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
-            section(ui, "Steps", true, |ui| {
-                steps_panel::steps_ui(cx, ui);
-                finish_panel::finish_ui(cx, ui);
-            });
             section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
+            section(ui, "Zones", true, |ui| zones_panel::zones_ui(cx, ui));
             section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
+            section(ui, "Tolerances", false, |ui| tolerances_panel::tolerances_ui(cx, ui));
         });
 }
 
@@ -58,7 +82,12 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
             if !selection_panel::is_empty(cx) {
                 section(ui, "Selection", true, |ui| selection_panel::selection_ui(cx, ui));
             }
-            section(ui, "Readouts", true, |ui| readouts::readouts_ui(cx, ui));
+            section(ui, "Readouts", true, |ui| {
+                if cx.state.view.ladder.climbed.is_some() {
+                    ui.colored_label(cx.state.colours().accent(), "Of the part that is shown");
+                }
+                readouts::readouts_ui(cx, ui);
+            });
             section(ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
             section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
         });
@@ -73,6 +102,18 @@ fn section(ui: &mut Ui, title: &str, open: bool, contents: impl FnOnce(&mut Ui))
             contents(ui);
             ui.add_space(ui.spacing().item_spacing.y);
         });
+}
+
+/// The head of a card: what it is about, and a button that closes it.
+fn card_head(cx: Cx<'_>, ui: &mut Ui, title: &str, of: &str) {
+    ui.horizontal(|ui| {
+        ui.label(RichText::new(title).heading());
+        ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
+            if small(ui, true, "×", &format!("Close the card of {of}")) {
+                cx.tx.send(Command::Ladder(LadderAct::Pick(None)));
+            }
+        });
+    });
 }
 
 /// A small button whose accessible name is longer than its text.

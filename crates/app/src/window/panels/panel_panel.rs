@@ -8,6 +8,10 @@ use crate::window::command::Command;
 
 /// Draws what there is to know about the picked panel.
 pub(super) fn panel_ui(cx: Cx<'_>, ui: &mut Ui, panel: u32) {
+    if cx.state.derived.pending().is_some() {
+        ui.weak("Being worked out…");
+        return;
+    }
     let parts = &cx.state.derived.parts;
     let Some(part) = parts.panels.get(panel as usize) else {
         return;

@@ -7,6 +7,7 @@ use zonewright_shop::spread::Measure;
 use super::Cx;
 use crate::window::{
     command::Command,
+    derived::Pending,
     readings::{End, Reading, ReadingAct, Shown, Value, measured, readings},
 };
 
@@ -14,8 +15,23 @@ use crate::window::{
 pub(super) fn readouts_ui(cx: Cx<'_>, ui: &mut Ui) {
     ui.scope(|ui| {
         ui.spacing_mut().item_spacing.y = 3.0;
+        let pending = cx.state.derived.pending();
         for reading in readings(&cx.state.derived) {
-            one(cx, ui, &reading);
+            let behind = match pending {
+                Some(Pending::Shell) => true,
+                Some(Pending::Parts) => OF_PARTS.contains(&reading.name),
+                None => false,
+            };
+            if behind {
+                // What is there is of the shell before: faded until the new value is there.
+                ui.scope(|ui| {
+                    ui.multiply_opacity(0.5);
+                    let value = reading.value.text(cx.state.units());
+                    readout(ui, reading.name, &format!("{value} …"));
+                });
+            } else {
+                one(cx, ui, &reading);
+            }
         }
     });
     compare_ui(cx, ui);
@@ -96,6 +112,9 @@ fn compare_ui(cx: Cx<'_>, ui: &mut Ui) {
         }
     });
 }
+
+/// Readouts that need the panels as parts.
+const OF_PARTS: [&str; 2] = ["Families", "Bevels"];
 
 /// One name and its value.
 pub(super) fn readout(ui: &mut Ui, name: &str, value: &str) {

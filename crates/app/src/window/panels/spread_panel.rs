@@ -16,7 +16,8 @@ const TALLEST: f32 = 44.0;
 /// The spreads of the shell as it is, kept until it changes.
 #[derive(Debug, Default)]
 pub(in crate::window) struct SpreadCache {
-    grown: Option<u64>,
+    /// The revision of the parts that they were worked out of.
+    parts: Option<u64>,
     spreads: Vec<Option<Spread>>,
 }
 
@@ -24,8 +25,8 @@ pub(in crate::window) struct SpreadCache {
 pub(super) fn spread_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     let derived = &cx.state.derived;
     let cache = &mut widgets.spreads;
-    if cache.grown != Some(derived.counts.grown) {
-        cache.grown = Some(derived.counts.grown);
+    if cache.parts != Some(derived.parts_revision()) {
+        cache.parts = Some(derived.parts_revision());
         cache.spreads = Measure::ALL
             .map(|measure| Spread::of(&derived.parts, measure, MOST_CLASSES))
             .to_vec();

@@ -72,6 +72,41 @@ fn width(shell: &Shell, camera: &Camera, panel: u32) -> f32 {
     area / longest.into_iter().fold(1.0, f32::max)
 }
 
+/// How near the pointer must come to an edge to take hold of it, in points: less than to something that is drawn larger, so
+/// that faces can still be pressed on.
+const EDGE_REACH: f32 = 5.0;
+
+/// An edge shorter than this on the picture, in points, cannot be taken hold of: nothing of the faces beside it would be left.
+const LEAST_EDGE: f32 = 14.0;
+
+/// The edge of the shell that the pointer takes hold of; near a vertex it is the nearest of the edges there.
+pub(super) fn edge_at(state: &State, camera: &Camera, pos: egui::Vec2) -> Option<u32> {
+    let (scene, shell) = (&state.derived.scene, &state.derived.shell);
+    let lens = camera.lens();
+    let seen = |v: u32| Some(egui::Vec2::from(lens.project(*shell.points.get(v as usize)?)?.pos));
+    let edge = match pick(scene, shell, camera, [pos.x, pos.y], EDGE_REACH)? {
+        Pick::Panel(_) => return None,
+        Pick::Edge(edge) => edge,
+        Pick::Vertex(vertex) => {
+            let mut best: Option<(f32, u32)> = None;
+            for (index, edge) in (0_u32..).zip(&shell.edges) {
+                if !edge.ends.contains(&vertex) {
+                    continue;
+                }
+                let (a, b) = (seen(edge.ends[0])?, seen(edge.ends[1])?);
+                let share = ((pos - a).dot(b - a) / (b - a).length_sq().max(f32::MIN_POSITIVE)).clamp(0.0, 1.0);
+                let away = (a + (b - a) * share - pos).length();
+                if best.is_none_or(|(least, _)| away < least) {
+                    best = Some((away, index));
+                }
+            }
+            best?.1
+        }
+    };
+    let [a, b] = shell.edges.get(edge as usize)?.ends;
+    (LEAST_EDGE <= (seen(b)? - seen(a)?).length()).then_some(edge)
+}
+
 fn nearest(camera: &Camera, pos: egui::Vec2, points: impl Iterator<Item = Point>) -> Option<usize> {
     let lens = camera.lens();
     let mut best: Option<(f32, usize)> = None;

@@ -4,7 +4,10 @@ use egui::{Event, Key, PointerButton, Pos2, Rect, Response, Ui, Vec2};
 use zonewright_geometry::{Point, Vector};
 use zonewright_painter::Camera;
 
-use super::hit::{self, Hit};
+use super::{
+    hit::{self, Hit},
+    point_snap, zone_drag,
+};
 use crate::window::{
     command::Command,
     panels::Cx,
@@ -15,6 +18,7 @@ use crate::window::{
     splice_marks::v_name,
     thing::{Kind, Thing},
     widgets::{Drag, Widgets},
+    zones::ZoneAct,
 };
 
 /// Points of scrolling that double the size.
@@ -53,6 +57,11 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets)
         };
         widgets.over_thing = over.map(|thing| (at, thing));
     }
+    if hit.is_none()
+        && let Some(pos) = hovered.filter(|_| widgets.drag.is_none())
+    {
+        zone_drag::hover(cx, ui, at, pos, &mut widgets.zones);
+    }
     if hit.is_some() {
         ui.ctx().set_cursor_icon(egui::CursorIcon::PointingHand);
     }
@@ -68,14 +77,19 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets)
         clicked(cx, ui, seen);
     }
     if response.drag_started() {
-        widgets.drag = begin(cx, ui, seen);
+        widgets.drag = begin(cx, ui, seen, widgets);
         widgets.drag_pane = at;
     }
     if let Some(drag) = widgets.drag.filter(|_| widgets.drag_pane == at) {
         if response.dragged() {
-            drag_on(cx, ui, seen, drag);
+            drag_on(cx, ui, seen, drag, widgets);
         } else {
+            // Escape ends a drag while the button is still down.
+            if drag.edits() && ui.input(|i| i.key_pressed(Key::Escape)) {
+                cx.tx.send(Command::Zone(ZoneAct::TakeBack));
+            }
             widgets.drag = None;
+            widgets.zones.end();
         }
     }
     if response.contains_pointer() {
@@ -90,7 +104,10 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets)
     }
     if response.has_focus() {
         keys(cx, ui, seen);
-        step_keys(cx, ui);
+        // While something is dragged, letters are its locks.
+        if widgets.drag.is_none() {
+            step_keys(cx, ui);
+        }
     }
 }
 
@@ -141,7 +158,7 @@ fn clicked(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) {
 
 /// The drag that a pressed button begins. The ground of a free view turns it, that of a measured drawing moves it along; with shift it
 /// is the other way round. The middle button always moves, the second one always turns.
-fn begin(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) -> Option<Drag> {
+fn begin(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets) -> Option<Drag> {
     let Seen { at, rect, response } = seen;
     let pane = cx.state.panes.pane(at);
     let shift = ui.input(|i| i.modifiers.shift);
@@ -166,11 +183,19 @@ fn begin(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) -> Option<Drag> {
     let from = ui
         .input(|i| i.pointer.press_origin())
         .or_else(|| response.interact_pointer_pos())?;
-    let Some(Hit::Point(point)) = hit::at(cx.state, &pane.camera, from - rect.min) else {
-        return Some(ground);
+    let point = match hit::at(cx.state, &pane.camera, from - rect.min) {
+        Some(Hit::Point(point)) => point,
+        Some(Hit::V(_)) => return Some(ground),
+        None => {
+            let zone = zone_drag::begin(cx.state, &pane.camera, from, rect);
+            let drag = if zone.is_some() { Drag::Zone } else { ground };
+            widgets.zones.drag = zone;
+            return Some(drag);
+        }
     };
     let path = cx.state.derived.path.as_ref()?;
     cx.tx.send(Command::SelectPoint(Some(point)));
+    widgets.zones.point = point_snap::PointSnap::begin(cx.state, path, point);
     Some(Drag::Point {
         point,
         own: *path.own.get(point)?,
@@ -179,7 +204,7 @@ fn begin(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) -> Option<Drag> {
     })
 }
 
-fn drag_on(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, drag: Drag) {
+fn drag_on(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, drag: Drag, widgets: &mut Widgets) {
     let Seen { at, response, .. } = seen;
     let camera = &cx.state.panes.pane(at).camera;
     // What lies under the pointer when the button goes down stays under it, also through the first small movements, which do
@@ -201,21 +226,34 @@ fn drag_on(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, drag: Drag) {
             let (Some(pos), Some(path)) = (response.interact_pointer_pos(), &cx.state.derived.path) else {
                 return;
             };
-            let to = own + moved(camera, ui, path, placed, pos - from);
+            let held = zone_drag::Held::now(cx.state, ui, at);
+            let by = moved(camera, path, placed, pos - from, held);
+            let by = widgets.zones.snap_point(cx, camera, placed, path, by, held);
             let rule = cx.state.view.rule;
-            cx.tx.send(Command::Path(PathEdit::Move { point, to, rule }));
+            cx.tx.send(Command::Path(PathEdit::Move {
+                point,
+                to: own + by,
+                rule,
+            }));
+        }
+        Drag::Zone => {
+            let held = zone_drag::Held::now(cx.state, ui, at);
+            if let Some(pos) = response.interact_pointer_pos()
+                && let Some(act) = widgets.zones.drag_on(cx, camera, pos, held)
+            {
+                cx.tx.send(Command::Zone(act));
+            }
+            ui.ctx().set_cursor_icon(egui::CursorIcon::Grabbing);
         }
         _ => {}
     }
 }
 
 /// The movement of a dragged point in the path's own frame; while x, y or z is held down, only along that axis.
-fn moved(camera: &Camera, ui: &Ui, path: &PlacedPath, placed: Point, by: Vec2) -> Vector {
+fn moved(camera: &Camera, path: &PlacedPath, placed: Point, by: Vec2, held: zone_drag::Held) -> Vector {
     let across = camera.move_in_view_plane(placed, by.x, by.y);
     let own = path.own_movement(across);
-    let axes = [(Key::X, Vector::X), (Key::Y, Vector::Y), (Key::Z, Vector::Z)];
-    let held = axes.into_iter().find(|(key, _)| ui.input(|i| i.key_down(*key)));
-    held.map_or(own, |(_, axis)| axis * own.dot(axis))
+    held.axis.map_or(own, |axis| axis * own.dot(axis))
 }
 
 fn wheel(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) {

@@ -5,7 +5,13 @@ mod front_marks;
 mod hit;
 mod input;
 mod marks;
+mod overlay;
+mod point_snap;
 mod select_marks;
+mod snapping;
+mod zone_drag;
+
+pub(super) use zone_drag::ZoneWork;
 
 use egui::{Rect, Role, Sense, Ui, WidgetInfo};
 use zonewright_geometry::{Shell, Side};
@@ -70,10 +76,12 @@ pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     let (whole, _) = ui.allocate_exact_size(size, Sense::hover());
     widgets.over_pane = None;
     widgets.over_thing = None;
+    widgets.zones.over = None;
     let layout = cx.state.panes.layout;
     for (at, rect) in places(layout, whole, GAP).into_iter().enumerate() {
         pane_ui(cx, ui, at, rect, widgets);
         bar::pane_bar_ui(cx, ui, at, rect);
+        overlay::overlay_ui(cx, ui, at, rect, &widgets.zones);
     }
 }
 
@@ -131,6 +139,10 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
         response: &response,
     };
     input::handle(cx, ui, seen, widgets);
+    if let Some(said) = overlay::said(cx.state, at, &widgets.zones) {
+        ui.ctx()
+            .accesskit_node_builder(response.id, |node| node.set_description(said));
+    }
     put_together(cx, at, widgets);
     let painter = ui.painter_at(rect);
     painter.rect_filled(rect, 0.0, cx.state.colours().picture());

@@ -43,6 +43,8 @@ impl Shown {
                 };
                 (measure, vec![at])
             }
+            // Until the parts are there, the places in them are those of another shell.
+            Self::Class(..) if derived.pending().is_some() => return None,
             Self::Class(measure, class) => {
                 let spread = Spread::of(&derived.parts, measure, MOST_CLASSES)?;
                 (measure, spread.members(&derived.parts, class))

@@ -68,7 +68,7 @@ pub(super) fn lane_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets, lane: Rect) {
     widgets.strip.zoom.offset = sight.offset;
     let pointed = point(cx, ui, widgets, &ground, &sight, side);
     let key = ToldKey {
-        revision: cx.state.derived.revision,
+        revision: cx.state.derived.growth(),
         side,
         view: cx.state.view.strip.clone(),
         hand: cx.state.view.hand.clone(),

@@ -30,7 +30,7 @@ impl Kept {
     /// The outline of a front in sight; `line` is the least height of a column.
     pub(super) fn shape(&mut self, state: &State, side: Side, sight: &Sight, line: f32, vs: bool) -> Shape {
         let key = Key {
-            revision: state.derived.revision,
+            revision: state.derived.growth(),
             side,
             dark: state.view.dark,
             sight: *sight,

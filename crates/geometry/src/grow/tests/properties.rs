@@ -63,7 +63,7 @@ fn act() -> impl Strategy<Value = Act> {
     ]
 }
 
-fn record() -> impl Strategy<Value = Shape> {
+pub(super) fn record() -> impl Strategy<Value = Shape> {
     (path(), prop::collection::vec((act(), any::<bool>()), 0..6)).prop_map(|(path, acts)| {
         let (acts, aft): (Vec<Act>, Vec<bool>) = acts.into_iter().unzip();
         let mut shape = shape(path, acts);
@@ -110,7 +110,7 @@ proptest! {
         let shape = shape(path, Vec::new());
         let word = shape.start.first_word().unwrap();
         let alphabet = Alphabet::of_start(&word, &shape).unwrap();
-        let mut growing = Growing { shape: &shape, alphabet, mesh: Mesh::default(), start_zones: 0 };
+        let mut growing = Growing { shape: &shape, alphabet, mesh: Mesh::default(), start_zones: 0, hull: [None, None], lift: None };
         for mut front in Front::both(&word, word.closed, &growing.alphabet, &mut growing.mesh) {
             front.lay(Courses::Count(before), spurs, &growing.alphabet, &mut growing.mesh);
             front.check(&growing.alphabet, &growing.mesh);
