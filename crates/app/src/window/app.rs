@@ -5,6 +5,7 @@ use std::path::PathBuf;
 use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
 
 use super::{
+    backdrop::BackdropAct,
     command::{Command, Sender},
     derived::Counts,
     dialogs::Asked,
@@ -157,6 +158,8 @@ impl App {
             let is_path = path_box::fits_ending(&path, Asked::Import.endings());
             self.sender.send(if is_path {
                 Command::ImportPath(path)
+            } else if path_box::fits_ending(&path, Asked::Backdrop.endings()) {
+                Command::Backdrop(BackdropAct::LoadPath(path))
             } else {
                 Command::OpenPath(path)
             });
@@ -193,6 +196,7 @@ impl App {
     fn follow(&mut self, ctx: &egui::Context) {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
+        execute::follow_fit(state);
         let design = std::sync::Arc::clone(state.design());
         execute::keep_climbed(state);
         state.derived.climb(state.view.ladder.climbed);

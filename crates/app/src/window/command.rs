@@ -10,8 +10,8 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, selection::SelectAct,
-    strip::StripAct, view::Hand, zones::ZoneAct,
+    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct,
+    selection::SelectAct, strip::StripAct, view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -30,6 +30,8 @@ pub enum Command {
     Import,
     /// Imports the path in this file as the start.
     ImportPath(PathBuf),
+    /// Something about the backdrop.
+    Backdrop(BackdropAct),
     /// Saves under the name that the design has; asks when it has none.
     Save,
     /// Saves under another name: asks which.
@@ -211,6 +213,7 @@ impl Command {
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(SelectAct::listed().map(Self::Select));
+        all.extend(BackdropAct::listed().map(Self::Backdrop));
         all.extend(ZoneAct::listed().map(Self::Zone));
         all.extend(StripAct::listed().map(Self::Strip));
         all
@@ -227,6 +230,7 @@ impl Command {
                 "Import a path…",
                 "Makes the path in a CSV, DXF or SVG file the start of the design.",
             ),
+            Self::Backdrop(act) => return act.words(),
             Self::Save | Self::SaveTo(_) => ("Save", "Saves the design under its name."),
             Self::SaveAs => ("Save as…", "Saves the design under another name."),
             Self::Export | Self::ExportTo(_) => ("Export…", "Writes lists, models and drawings into a folder."),

@@ -5,6 +5,7 @@ use zonewright_painter::{Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
+    backdrop::BackdropAct,
     command::Command,
     kinds,
     ladder::LadderAct,
@@ -21,7 +22,16 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                     named(cx, ui, kind.name, Command::New(kind.word));
                 }
             });
-            items(cx, ui, [Command::Open, Command::OpenSample, Command::Import]);
+            items(
+                cx,
+                ui,
+                [
+                    Command::Open,
+                    Command::OpenSample,
+                    Command::Import,
+                    Command::Backdrop(BackdropAct::Load),
+                ],
+            );
             ui.separator();
             items(cx, ui, [Command::Save, Command::SaveAs, Command::Export]);
             ui.separator();

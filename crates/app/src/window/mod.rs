@@ -5,6 +5,8 @@
 //! (`derived`).
 
 mod app;
+mod backdrop;
+mod backdrop_view;
 mod command;
 mod derived;
 mod dialogs;
@@ -41,6 +43,8 @@ mod zones;
 use std::path::{Path, PathBuf};
 
 pub use app::App;
+pub use backdrop::{BackdropAct, BackdropState};
+pub use backdrop_view::BackdropView;
 pub use command::{Command, Unsaved};
 pub use derived::{Counts, Derived, Pending};
 pub use history::History;

@@ -7,8 +7,8 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, readings::Remembered,
-    theme::Theme, view::ViewState, worker::Worker,
+    backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes,
+    readings::Remembered, theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -34,6 +34,8 @@ pub struct State {
     pub(crate) followed: u64,
     /// What follows from the design.
     pub derived: Derived,
+    /// What is done with the backdrop.
+    pub backdrop: BackdropState,
     /// Slow stages.
     pub worker: Worker,
     /// Questions to the system.
@@ -69,6 +71,7 @@ impl State {
             panes: Panes::default(),
             followed: 0,
             derived: Derived::new(),
+            backdrop: BackdropState::default(),
             worker,
             dialogs: Dialogs::default(),
             message: None,

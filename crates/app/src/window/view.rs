@@ -44,6 +44,8 @@ pub struct ViewState {
     pub panel: Option<(u32, PanelName)>,
     /// The picked vertex or edge, and what is measured.
     pub selection: Selection,
+    /// Whether distances to the backdrop are coloured without their side.
+    pub without_sign: bool,
     /// The picked zone, and how zones are dragged.
     pub zones: ZoneView,
     /// What follows a dragged point.
@@ -70,6 +72,7 @@ impl Default for ViewState {
             point: None,
             panel: None,
             selection: Selection::default(),
+            without_sign: false,
             zones: ZoneView::default(),
             rule: DragRule::Neighbours,
             ladder: LadderView::default(),

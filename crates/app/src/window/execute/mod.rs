@@ -1,5 +1,6 @@
 //! The executor: the only code that changes the state of the window.
 
+mod backdrop;
 mod file;
 mod finish;
 mod ladder;
@@ -14,6 +15,7 @@ mod strip;
 mod view;
 mod zones;
 
+pub(crate) use backdrop::follow_fit;
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use ladder::keep_climbed;
@@ -64,6 +66,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),
         Command::SetStart(start, field) => shape::set_start(state, *start, field),
+        Command::Backdrop(act) => backdrop::run(state, act),
         Command::ImportPath(path) => shape::import_path(state, &path),
         Command::FreePoints => shape::free_points(state),
         Command::ShareGap => path::share_gap(state),

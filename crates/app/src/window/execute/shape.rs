@@ -12,7 +12,7 @@ use crate::{
 };
 
 /// How far the chords of an imported curve may be from it, in millimetres: a tenth, as on the command line.
-const FLATTENING_MM: f64 = 0.1;
+pub(super) const FLATTENING_MM: f64 = 0.1;
 
 /// Changes the kind of start. The steps stay: they say so themselves when they find nothing.
 pub(super) fn set_kind(state: &mut State, word: &'static str) {

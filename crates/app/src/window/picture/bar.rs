@@ -33,7 +33,7 @@ const FACES: [(Faces, &str); 3] = [
     (Faces::Wireframe, "Edges only"),
 ];
 
-const COLOURS: [(ColourBy, &str); 7] = [
+const COLOURS: [(ColourBy, &str); 8] = [
     (ColourBy::Plain, "Plain"),
     (ColourBy::Zone, "By zone"),
     (ColourBy::Family, "By family"),
@@ -41,6 +41,7 @@ const COLOURS: [(ColourBy, &str); 7] = [
     (ColourBy::Slope, "By slope"),
     (ColourBy::Fold, "By fold"),
     (ColourBy::Finding, "By finding"),
+    (ColourBy::Distance, "By distance"),
 ];
 
 /// Draws the bar above all views: which views there are, and how faces and edges are drawn in all of them.
