@@ -30,6 +30,8 @@ pub struct State {
     pub view: ViewState,
     /// From where one looks, in each of the views.
     pub panes: Panes,
+    /// The growth that what is picked was found again in.
+    pub(crate) followed: u64,
     /// What follows from the design.
     pub derived: Derived,
     /// What is done with the backdrop.
@@ -69,6 +71,7 @@ impl State {
             path,
             view: ViewState::default(),
             panes: Panes::default(),
+            followed: 0,
             derived: Derived::new(),
             backdrop: BackdropState::default(),
             worker,

@@ -11,6 +11,7 @@ mod panels;
 mod panes;
 mod readings;
 mod safe;
+mod selection;
 mod solving;
 mod strip;
 mod view;

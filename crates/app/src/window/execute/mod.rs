@@ -8,6 +8,7 @@ mod panes;
 mod path;
 mod readings;
 mod safe;
+mod select;
 mod shape;
 mod solving;
 mod splice;
@@ -22,6 +23,7 @@ pub(crate) use finish::keep_picked;
 pub(crate) use ladder::keep_climbed;
 pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use path::moved_path;
+pub(crate) use select::picked;
 pub(crate) use solving::follow_search;
 
 use super::{command::Command, state::State};
@@ -87,6 +89,7 @@ pub(super) fn run(state: &mut State, command: Command) {
                 state.dialogs.open_own(asked);
             }
         }
+        Command::Select(act) => select::run(state, act),
         other => view::run(state, other),
     }
 }

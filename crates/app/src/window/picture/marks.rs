@@ -15,6 +15,7 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     panel_marks(state, &mut marks);
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
+    super::select_marks::select_marks(state, &mut marks);
     front_marks::letter_marks(state, &mut marks);
     front_marks::preview_marks(state, over, &mut marks);
     headroom_marks::marks(state, &mut marks);
