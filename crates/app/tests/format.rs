@@ -199,7 +199,11 @@ fn the_manual_names_every_key_and_has_every_picture_that_it_shows() {
     for command in Command::listed() {
         if let Some(shortcut) = command.shortcut() {
             let shortcut = shortcut.format(&egui::ModifierNames::NAMES, false);
-            assert!(named.contains(shortcut.as_str()), "{shortcut}: {}", command.words().name);
+            assert!(
+                named.contains(shortcut.as_str()),
+                "{shortcut}: {}",
+                command.words().name
+            );
         }
     }
     let mut shown = BTreeSet::new();
@@ -213,7 +217,9 @@ fn the_manual_names_every_key_and_has_every_picture_that_it_shows() {
             shown.extend(target.strip_suffix(".png").map(str::to_owned));
         }
     }
-    let scenes = include_str!("../examples/manual_pictures/scenes.rs").split("name: \"").skip(1);
+    let scenes = include_str!("../examples/manual_pictures/scenes.rs")
+        .split("name: \"")
+        .skip(1);
     let scenes: BTreeSet<String> = scenes.map(|s| s.split('"').next().unwrap().to_owned()).collect();
     assert_eq!(shown, scenes, "pictures shown, scenes made");
 }

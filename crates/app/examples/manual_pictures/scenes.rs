@@ -119,12 +119,23 @@ pub(crate) const SCENES: &[Scene] = &[
     },
     Scene {
         name: "spread",
+        design: "pier-head-housing.ron",
+        size: USUAL,
+        act: |harness| {
+            click(harness, "Readouts");
+            click(harness, "Spread");
+        },
+    },
+    Scene {
+        name: "findings",
         design: "plant-house.ron",
         size: USUAL,
         act: |harness| {
             send(harness, Command::Readings(ReadingAct::Remember));
             send(harness, Command::AddCourse);
-            click(harness, "Spread");
+            send(harness, Command::ShowFinding(Some(0)));
+            harness.get_by_label("Findings").scroll_to_me();
+            harness.run();
         },
     },
     Scene {
