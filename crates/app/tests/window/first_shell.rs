@@ -63,7 +63,7 @@ fn the_five_steps_are_done_on_the_real_controls() {
     click(&mut harness, Role::SpinButton, "Ribs");
     harness.key_press_modifiers(Modifiers::COMMAND, Key::A);
     harness.run();
-    harness.get_by_role_and_label(Role::TextInput, "Ribs").type_text("9");
+    harness.event(egui::Event::Text("9".to_owned()));
     harness.run();
     harness.key_press(Key::Enter);
     harness.run();
@@ -178,7 +178,7 @@ fn an_empty_picture_says_what_to_do_and_offers_it() {
     let mut harness = open(design);
     harness.get_by_label("Nothing has grown yet.");
     harness.get_by_label("Add a course to fill every open V at once.");
-    harness.get_by_label("First shell").click();
+    harness.get_by_label("Make a first shell").click();
     harness.run();
     assert_eq!(at(&harness), Some(0));
 }
@@ -189,9 +189,9 @@ fn whoever_opens_the_window_for_the_first_time_is_offered_it() {
         .with_size([1280.0, 800.0])
         .build_eframe(|cc| App::new_headless(&cc.egui_ctx, polar(Some(2))).with_offer(true));
     harness.run();
-    harness.get_by_label("First shell");
+    harness.get_by_label("Make a first shell");
     harness.get_by_label("Close the offer").click();
     harness.run();
-    assert!(harness.query_by_label("First shell").is_none());
+    assert!(harness.query_by_label("Make a first shell").is_none());
     assert!(!harness.state().state().guide.offered);
 }

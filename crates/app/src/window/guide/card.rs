@@ -43,7 +43,7 @@ pub(in crate::window) fn card_ui(cx: Cx<'_>, ui: &mut Ui) {
     } else if guide.offered {
         frame(cx, ui, |ui| {
             ui.horizontal_wrapped(|ui| {
-                ui.label("New here? Five short steps on the real controls make a first shell.");
+                ui.label("New here? Five short steps on the real controls:");
                 offer_ui(cx, ui);
                 if ui.button("Close").accessible_name("Close the offer").clicked() {
                     cx.tx.send(Command::Guide(GuideAct::Leave));
@@ -55,8 +55,8 @@ pub(in crate::window) fn card_ui(cx: Cx<'_>, ui: &mut Ui) {
 
 /// Draws the button that begins.
 pub(in crate::window) fn offer_ui(cx: Cx<'_>, ui: &mut Ui) {
-    let words = GuideAct::Begin.words();
-    if ui.button(words.name).on_hover_text(words.hint).clicked() {
+    let hint = GuideAct::Begin.words().hint;
+    if ui.button("Make a first shell").on_hover_text(hint).clicked() {
         cx.tx.send(Command::Guide(GuideAct::Begin));
     }
 }

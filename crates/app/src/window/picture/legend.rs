@@ -151,6 +151,8 @@ fn line(ui: &mut Ui, at: Pos2, width: f32, contents: impl FnOnce(&mut Ui)) {
     ui.scope_builder(builder, |ui| {
         ui.spacing_mut().item_spacing.x = 6.0;
         ui.spacing_mut().interact_size.y = ROW;
+        // A text that can be selected would take the drags that turn the picture.
+        ui.style_mut().interaction.selectable_labels = false;
         contents(ui);
     });
 }

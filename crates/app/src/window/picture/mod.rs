@@ -245,12 +245,15 @@ fn empty_ui(cx: Cx<'_>, ui: &mut Ui, rect: Rect) {
     // The card of the first shell says what to do, while there is one.
     let lines: &[&str] = if guided { &[] } else { &LINES };
     let step = ui.text_style_height(&egui::TextStyle::Body) + ui.spacing().item_spacing.y;
-    let above = (rect.height() - step * (lines.len() as f32 + 2.0)) * 0.5;
+    // At the foot, so that the path in the middle stays to be seen.
+    let above = rect.height() - step * (lines.len() as f32 + if guided { 1.5 } else { 3.5 });
     let room = Rect::from_min_max(egui::pos2(rect.left() + 16.0, rect.top() + above.max(36.0)), rect.max);
     let builder = egui::UiBuilder::new()
         .max_rect(room.with_max_x(rect.right() - 16.0))
         .id_salt("empty");
     ui.scope_builder(builder, |ui| {
+        // A text that can be selected would take the drags that turn the picture.
+        ui.style_mut().interaction.selectable_labels = false;
         ui.vertical_centered(|ui| {
             ui.label("Nothing has grown yet.");
             for line in lines {
