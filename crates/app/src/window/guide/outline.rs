@@ -8,15 +8,15 @@ use crate::window::panels::Cx;
 /// Width of the outline, in points.
 const WIDTH: f32 = 2.0;
 
-/// The control that the step is about, while there is one.
-pub(in crate::window) fn wanted(cx: Cx<'_>) -> Option<Target> {
-    let going = cx.state.guide.going.as_ref()?;
-    steps::asked(cx.state, going).0
+/// The controls that the step is about.
+pub(in crate::window) fn wanted(cx: Cx<'_>) -> &'static [Target] {
+    let going = cx.state.guide.going.as_ref();
+    going.map_or(&[], |going| steps::asked(cx.state, going).0)
 }
 
 /// Draws the outline round a control, when the step is about it.
 pub(in crate::window) fn outline(cx: Cx<'_>, ui: &Ui, target: Target, rect: Rect) {
-    if wanted(cx) == Some(target) {
+    if wanted(cx).contains(&target) {
         let corner = f32::from(cx.state.theme.sizes.corner);
         let stroke = Stroke::new(WIDTH, cx.state.colours().accent());
         ui.painter()

@@ -1,6 +1,6 @@
 //! The five steps, and when each is done.
 
-use zonewright_geometry::{Act, Place, Start};
+use zonewright_geometry::{Act, Start};
 
 use crate::window::state::State;
 
@@ -46,18 +46,12 @@ pub struct Going {
     pub at: usize,
     /// The start as it was when this step began.
     pub start: Start,
-    /// Whether the place of a finding was looked at.
-    pub looked: bool,
 }
 
 impl Going {
     /// The first step, on a start.
     pub(in crate::window) const fn new(start: Start) -> Self {
-        Self {
-            at: 0,
-            start,
-            looked: false,
-        }
+        Self { at: 0, start }
     }
 }
 
@@ -70,12 +64,9 @@ pub(in crate::window) fn follow(state: &mut State) {
     let Some(mut going) = state.guide.going.take() else {
         return;
     };
-    going.looked |= state.view.finding.is_some();
     while going.at < STEPS && is_done(state, &going) {
         going.at += 1;
         going.start.clone_from(&state.shape().start);
-        // What was looked at before the last step does not count for it.
-        going.looked = false;
     }
     state.guide.going = Some(going);
 }
@@ -87,47 +78,40 @@ fn is_done(state: &State, going: &Going) -> bool {
         1 => shape.start != going.start,
         2 => COURSES <= state.derived.shell.courses.len(),
         3 => shape.steps.iter().any(|s| s.on && matches!(s.act, Act::Splice { .. })),
-        4 => looked(state, going) && state.path.is_some() && !state.history.unsaved(),
+        4 => state.path.is_some() && !state.history.unsaved(),
         _ => false,
     }
 }
 
-/// Whether the findings were looked at, or have no place that could be.
-fn looked(state: &State, going: &Going) -> bool {
-    let has_place = |place: &Place| matches!(place, Place::Vertices(_) | Place::Edges(_) | Place::Panels(_));
-    going.looked || !state.derived.findings.iter().any(|f| has_place(&f.place))
-}
-
 /// What a step is about, and what it asks for.
-pub(super) fn asked(state: &State, going: &Going) -> (Option<Target>, &'static str) {
+pub(super) fn asked(state: &State, going: &Going) -> (&'static [Target], &'static str) {
     match going.at {
         0 => (
-            Some(Target::Kind),
+            &[Target::Kind],
             "On the left, choose Polar form as the kind of start: equal ribs round a pole.",
         ),
         1 => (
-            Some(Target::Parameters),
+            &[Target::Parameters],
             "Change the number of ribs, or the pitch. The front strip below shows the front that follows.",
         ),
         2 => (
-            Some(Target::Courses),
+            &[Target::Courses],
             "Add two courses. Each fills every open V of the front once, with a panel.",
         ),
         3 if has_open_v(state) => (
-            Some(Target::Strip),
+            &[Target::Strip],
             "Click an open V in the front strip. The directions in hand are spliced there, and the next course goes round them.",
         ),
         3 => (
-            Some(Target::Courses),
+            &[Target::Courses],
             "The front has no open V left. Take a course away again with −, then click an open V in the front strip.",
         ),
-        4 if !looked(state, going) => (
-            Some(Target::Findings),
-            "Findings say what stands in the way of building. Press Show at one of them to see its place.",
+        4 => (
+            &[Target::Findings, Target::File],
+            "Read the findings on the right: they say what stands in the way of building. Then save the design: File, Save.",
         ),
-        4 => (Some(Target::File), "Save the design: File, Save."),
         _ => (
-            None,
+            &[],
             "That is a first shell, and it is saved. Export in the File menu writes its lists and drawings.",
         ),
     }

@@ -127,8 +127,8 @@ fn section(cx: Cx<'_>, ui: &mut Ui, title: &str, open: bool, contents: impl FnOn
             ui.add_space(ui.spacing().item_spacing.y);
         });
     // Of a section that is folded away, the first shell marks the head; of the findings always, for they may be many.
-    let wanted = guide::wanted(cx).filter(|target| target.section() == Some(title));
-    if let Some(target) = wanted
+    let mut wanted = guide::wanted(cx).iter().copied();
+    if let Some(target) = wanted.find(|target| target.section() == Some(title))
         && (shown.openness < 1.0 || target == Target::Findings)
     {
         guide::outline(cx, ui, target, shown.header_response.rect);
