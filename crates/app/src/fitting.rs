@@ -24,6 +24,8 @@ pub struct FitWish {
     pub parts: [u32; 2],
     /// See [`FitOptions::smoothing`].
     pub smoothing: f64,
+    /// How much covering the whole backdrop counts; see [`FitOptions::cover`]. Not used for one of lines.
+    pub cover: f64,
     /// The most iterations.
     pub iterations: u32,
     /// Whether the corners of the surface, or the ends of the path, stay where the fit begins.
@@ -35,11 +37,12 @@ pub struct FitWish {
 }
 
 impl Default for FitWish {
-    /// 12 by 8 parts, from the middle lines, with a little smoothing: enough to even out the edges of a smooth form.
+    /// 12 by 8 parts, from the middle lines over the whole backdrop, with a little smoothing: enough to even out the edges of a smooth form.
     fn default() -> Self {
         Self {
             parts: [12, 8],
             smoothing: 0.01,
+            cover: 1.0,
             iterations: 200,
             hold_ends: false,
             begin: Begin::MiddleLines,
@@ -50,6 +53,9 @@ impl Default for FitWish {
 
 /// The most smoothing that is taken: beyond it paths are straight.
 pub const MAX_SMOOTHING: f64 = 1e6;
+
+/// The most that covering may count: beyond it the nodes hardly matter.
+pub const MAX_COVER: f64 = 1e3;
 
 /// The most iterations that may be asked for.
 pub const MAX_ITERATIONS: u32 = 100_000;
@@ -71,6 +77,12 @@ impl FitWish {
             return Err(format!(
                 "a smoothing of {} cannot be used; give 0 to {MAX_SMOOTHING}",
                 self.smoothing
+            ));
+        }
+        if !(0.0..=MAX_COVER).contains(&self.cover) {
+            return Err(format!(
+                "a cover of {} cannot be used; give 0 to {MAX_COVER}",
+                self.cover
             ));
         }
         if !(1..=MAX_ITERATIONS).contains(&self.iterations) {
@@ -123,6 +135,8 @@ impl FitWish {
         let options = FitOptions {
             iterations: self.iterations,
             smoothing: self.smoothing,
+            // The points of an arch are to be on it, not its chords about it.
+            cover: if target.is_curve() { 0.0 } else { self.cover },
             hold_ends: self.hold_ends,
             ..FitOptions::default()
         };

@@ -364,7 +364,7 @@ fn fit_brings_a_design_to_a_mesh_and_prints_its_history() {
         "fit a.ron --target a.obj --unit m --zig 8 --zag 6 --smoothing 0 -o out.ron",
     );
     let lines: Vec<&str> = history.lines().collect();
-    assert_eq!(lines[0], "iteration,rms_mm,largest_mm");
+    assert_eq!(lines[0], "iteration,rms_mm,largest_mm,uncovered_mm");
     let largest: f64 = lines[1].split(',').nth(2).unwrap().parse().unwrap();
     assert!(largest < 1e-5, "{history}");
     assert!(history.contains("# settled"));

@@ -136,6 +136,48 @@ fn the_plan_of_a_turned_rectangle_is_found() {
 }
 
 #[test]
+fn covering_brings_the_surface_over_the_whole_target() {
+    // A cap is no translation surface: without covering, nodes gather where it is flattest; with it, its rim is reached.
+    let target = cap(4000.0, 2600.0, 16);
+    let begin = middle_lines(&target, [10, 10]);
+    let reach = |cover: f64| {
+        let options = FitOptions {
+            cover,
+            smoothing: 0.01,
+            iterations: 300,
+            ..FitOptions::default()
+        };
+        let fit = fit_translation(&begin, &target, &options, |_| true);
+        assert!(never_rises(&fit.history));
+        let nodes = fit.paths.nodes();
+        let range = |axis: usize| {
+            let along = nodes.iter().map(|p| p.0[axis]);
+            along.clone().fold(f64::MIN, f64::max) - along.fold(f64::MAX, f64::min)
+        };
+        (range(0), range(1))
+    };
+    let (alone, covering) = (reach(0.0), reach(1.0));
+    assert!(alone.0 < 4000.0 && alone.1 < 4000.0, "{alone:?}");
+    assert!(covering.0 > 4700.0 && covering.1 > 4700.0, "{covering:?} of 5200");
+}
+
+#[test]
+fn places_are_spread_evenly() {
+    // Two triangles of 3 : 1 by area get places by their areas; each place lies on the target.
+    let points = vec![
+        Point::ORIGIN,
+        Point::new(60.0, 0.0, 0.0),
+        Point::new(0.0, 10.0, 0.0),
+        Point::new(-20.0, 0.0, 0.0),
+    ];
+    let target = Target::new(points, vec![[0, 1, 2], [0, 2, 3]], &[]).unwrap();
+    let places = target.spread(400);
+    let right = places.iter().filter(|p| p.0.x > 0.0).count();
+    assert!(right.abs_diff(300) <= 2, "{right}");
+    assert!(places.iter().all(|p| target.closest(*p).distance_mm < 1e-9));
+}
+
+#[test]
 fn held_corners_stay() {
     let begin = barrel();
     let target = cap(9000.0, 3000.0, 20);
@@ -354,6 +396,7 @@ proptest! {
         noise in proptest::collection::vec((-400.0..400.0_f64, -400.0..400.0_f64, -400.0..400.0_f64), 18),
         smoothing in prop_oneof![Just(0.0), 0.0..5.0_f64],
         hold_ends in any::<bool>(),
+        cover in prop_oneof![Just(0.0), 0.0..3.0_f64],
     ) {
         let target = cap(5000.0, 2500.0, 10);
         let mut edge = noise.into_iter().map(Vector::from);
@@ -362,10 +405,10 @@ proptest! {
             a: (0..m).map(|_| Vector::X * 500.0 + edge.next().unwrap()).collect(),
             b: (0..n).map(|_| Vector::Y * 500.0 + edge.next().unwrap()).collect(),
         };
-        let options = FitOptions { iterations: 40, settled_mm: 0.0, smoothing, hold_ends };
+        let options = FitOptions { iterations: 40, settled_mm: 0.0, smoothing, cover, hold_ends };
         let fit = fit_translation(&begin, &target, &options, |_| true);
         prop_assert!(never_rises(&fit.history));
-        if smoothing == 0.0 {
+        if smoothing == 0.0 && cover == 0.0 {
             prop_assert!(fit.history.windows(2).all(|two| two[1].rms_mm <= two[0].rms_mm));
         }
     }

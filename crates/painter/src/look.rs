@@ -34,6 +34,8 @@ pub enum ColourBy {
     Fold,
     /// Panels with findings stand out by their gravest level.
     Finding,
+    /// Panels take the colour of their distance to something, on either side of it.
+    Distance,
 }
 
 /// How a picture looks.
@@ -79,6 +81,8 @@ pub struct Tints<'a> {
     pub family: Option<&'a [u32]>,
     /// The gravest finding of each panel.
     pub finding: Option<&'a [Option<Level>]>,
+    /// The distance of each panel as a share of the largest, from -1 inside to 1 outside.
+    pub distance: Option<&'a [f32]>,
     /// Which panels are selected: their colour is mixed with that of the selection.
     pub selected: Option<&'a [bool]>,
 }

@@ -49,7 +49,7 @@ pub enum MarkKind {
         /// The width of the line.
         width: f32,
     },
-    /// A line through the points.
+    /// A line through the points; one that is not finite makes a gap.
     Line {
         /// The width of the line.
         width: f32,

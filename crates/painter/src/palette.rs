@@ -94,6 +94,13 @@ impl Palette {
         colour.mix(Colour::hex(0xFF_FFFF), pale)
     }
 
+    /// The colour of a distance: pale at 0, towards that of valleys at -1 and of ridges at 1.
+    #[must_use]
+    pub fn distance(&self, share: f32) -> Colour {
+        let end = self.fold[if share < 0.0 { 0 } else { 2 }];
+        self.outside.mix(self.background, 0.5).mix(end, share.abs())
+    }
+
     /// The colour of a finding's level.
     #[must_use]
     pub const fn level(&self, level: Level) -> Colour {

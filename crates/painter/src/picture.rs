@@ -96,6 +96,27 @@ impl Picture {
             .count()
     }
 
+    /// Adds another picture's items behind all of this one's.
+    pub fn under(&mut self, behind: &Self) {
+        let first = index(self.points.len());
+        self.points.extend_from_slice(&behind.points);
+        let moved = behind.items.iter().map(|item| Item {
+            first: item.first + first,
+            ..*item
+        });
+        self.items.splice(0..0, moved);
+    }
+
+    /// Adds another picture's items in front of all of this one's.
+    pub fn over(&mut self, before: &Self) {
+        let first = index(self.points.len());
+        self.points.extend_from_slice(&before.points);
+        self.items.extend(before.items.iter().map(|item| Item {
+            first: item.first + first,
+            ..*item
+        }));
+    }
+
     /// Adds an item with its points.
     pub fn push(&mut self, points: impl IntoIterator<Item = [f32; 2]>, colour: Colour, paint: Paint) {
         let first = index(self.points.len());

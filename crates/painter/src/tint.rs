@@ -82,6 +82,11 @@ impl<'a> Paints<'a> {
                 Some(palette.slope[0].mix(palette.slope[1], (slope / FRAC_PI_2) as f32))
             }
             ColourBy::Fold => Some(palette.outside.mix(palette.background, 0.5)),
+            ColourBy::Distance => self
+                .tints
+                .distance
+                .and_then(|all| all.get(panel))
+                .map(|&share| palette.distance(share)),
             ColourBy::Finding => Some(
                 self.tints
                     .finding

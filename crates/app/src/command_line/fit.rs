@@ -87,6 +87,9 @@ pub(super) struct FitArguments {
     /// How much the paths are smoothed and their edges made alike; 0 only comes close.
     #[arg(long, value_name = "S", default_value_t = FitWish::default().smoothing)]
     smoothing: f64,
+    /// How much covering the whole target counts, beside that the nodes come close to it.
+    #[arg(long, value_name = "C", default_value_t = FitWish::default().cover)]
+    cover: f64,
     /// Leave the corners of the surface, or the ends of the path, where the fit begins.
     #[arg(long)]
     hold_ends: bool,
@@ -127,6 +130,7 @@ impl FitArguments {
         let wish = FitWish {
             parts: [self.zig, self.zag],
             smoothing: self.smoothing,
+            cover: self.cover,
             iterations: self.iterations,
             hold_ends: self.hold_ends,
             begin: match self.begin {
@@ -142,10 +146,10 @@ impl FitArguments {
         let fit = wish.run(&begin, &target, |_| true);
         design.shape = wish.applied(&design.shape, &fit)?;
         write_design(&self.output, &design).map_err(|error| error.to_string())?;
-        let mut history = "iteration,rms_mm,largest_mm\n".to_owned();
+        let mut history = "iteration,rms_mm,largest_mm,uncovered_mm\n".to_owned();
         for (k, step) in fit.history.iter().enumerate() {
-            let (rms, largest) = (text::trimmed(step.rms_mm, 6), text::trimmed(step.largest_mm, 6));
-            let _ = writeln!(history, "{k},{rms},{largest}");
+            let figures = [step.rms_mm, step.largest_mm, step.uncovered_mm].map(|mm| text::trimmed(mm, 6));
+            let _ = writeln!(history, "{k},{}", figures.join(","));
         }
         history.push_str(match fit.end {
             FitEnd::Settled => "# settled: nothing moves any more\n",

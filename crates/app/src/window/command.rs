@@ -10,8 +10,8 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, strip::StripAct, view::Hand,
-    zones::ZoneAct,
+    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct,
+    strip::StripAct, view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -30,6 +30,8 @@ pub enum Command {
     Import,
     /// Imports the path in this file as the start.
     ImportPath(PathBuf),
+    /// Something about the backdrop.
+    Backdrop(BackdropAct),
     /// Saves under the name that the design has; asks when it has none.
     Save,
     /// Saves under another name: asks which.
@@ -130,6 +132,8 @@ pub enum Command {
     SelectPanel(Option<u32>),
     /// What the readouts are told.
     Readings(ReadingAct),
+    /// Recovers, reloads, overwrites, goes several steps back.
+    Safe(SafeAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -208,6 +212,8 @@ impl Command {
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
+        all.extend(super::safe::listed());
+        all.extend(BackdropAct::listed().map(Self::Backdrop));
         all.extend(ZoneAct::listed().map(Self::Zone));
         all.extend(StripAct::listed().map(Self::Strip));
         all
@@ -224,6 +230,7 @@ impl Command {
                 "Import a path…",
                 "Makes the path in a CSV, DXF or SVG file the start of the design.",
             ),
+            Self::Backdrop(act) => return act.words(),
             Self::Save | Self::SaveTo(_) => ("Save", "Saves the design under its name."),
             Self::SaveAs => ("Save as…", "Saves the design under another name."),
             Self::Export | Self::ExportTo(_) => ("Export…", "Writes lists, models and drawings into a folder."),
@@ -284,6 +291,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
+            Self::Safe(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

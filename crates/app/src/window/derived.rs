@@ -19,6 +19,7 @@ use zonewright_painter::Scene;
 use zonewright_shop::{FamilyTolerance, FindingWriter, Parts};
 
 use super::{
+    backdrop_view::BackdropView,
     ladder::{Climbed, Ladder, Laid},
     path_place::PlacedPath,
     stages::{Coarse, Grow, Grown, Inspect, Inspected, grow_stages},
@@ -94,6 +95,8 @@ pub struct Derived {
     pub scene: Scene,
     /// Grows whenever `scene` or `families` are other ones.
     pub scene_revision: u64,
+    /// What follows from the backdrop.
+    pub backdrop: BackdropView,
     /// What the inspection found; none until it is there.
     pub inspection: Option<Inspection>,
     /// How often each stage was worked out.
@@ -137,6 +140,7 @@ impl Derived {
             scene_revision: 0,
             shell: Arc::new(shell),
             findings: Vec::new(),
+            backdrop: BackdropView::default(),
             inspection: None,
             counts: Counts::default(),
             asked_for: (0, None),
@@ -192,6 +196,7 @@ impl Derived {
         let until = Instant::now() + PATIENCE;
         let fresh = (revision, self.climbing) != self.asked_for;
         if fresh {
+            self.backdrop.follow(design.backdrop.as_ref());
             let job = self.ask(design, revision, dragging);
             worker.growing.request(job);
         }
@@ -226,6 +231,7 @@ impl Derived {
         if self.asked_for == (revision, self.climbing) && self.pending().is_none() {
             return;
         }
+        self.backdrop.follow(design.backdrop.as_ref());
         let now = self.changed_at;
         let job = self.ask(design, revision, false);
         grow_stages(job, &mut |grown| {
@@ -273,6 +279,7 @@ impl Derived {
         if self.families.len() != self.shell.panels.len() {
             self.families.clear();
         }
+        self.backdrop.grown(self.shell.panels.len());
         self.put_into_words();
         self.inspection = None;
         self.changed_at = now;
@@ -294,6 +301,7 @@ impl Derived {
                     ticket: self.ticket,
                     shell: Arc::clone(&self.shell),
                     tolerances: design.shape.tolerances,
+                    backdrop: design.backdrop.clone(),
                 });
             } else {
                 wait = Some(rest);
@@ -311,6 +319,10 @@ impl Derived {
                     self.inspection = Some(*inspection);
                     self.scene_revision += 1;
                     self.counts.inspected += 1;
+                }
+                Inspected::Left { ticket, left } if ticket == self.ticket => {
+                    self.backdrop.left = left;
+                    self.scene_revision += 1;
                 }
                 _ => {}
             }

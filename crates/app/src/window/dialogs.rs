@@ -10,7 +10,9 @@ use std::{
     time::{Duration, Instant},
 };
 
-use super::{command::Command, execute::ENDING};
+use crate::import::BACKDROPS;
+
+use super::{backdrop::BackdropAct, command::Command, execute::ENDING};
 
 /// An answer of "nothing" that comes faster than this was not given by a user: there is no dialog service. Measured: 3 to
 /// 4 ms without one.
@@ -26,6 +28,8 @@ pub enum Asked {
     Open,
     /// A path to import.
     Import,
+    /// A backdrop to load.
+    Backdrop,
     /// A name to save the design under.
     Save,
     /// A folder to export into.
@@ -39,6 +43,7 @@ impl Asked {
         match self {
             Self::Open => "Open a design",
             Self::Import => "Import a path",
+            Self::Backdrop => "Load a backdrop",
             Self::Save => "Save the design as",
             Self::Export => "Export into a folder",
         }
@@ -50,6 +55,7 @@ impl Asked {
         match self {
             Self::Open => "Open",
             Self::Import => "Import",
+            Self::Backdrop => "Load",
             Self::Save => "Save",
             Self::Export => "Export",
         }
@@ -61,6 +67,7 @@ impl Asked {
         match self {
             Self::Open | Self::Save => &[ENDING],
             Self::Import => &IMPORTS,
+            Self::Backdrop => &BACKDROPS,
             Self::Export => &[],
         }
     }
@@ -71,6 +78,7 @@ impl Asked {
         match self {
             Self::Open => Command::OpenPath(path),
             Self::Import => Command::ImportPath(path),
+            Self::Backdrop => Command::Backdrop(BackdropAct::LoadPath(path)),
             Self::Save => Command::SaveTo(path),
             Self::Export => Command::ExportTo(path),
         }
@@ -121,7 +129,7 @@ impl Dialogs {
         let stem = name.strip_suffix(&format!(".{ENDING}")).unwrap_or(name);
         let name = match asked {
             Asked::Save => format!("{}.{ENDING}", stem.to_lowercase().replace(' ', "-")),
-            Asked::Open | Asked::Import | Asked::Export => String::new(),
+            Asked::Open | Asked::Import | Asked::Backdrop | Asked::Export => String::new(),
         };
         self.start = (folder, name);
         self.own = None;
@@ -129,6 +137,12 @@ impl Dialogs {
             Some(ctx) => self.ask_system(asked, ctx),
             None => self.open_own(asked),
         }
+    }
+
+    /// Whether a question is open.
+    #[must_use]
+    pub const fn is_open(&self) -> bool {
+        self.own.is_some() || self.pending.is_some()
     }
 
     /// What the system is being asked for.
@@ -188,6 +202,7 @@ impl Dialogs {
                 let path = match asked {
                     Asked::Open => dialog.add_filter("Designs", &[ENDING]).pick_file(),
                     Asked::Import => dialog.add_filter("Paths", &IMPORTS).pick_file(),
+                    Asked::Backdrop => dialog.add_filter("Backdrops", &BACKDROPS).pick_file(),
                     Asked::Save => dialog.add_filter("Designs", &[ENDING]).set_file_name(name).save_file(),
                     Asked::Export => dialog.pick_folder(),
                 };

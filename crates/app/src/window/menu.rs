@@ -5,11 +5,13 @@ use zonewright_painter::{Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
+    backdrop::BackdropAct,
     command::Command,
     kinds,
     ladder::LadderAct,
     panels::Cx,
     panes::{Layout, PaneAct},
+    safe::{self, SafeAct},
 };
 
 /// Draws the menu bar.
@@ -21,9 +23,21 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                     named(cx, ui, kind.name, Command::New(kind.word));
                 }
             });
-            items(cx, ui, [Command::Open, Command::OpenSample, Command::Import]);
+            items(cx, ui, [Command::Open]);
+            safe::recent_ui(cx, ui);
+            items(
+                cx,
+                ui,
+                [
+                    Command::OpenSample,
+                    Command::Import,
+                    Command::Backdrop(BackdropAct::Load),
+                ],
+            );
             ui.separator();
             items(cx, ui, [Command::Save, Command::SaveAs, Command::Export]);
+            ui.separator();
+            items(cx, ui, [SafeAct::Reload, SafeAct::LookForOrphans].map(Command::Safe));
             ui.separator();
             items(cx, ui, [Command::Quit]);
         });
@@ -31,6 +45,7 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             let history = &cx.state.history;
             undo(cx, ui, "Undo", history.undo_label(), Command::Undo);
             undo(cx, ui, "Redo", history.redo_label(), Command::Redo);
+            safe::steps_ui(cx, ui);
             ui.separator();
             items(cx, ui, [Command::FreePoints, Command::ShareGap, Command::FlipOutside]);
         });

@@ -5,12 +5,16 @@
 //! (`derived`).
 
 mod app;
+mod backdrop;
+mod backdrop_view;
 mod command;
 mod derived;
 mod dialogs;
 mod execute;
 mod fields;
 mod history;
+mod history_pack;
+mod history_stack;
 mod kinds;
 mod ladder;
 mod menu;
@@ -23,6 +27,7 @@ mod picture;
 mod prompts;
 mod readings;
 mod remedies;
+mod safe;
 mod search;
 mod session;
 mod splice_marks;
@@ -39,6 +44,8 @@ mod zones;
 use std::path::{Path, PathBuf};
 
 pub use app::App;
+pub use backdrop::{BackdropAct, BackdropState};
+pub use backdrop_view::BackdropView;
 pub use command::{Command, Unsaved};
 pub use derived::{Counts, Derived, Pending};
 pub use history::History;
@@ -47,6 +54,7 @@ pub use panes::{Layout, Pane, PaneAct, Panes};
 pub use path_edit::PathEdit;
 pub use picture::NAME as PICTURE;
 pub use readings::{End, ReadingAct, Remembered, Shown};
+pub use safe::{Banner, Disk, InTheWay, Orphan, Overwrite, Safe, SafeAct, Stamp};
 pub use session::STATE_DIR;
 pub use state::State;
 pub use strip::{NAME as STRIP, Picks, Span, StripAct, StripFront, StripView};
@@ -62,19 +70,27 @@ use crate::document::{self, Design};
 /// One sentence, when no window can be opened; it names the command line, which needs none.
 pub fn run(file: Option<&Path>) -> Result<(), String> {
     let session = session::file();
-    let (design, path, message) = first_design(file, session.as_deref())?;
+    let remembered = session.as_deref().map(session::read).unwrap_or_default();
+    let First {
+        design,
+        path,
+        stamp,
+        message,
+    } = first_design(file, &remembered)?;
     let options = eframe::NativeOptions {
         viewport: egui::ViewportBuilder::default()
             .with_title("zonewright")
             .with_app_id("zonewright")
-            .with_inner_size([1280.0, 800.0])
+            .with_inner_size(remembered.size().unwrap_or([1280.0, 800.0]))
             .with_min_inner_size([900.0, 560.0])
             .with_drag_and_drop(true),
         ..eframe::NativeOptions::default()
     };
     let create: eframe::AppCreator<'_> = Box::new(|cc| {
         let app = App::new(&cc.egui_ctx, design, path);
-        Ok(Box::new(app.with_session(session).with_message(message)))
+        Ok(Box::new(
+            app.with_session(session).with_stamp(stamp).with_message(message),
+        ))
     });
     eframe::run_native("zonewright", options, create).map_err(|error| {
         let why = refused(&error);
@@ -93,22 +109,45 @@ const fn refused(error: &eframe::Error) -> &'static str {
     }
 }
 
-/// The design to begin with, its file, and what is to be said about it.
-fn first_design(
-    file: Option<&Path>,
-    session: Option<&Path>,
-) -> Result<(Design, Option<PathBuf>, Option<String>), String> {
+/// The design to begin with.
+struct First {
+    design: Design,
+    path: Option<PathBuf>,
+    /// Of its file, from before it was read.
+    stamp: Option<Stamp>,
+    /// What is to be said about it.
+    message: Option<String>,
+}
+
+/// Reads the design to begin with: this file, or else the last design, or else the sample.
+fn first_design(file: Option<&Path>, session: &session::Session) -> Result<First, String> {
+    let read = |file: &Path| {
+        let stamp = Stamp::of_file(file).ok();
+        let path = Some(file.to_path_buf());
+        document::read_design(file).map(|design| First {
+            design,
+            path,
+            stamp,
+            message: None,
+        })
+    };
     if let Some(file) = file {
-        let design = document::read_design(file).map_err(|error| error.to_string())?;
-        return Ok((design, Some(file.to_path_buf()), None));
+        return read(file).map_err(|error| error.to_string());
     }
     let mut message = None;
-    if let Some(last) = session.and_then(session::last).filter(|last| last.is_file()) {
-        match document::read_design(&last) {
-            Ok(design) => return Ok((design, Some(last), None)),
+    if let Some(last) = session.last().filter(|last| last.is_file()) {
+        match read(&last) {
+            Ok(first) => return Ok(first),
             // The last design may be broken by now; that must not keep the window from opening.
             Err(error) => message = Some(execute::sentence(&format!("{error}. The sample is shown instead."))),
         }
     }
-    Ok((session::sample()?, None, message))
+    let mut design = session::sample()?;
+    design.units = session.units().unwrap_or(design.units);
+    Ok(First {
+        design,
+        path: None,
+        stamp: None,
+        message,
+    })
 }

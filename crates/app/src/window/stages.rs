@@ -3,7 +3,9 @@
 use std::sync::Arc;
 
 use zonewright_geometry::{
-    Finding, OpenV, Shell, Side, Tolerances, grow,
+    Finding, OpenV, Shell, Side, Tolerances,
+    fit::{PanelLeft, left_of_panels},
+    grow,
     grow::open_vs,
     grow_part,
     inspect::{Inspection, inspect},
@@ -18,7 +20,7 @@ use super::{
     strip::StripFront,
     zone_table::ZoneTable,
 };
-use crate::document::Design;
+use crate::document::{Backdrop, Design};
 
 /// What is to be grown.
 #[derive(Clone, Debug)]
@@ -137,6 +139,8 @@ pub struct Inspect {
     pub shell: Arc<Shell>,
     /// What counts as the same place.
     pub tolerances: Tolerances,
+    /// What the panels' distances are measured to.
+    pub backdrop: Option<Backdrop>,
 }
 
 /// What was found.
@@ -156,6 +160,13 @@ pub enum Inspected {
         /// The inspection.
         inspection: Box<Inspection>,
     },
+    /// How far each panel is from the backdrop.
+    Left {
+        /// What it is about.
+        ticket: u64,
+        /// The distances, one a panel.
+        left: Vec<PanelLeft>,
+    },
 }
 
 /// Makes the exact depth order, which shows at once, and then inspects.
@@ -163,6 +174,13 @@ pub(super) fn inspect_stages(job: Inspect, answer: &mut dyn FnMut(Inspected) -> 
     let ticket = job.ticket;
     let scene = Box::new(Scene::exact(&job.shell));
     if answer(Inspected::Order { ticket, scene }) {
+        let target = job.backdrop.as_ref().and_then(|backdrop| backdrop.target().ok());
+        if let Some(target) = target {
+            let left = left_of_panels(&job.shell, &target);
+            if !answer(Inspected::Left { ticket, left }) {
+                return;
+            }
+        }
         let inspection = Box::new(inspect(&job.shell, &job.tolerances));
         answer(Inspected::Inspection { ticket, inspection });
     }

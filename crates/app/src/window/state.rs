@@ -7,8 +7,8 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes, readings::Remembered,
-    theme::Theme, view::ViewState, worker::Worker,
+    backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes,
+    readings::Remembered, safe::Safe, theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -32,6 +32,8 @@ pub struct State {
     pub panes: Panes,
     /// What follows from the design.
     pub derived: Derived,
+    /// What is done with the backdrop.
+    pub backdrop: BackdropState,
     /// Slow stages.
     pub worker: Worker,
     /// Questions to the system.
@@ -48,8 +50,8 @@ pub struct State {
     pub search: Option<String>,
     /// Whether the window is to close.
     pub closing: bool,
-    /// Where the session is remembered; none in tests that do not ask for it.
-    pub session: Option<PathBuf>,
+    /// What keeps designs and files from being lost.
+    pub safe: Safe,
     /// The state that the readouts are compared with.
     pub remembered: Option<Remembered>,
     /// Colours and sizes.
@@ -66,6 +68,7 @@ impl State {
             view: ViewState::default(),
             panes: Panes::default(),
             derived: Derived::new(),
+            backdrop: BackdropState::default(),
             worker,
             dialogs: Dialogs::default(),
             message: None,
@@ -74,7 +77,7 @@ impl State {
             after_save: None,
             search: None,
             closing: false,
-            session: None,
+            safe: Safe::default(),
             remembered: None,
             theme: Theme::bundled(),
         }

@@ -40,6 +40,8 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
     pub panel: Option<(u32, PanelName)>,
+    /// Whether distances to the backdrop are coloured without their side.
+    pub without_sign: bool,
     /// The picked zone, and how zones are dragged.
     pub zones: ZoneView,
     /// What follows a dragged point.
@@ -65,6 +67,7 @@ impl Default for ViewState {
             strip: StripView::default(),
             point: None,
             panel: None,
+            without_sign: false,
             zones: ZoneView::default(),
             rule: DragRule::Neighbours,
             ladder: LadderView::default(),

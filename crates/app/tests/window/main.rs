@@ -2,6 +2,7 @@
 
 #![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
 
+mod backdrop;
 mod common;
 mod editing;
 mod import;
@@ -9,6 +10,7 @@ mod ladder;
 mod panels;
 mod panes;
 mod readings;
+mod safe;
 mod strip;
 mod view;
 mod zones;

@@ -12,6 +12,8 @@
 mod banded;
 mod begin;
 mod closest;
+mod cover;
+mod dense;
 mod hurry;
 mod left;
 mod net;

@@ -46,17 +46,21 @@ pub struct FitOptions {
     /// How much the paths are smoothed and their edges made alike, without unit; 0 only comes close. Each second difference of a
     /// path, squared, counts that many times as much as a node's distance, squared, for each node along the other path.
     pub smoothing: f64,
+    /// How much it counts that the surface covers the whole target, beside that its nodes come close to it; without unit. With 0 a small part of the
+    /// target is as good as all of it; with 1 both count the same.
+    pub cover: f64,
     /// Whether the four corners of the surface, or the two ends of a single path, stay where they are.
     pub hold_ends: bool,
 }
 
 impl Default for FitOptions {
-    /// 200 iterations, until nothing moves by a thousandth of a millimetre; no smoothing, nothing held.
+    /// 200 iterations, until nothing moves by a thousandth of a millimetre; no smoothing, no cover, nothing held.
     fn default() -> Self {
         Self {
             iterations: 200,
             settled_mm: 1e-3,
             smoothing: 0.0,
+            cover: 0.0,
             hold_ends: false,
         }
     }
@@ -69,8 +73,12 @@ pub struct FitStep {
     pub rms_mm: f64,
     /// The largest distance of a node, in millimetres.
     pub largest_mm: f64,
+    /// The largest distance from the target's places to the surface, in millimetres; 0 while covering does not count.
+    pub uncovered_mm: f64,
+    /// What is made small as one length, in millimetres: the root of `sum_mm2` over all that counts. Never grows.
+    pub mean_mm: f64,
     /// What is made small, in square millimetres: the squares of all distances and, with smoothing, of second differences. Never
-    /// grows from one step to the next; without smoothing neither does `rms_mm`.
+    /// grows from one step to the next; where only nodes count, neither does `rms_mm`.
     pub sum_mm2: f64,
 }
 

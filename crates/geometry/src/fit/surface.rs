@@ -1,6 +1,7 @@
 //! The iteration.
 
 use super::{
+    cover::{Cover, Held},
     hurry::Hurry,
     net::{Net, Solver, many},
     paths::{Fit, FitEnd, FitOptions, FitStep, Paths},
@@ -17,9 +18,12 @@ pub fn fit_translation(
     options: &FitOptions,
     mut watch: impl FnMut(&FitStep) -> bool,
 ) -> Fit {
-    let mut now = State::new(Net::of(begin), target, None);
-    let solver = Solver::new(&now.net, options);
-    let mut step = now.step(&solver);
+    let net = Net::of(begin);
+    let solver = Solver::new(&net, options);
+    let cover = Cover::new(target, net.r.len() * net.s.len(), options.cover).filter(|_| net.r.len() > 1);
+    let cover = cover.as_ref();
+    let mut now = State::new(net, target, cover, None);
+    let mut step = now.step(&solver, cover);
     let mut history = vec![step];
     let mut hurry = Hurry::default();
     let mut end = FitEnd::Iterations;
@@ -27,25 +31,25 @@ pub fn fit_translation(
         end = FitEnd::Stopped;
     } else {
         for _ in 0..options.iterations {
-            let plain = solver.solve(&now.net, &now.places());
+            let plain = solver.solve(&now.net, &now.places(), cover.map(|cover| (cover, &now.held[..])));
             let moved = moved(&now.net, &plain);
             if moved <= options.settled_mm {
                 end = FitEnd::Settled;
                 break;
             }
             let ahead = hurry.ahead(&now.net, &plain);
-            let mut next = ahead.map(|net| State::new(net, target, Some(&now)));
+            let mut next = ahead.map(|net| State::new(net, target, cover, Some(&now)));
             if next
                 .as_ref()
-                .is_none_or(|next| next.step(&solver).sum_mm2 > step.sum_mm2)
+                .is_none_or(|next| next.step(&solver, cover).sum_mm2 > step.sum_mm2)
             {
                 if next.is_some() {
                     hurry.forget();
                 }
-                next = Some(State::new(plain, target, Some(&now)));
+                next = Some(State::new(plain, target, cover, Some(&now)));
             }
             let Some(next) = next else { break };
-            let after = next.step(&solver);
+            let after = next.step(&solver, cover);
             // Only rounding can make it grow: there is nothing left to gain.
             if after.sum_mm2 > step.sum_mm2 {
                 end = FitEnd::Settled;
@@ -85,29 +89,39 @@ pub fn fit_path(begin: &[Point], target: &Target, options: &FitOptions, watch: i
 struct State {
     net: Net,
     closest: Vec<Closest>,
+    held: Vec<Held>,
 }
 
 impl State {
-    fn new(net: Net, target: &Target, before: Option<&Self>) -> Self {
+    fn new(net: Net, target: &Target, cover: Option<&Cover>, before: Option<&Self>) -> Self {
         let hint = |k: usize| before.and_then(|b| b.closest.get(k)).map(|c| c.part);
         let closest = net
             .nodes()
             .enumerate()
             .map(|(k, node)| target.closest_from(node, hint(k)))
             .collect();
-        Self { net, closest }
+        let held = cover.map_or_else(Vec::new, |cover| cover.held(&net));
+        Self { net, closest, held }
     }
 
     fn places(&self) -> Vec<Point> {
         self.closest.iter().map(|c| c.at).collect()
     }
 
-    fn step(&self, solver: &Solver) -> FitStep {
+    fn step(&self, solver: &Solver, cover: Option<&Cover>) -> FitStep {
         let squares: f64 = self.closest.iter().map(|c| c.distance_mm * c.distance_mm).sum();
+        let covering: f64 = self.held.iter().map(|h| h.distance_mm * h.distance_mm).sum();
+        let weight = cover.map_or(0.0, |cover| cover.weight);
+        let (sum, counted) = (
+            squares + covering * weight + solver.roughness(&self.net),
+            weight * many(self.held.len()),
+        );
         FitStep {
             rms_mm: (squares / many(self.closest.len())).sqrt(),
             largest_mm: self.closest.iter().map(|c| c.distance_mm).fold(0.0, f64::max),
-            sum_mm2: squares + solver.roughness(&self.net),
+            uncovered_mm: self.held.iter().map(|h| h.distance_mm).fold(0.0, f64::max),
+            mean_mm: (sum / (many(self.closest.len()) + counted)).sqrt(),
+            sum_mm2: sum,
         }
     }
 }

@@ -167,6 +167,54 @@ impl Target {
         highest
     }
 
+    /// Places spread evenly over the triangles, or, where there are none, along the lines; always the same ones.
+    #[must_use]
+    pub fn spread(&self, count: usize) -> Vec<Point> {
+        let place = |v: u32| self.points[v as usize];
+        let sizes: Vec<f64> = if self.is_curve() {
+            let length = |s: &[u32; 2]| place(s[0]).distance(place(s[1]));
+            self.segments.iter().map(length).collect()
+        } else {
+            let area = |t: &[u32; 3]| {
+                let [a, b, c] = t.map(place);
+                (b - a).cross(c - a).length()
+            };
+            self.triangles.iter().map(area).collect()
+        };
+        let whole: f64 = sizes.iter().sum();
+        let mut places = Vec::with_capacity(count);
+        let (mut part, mut gone) = (0, 0.0);
+        for k in 0..count {
+            #[expect(clippy::cast_precision_loss, reason = "a count of places")]
+            let (k, count) = (k as f64, count as f64);
+            let want = whole * (k + 0.5) / count;
+            while part + 1 < sizes.len() && gone + sizes[part] < want {
+                gone += sizes[part];
+                part += 1;
+            }
+            // Along a line the rest of the way; in a triangle, an even sequence of pairs folded into it (Roberts, 2018; from memory).
+            let u = if sizes[part] > 0.0 {
+                ((want - gone) / sizes[part]).clamp(0.0, 1.0)
+            } else {
+                0.0
+            };
+            if let Some(triangle) = self.triangles.get(part) {
+                let [a, b, c] = triangle.map(place);
+                let (mut s, mut t) = (
+                    (k * 0.754_877_666_246_692_8).fract(),
+                    (k * 0.569_840_290_998_053_3).fract(),
+                );
+                if s + t > 1.0 {
+                    (s, t) = (1.0 - s, 1.0 - t);
+                }
+                places.push(a + (b - a) * s + (c - a) * t);
+            } else if let Some([a, b]) = self.segments.get(part).map(|s| s.map(place)) {
+                places.push(a + (b - a) * u);
+            }
+        }
+        places
+    }
+
     /// Where the level or upright plane at `at` along an axis (0 x, 1 y, 2 z) cuts the triangles, as pairs of ends.
     #[must_use]
     pub fn section(&self, axis: usize, at: f64) -> Vec<[Point; 2]> {
@@ -185,4 +233,57 @@ impl Target {
         }
         cuts
     }
+
+    /// Straight lines that show it: all its lines, its borders, its sharp edges, and between them every edge that is not flat, or, where those
+    /// would be too many to be quiet, sections along x and y.
+    #[must_use]
+    pub fn wire(&self) -> Vec<[Point; 2]> {
+        let place = |v: u32| self.points[v as usize];
+        let mut wire: Vec<[Point; 2]> = self.segments.iter().map(|s| s.map(place)).collect();
+        let few = self.triangles.len() <= FEW_TRIANGLES;
+        let most_level = if few { FLAT.cos() } else { SHARP.cos() };
+        let mut sides: Vec<(u32, u32, u32)> = Vec::with_capacity(3 * self.triangles.len());
+        for (at, [a, b, c]) in (0..).zip(&self.triangles) {
+            sides.extend([(a, b), (b, c), (c, a)].map(|(p, q)| (*p.min(q), *p.max(q), at)));
+        }
+        sides.sort_unstable();
+        for side in sides.chunk_by(|one, other| (one.0, one.1) == (other.0, other.1)) {
+            let across = match side {
+                [(_, _, one), (_, _, other)] => self.normal(*one).dot(self.normal(*other)),
+                _ => -1.0,
+            };
+            // The two sides of a mesh need not run the same way round.
+            if across.abs() < most_level || side.len() != 2 {
+                wire.push([place(side[0].0), place(side[0].1)]);
+            }
+        }
+        if !few {
+            let least = self.points.iter().fold(Vector::INFINITY, |least, p| least.min(p.0));
+            let most = self.points.iter().fold(Vector::NEG_INFINITY, |most, p| most.max(p.0));
+            for axis in 0..2 {
+                for k in 1..SECTIONS {
+                    let share = f64::from(k) / f64::from(SECTIONS);
+                    wire.extend(self.section(axis, least[axis] + (most[axis] - least[axis]) * share));
+                }
+            }
+        }
+        wire
+    }
+
+    fn normal(&self, triangle: u32) -> Vector {
+        let [a, b, c] = self.triangles[triangle as usize].map(|v| self.points[v as usize]);
+        (b - a).cross(c - a).normalize_or_zero()
+    }
 }
+
+/// So many triangles are drawn edge by edge.
+const FEW_TRIANGLES: usize = 3000;
+
+/// Sections along each axis.
+const SECTIONS: u32 = 14;
+
+/// Edges whose triangles lie flatter than this are no edges to the eye, in radians: a tenth of a degree.
+const FLAT: f64 = 0.1 * core::f64::consts::PI / 180.0;
+
+/// Edges sharper than this are drawn on any target, in radians: 25 degrees.
+const SHARP: f64 = 25.0 * core::f64::consts::PI / 180.0;

@@ -1,11 +1,13 @@
 //! The executor: the only code that changes the state of the window.
 
+mod backdrop;
 mod file;
 mod finish;
 mod ladder;
 mod panes;
 mod path;
 mod readings;
+mod safe;
 mod shape;
 mod splice;
 mod steps;
@@ -13,6 +15,7 @@ mod strip;
 mod view;
 mod zones;
 
+pub(crate) use backdrop::follow_fit;
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
 pub(crate) use ladder::keep_climbed;
@@ -62,6 +65,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetHand(hand) => state.view.hand = hand,
         Command::SetKind(kind) => shape::set_kind(state, kind),
         Command::SetStart(start, field) => shape::set_start(state, *start, field),
+        Command::Backdrop(act) => backdrop::run(state, act),
         Command::ImportPath(path) => shape::import_path(state, &path),
         Command::FreePoints => shape::free_points(state),
         Command::ShareGap => path::share_gap(state),
@@ -72,6 +76,8 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FlipOutside => shape::flip_outside(state),
         Command::SetUnits(units) => shape::set_units(state, units),
         Command::SwapUnits => shape::swap_units(state),
+        Command::Safe(act) if act.replaces_design() => file::run(state, Command::Safe(act)),
+        Command::Safe(act) => safe::run(state, act),
         Command::Readings(act) => readings::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {

@@ -72,7 +72,9 @@ pub(super) fn look(state: &mut State, to: View, anew: bool) {
 /// What the pictures are fitted to.
 fn bounds(state: &State) -> Option<Bounds> {
     let path = state.derived.path.iter().flat_map(|p| p.placed.iter().copied());
-    Bounds::of(&state.derived.shell).or_else(|| Bounds::of_points(path))
+    let shell = Bounds::of(&state.derived.shell).or_else(|| Bounds::of_points(path));
+    let corners = [shell, state.derived.backdrop.bounds];
+    Bounds::of_points(corners.iter().flatten().flat_map(Bounds::corners))
 }
 
 /// Looks and fits anew with each camera that waits for it, once there is something to fit it to and a picture to fit it into.

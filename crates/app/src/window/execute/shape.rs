@@ -12,7 +12,7 @@ use crate::{
 };
 
 /// How far the chords of an imported curve may be from it, in millimetres: a tenth, as on the command line.
-const FLATTENING_MM: f64 = 0.1;
+pub(super) const FLATTENING_MM: f64 = 0.1;
 
 /// Changes the kind of start. The steps stay: they say so themselves when they find nothing.
 pub(super) fn set_kind(state: &mut State, word: &'static str) {
@@ -128,6 +128,9 @@ pub(super) fn flip_outside(state: &mut State) {
 /// Sets the unit in which lengths are shown and typed.
 pub(super) fn set_units(state: &mut State, units: Units) {
     state.change("Change the unit", None, |design| design.units = units);
+    if let Err(error) = state.safe.remember(|session| session.set_units(units)) {
+        state.say(format!("{error}; the unit will not be remembered"));
+    }
 }
 
 /// Millimetres to inches and back.

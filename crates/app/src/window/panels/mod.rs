@@ -1,5 +1,6 @@
 //! The panels beside the picture.
 
+mod backdrop_panel;
 mod curve_fields;
 mod directions;
 mod findings_panel;
@@ -64,6 +65,9 @@ pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
         .id_salt("left")
         .show(ui, |ui| {
             section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
+            if let Some(backdrop) = &cx.state.design().backdrop {
+                section(ui, "Backdrop", true, |ui| backdrop_panel::backdrop_ui(cx, ui, backdrop));
+            }
             section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
             section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
             section(ui, "Zones", true, |ui| zones_panel::zones_ui(cx, ui));

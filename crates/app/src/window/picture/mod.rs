@@ -1,5 +1,6 @@
 //! The picture of the shell in the middle of the window.
 
+mod backdrop;
 mod bar;
 mod front_marks;
 mod hit;
@@ -147,6 +148,9 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
         let edge = egui::Stroke::new(1.5, cx.state.colours().accent());
         painter.rect_stroke(rect, 0.0, edge, egui::StrokeKind::Inside);
     }
+    if at == 0 {
+        backdrop::legend_ui(cx, ui, rect);
+    }
     if at == 0 && cx.state.derived.shell.panels.is_empty() {
         empty_ui(cx, ui, rect);
     }
@@ -179,13 +183,18 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         cull: uncrossed,
         ..Look::default()
     };
+    let shares = derived.backdrop.shares(state.view.without_sign);
     let tints = Tints {
         family: Some(&derived.families),
         finding: Some(&derived.levels),
+        distance: Some(&shares),
         ..Tints::default()
     };
-    let marks = marks::marks(state, widgets.over);
-    widgets.cache[at].picture = derived.scene.picture(&derived.shell, &camera, &look, &tints, &marks);
+    let mut marks = marks::marks(state, widgets.over);
+    backdrop::marks(state, &mut marks);
+    let mut picture = derived.scene.picture(&derived.shell, &camera, &look, &tints, &marks);
+    backdrop::add(state, &camera, &look, &mut picture);
+    widgets.cache[at].picture = picture;
     widgets.cache[at].key = Some(key);
     widgets.pictures += 1;
 }
