@@ -6,8 +6,8 @@ window_packages=(
     libx11-6 libx11-xcb1 libxcursor1 libxi6 libxrender1
     libxkbcommon0 libxkbcommon-x11-0 libwayland-client0 libwayland-egl1
 )
-# What opens a window where there is no display, and presses a key in it.
-smoke_packages=(xvfb xdotool)
+# What opens a window where there is no display, presses a key in it, and draws it in software when OpenGL is missing.
+smoke_packages=(xvfb xdotool libvulkan1 mesa-vulkan-drivers)
 
 # step NAME COMMAND...: says what begins; when it fails, says which step it was and ends the script.
 step() {

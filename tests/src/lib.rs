@@ -6,6 +6,7 @@
 pub mod closed_forms;
 pub mod look;
 pub mod polar_fixtures;
+pub mod ray_cast;
 pub mod zonohedron;
 
 use zonewright_geometry::{

@@ -8,14 +8,14 @@ use zonewright::{
 };
 
 fn main() -> ExitCode {
-    let file = match run(std::env::args_os()) {
+    let options = match run(std::env::args_os()) {
         Asked::Leave(status) => return status,
-        Asked::Window(file) => file,
+        Asked::Window(options) => options,
     };
-    if let Some(Err(error)) = file.as_deref().map(read_design) {
+    if let Some(Err(error)) = options.file.as_deref().map(read_design) {
         return fail(&error.to_string());
     }
-    match zonewright::window::run(file.as_deref()) {
+    match zonewright::window::run(&options) {
         Ok(()) => ExitCode::SUCCESS,
         Err(what) => fail(&what),
     }

@@ -45,6 +45,8 @@ pub struct Look {
     pub faces: Faces,
     /// Whether edges behind panels are drawn dashed.
     pub hidden_edges: bool,
+    /// Whether of the edges only those on a rim are drawn: a lighter picture, for while it moves.
+    pub only_rims: bool,
     /// What colours tell.
     pub colour: ColourBy,
     /// The colours.
@@ -65,6 +67,7 @@ impl Default for Look {
         Self {
             faces: Faces::default(),
             hidden_edges: false,
+            only_rims: false,
             colour: ColourBy::default(),
             palette: Palette::light(),
             edge_width: 1.2,

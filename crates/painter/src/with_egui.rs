@@ -4,6 +4,7 @@
 //! borders between panels would show as a net of pale lines. Smooth borders come from the window's multisampling.
 
 use core::f32::consts::FRAC_1_SQRT_2;
+use std::sync::Arc;
 
 use egui::{Align2, Color32, FontId, Mesh, Painter, Pos2, Rect, Shape, Vec2, epaint::Vertex};
 
@@ -13,11 +14,15 @@ use crate::{Anchor, Colour, Paint, Picture, stroke::parts};
 ///
 /// The picture's pixels are egui's points.
 pub fn paint(picture: &Picture, painter: &Painter, rect: Rect) {
+    paint_with(picture, &Arc::new(mesh(picture, rect.min.to_vec2())), painter, rect);
+}
+
+/// The same with a mesh that was made before, by [`mesh_into`], and still stands at the same place.
+pub fn paint_with(picture: &Picture, mesh: &Arc<Mesh>, painter: &Painter, rect: Rect) {
     let painter = painter.with_clip_rect(rect.intersect(painter.clip_rect()));
     painter.add(Shape::rect_filled(rect, 0.0, colour(picture.background)));
-    let mesh = mesh(picture, rect.min.to_vec2());
     if !mesh.is_empty() {
-        painter.add(Shape::mesh(mesh));
+        painter.add(Shape::Mesh(Arc::clone(mesh)));
     }
     for text in &picture.texts {
         let at = Pos2::from(text.pos) + rect.min.to_vec2();
@@ -40,13 +45,20 @@ pub fn paint(picture: &Picture, painter: &Painter, rect: Rect) {
 #[must_use]
 pub fn mesh(picture: &Picture, by: Vec2) -> Mesh {
     let mut mesh = Mesh::default();
+    mesh_into(picture, by, &mut mesh);
+    mesh
+}
+
+/// The same, into the arrays of a mesh that is no longer needed.
+pub fn mesh_into(picture: &Picture, by: Vec2, mesh: &mut Mesh) {
+    mesh.clear();
     mesh.vertices.reserve(picture.points.len() + picture.items.len());
     mesh.indices.reserve(2 * picture.points.len() + picture.items.len());
     for item in &picture.items {
         let points = picture.points_of(item);
         let colour = colour(item.colour);
         match item.paint {
-            Paint::Fill { .. } => fan(&mut mesh, points.iter().map(|&p| Pos2::from(p) + by), colour),
+            Paint::Fill { .. } => fan(mesh, points.iter().map(|&p| Pos2::from(p) + by), colour),
             Paint::Stroke {
                 width, dashed, closed, ..
             } => {
@@ -63,12 +75,11 @@ pub fn mesh(picture: &Picture, by: Vec2) -> Mesh {
                         b + ahead + aside,
                         a - ahead + aside,
                     ];
-                    fan(&mut mesh, quad.into_iter(), colour);
+                    fan(mesh, quad.into_iter(), colour);
                 });
             }
         }
     }
-    mesh
 }
 
 #[expect(clippy::cast_possible_truncation, reason = "a mesh has fewer than 2^32 vertices")]

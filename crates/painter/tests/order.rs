@@ -1,80 +1,23 @@
-//! Depth order against a ray cast: at each pixel's centre a ray is sent at every panel, in f64, by solving for the panel's own
-//! coordinates; what it meets first must be what was painted last. Derived; no figure comes from the painter.
+//! Depth order against a ray cast.
 
 #![expect(clippy::unwrap_used, reason = "a test may")]
 
 mod common;
 
-use common::{crossing, cube, cycle, helicoid, polar, rasterise, shell, waves};
+use common::{crossing, cube, cycle, helicoid, polar, ray_cast::compare, shell, waves};
 use proptest::prelude::*;
-use zonewright_geometry::{Angle, NONE, Point, Shell, Vector};
-use zonewright_painter::{Bounds, Camera, Faces, Look, Projection, Scene, Tints, View};
+use zonewright_geometry::{Angle, Shell, Vector};
+use zonewright_painter::{Bounds, Camera, Projection, Scene, View};
 
 const SIZE: [f32; 2] = [120.0, 90.0];
-
-/// Where the ray `from + t along` meets the parallelogram `a + r u + s w`, 0 <= r, s <= 1, by Cramer's rule.
-fn meets(shell: &Shell, panel: u32, from: Point, along: Vector) -> Option<f64> {
-    let [a, b, _, d] = shell.corner_points(panel);
-    let (u, w, to) = (b - a, d - a, from - a);
-    let whole = u.cross(w).dot(-along);
-    let r = to.cross(w).dot(-along) / whole;
-    let s = u.cross(to).dot(-along) / whole;
-    let t = u.cross(w).dot(to) / whole;
-    (whole != 0.0 && (0.0..=1.0).contains(&r) && (0.0..=1.0).contains(&s)).then_some(t)
-}
-
-/// Picture positions are f32: at 120 pixels they are rounded by up to 4e-6, cut ones more. A centre that near to a border may go either way.
-const ROUNDING: f32 = 4e-5;
-
-/// The panel's and the nearest panel's place on the ray through a picture position; none where there is none.
-fn cast(shell: &Shell, camera: &Camera, pos: [f32; 2], panel: u32) -> [Option<f64>; 2] {
-    let ray = camera.ray(pos);
-    let lens = camera.lens();
-    // The near plane of the camera hides what lies before it; the ray cast must too.
-    let least = match camera.projection {
-        Projection::Perspective => lens.near / ray.along.dot(lens.forward),
-        Projection::Parallel => f64::MIN,
-    };
-    let hit = |panel| meets(shell, panel, ray.from, ray.along).filter(|&t| t >= least);
-    let nearest = (0..shell.panels.len() as u32).filter_map(hit).min_by(f64::total_cmp);
-    [if panel == NONE { None } else { hit(panel) }, nearest]
-}
-
-/// Wrong pixels and covered pixels.
-fn wrong(shell: &Shell, scene: &Scene, camera: &Camera) -> (usize, usize) {
-    let look = Look {
-        faces: Faces::Shaded,
-        ..Look::default()
-    };
-    let picture = scene.picture(shell, camera, &look, &Tints::default(), &[]);
-    let painted = rasterise(&picture);
-    let (mut wrong, mut covered) = (0, 0);
-    for (at, &panel) in painted.iter().enumerate() {
-        let w = SIZE[0] as usize;
-        let centre = [(at % w) as f32 + 0.5, (at / w) as f32 + 0.5];
-        let right = |hits: [Option<f64>; 2]| match hits {
-            [None, None] => panel == NONE,
-            // Of two panels at the same place either is right.
-            [Some(own), Some(nearest)] => own - nearest <= 1e-6 * camera.distance,
-            _ => false,
-        };
-        let hits = cast(shell, camera, centre, panel);
-        covered += usize::from(hits[1].is_some());
-        let beside = |dx, dy| cast(shell, camera, [centre[0] + dx, centre[1] + dy], panel);
-        let off = [-ROUNDING, ROUNDING];
-        let all_right = right(hits) || off.iter().any(|x| off.iter().any(|y| right(beside(x, y))));
-        wrong += usize::from(!all_right);
-    }
-    (wrong, covered)
-}
 
 fn check(name: &str, shell: &Shell, camera: &Camera) {
     let scene = Scene::exact(shell);
     assert!(scene.is_exact());
-    let (wrong, covered) = wrong(shell, &scene, camera);
+    let agreement = compare(shell, &scene, camera);
     assert!(
-        wrong * 1000 <= covered,
-        "{name}: {wrong} wrong of {covered} covered, {} pieces of {} panels",
+        agreement.holds(),
+        "{name}: {agreement:?}, {} pieces of {} panels",
         scene.piece_count(),
         shell.panels.len()
     );
@@ -148,8 +91,8 @@ fn whole_panels_have_no_order_in_a_cycle() {
     let shell = cycle();
     let bounds = Bounds::of(&shell).unwrap();
     let camera = Camera::view(View::Plan, Projection::Parallel, &bounds, SIZE);
-    let (bad, covered) = wrong(&shell, &Scene::quick(&shell), &camera);
-    assert!(bad * 1000 > covered, "{bad} of {covered}");
+    let agreement = compare(&shell, &Scene::quick(&shell), &camera);
+    assert!(!agreement.holds(), "{agreement:?}");
 }
 
 /// A convex shell needs no cuts on panel planes; what is cut is cut by the cells' walls only.

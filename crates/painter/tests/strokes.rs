@@ -7,25 +7,18 @@
 
 mod common;
 
-use common::{covers, polar, shell};
-use zonewright_geometry::{Angle, Point, Shell, Vector};
+use common::{
+    polar,
+    ray_cast::{covers, meets},
+    shell,
+};
+use zonewright_geometry::{Angle, Shell, Vector};
 use zonewright_painter::{Bounds, Camera, Look, Paint, Picture, Projection, Scene, Tints, View};
 
 const SIZE: [f32; 2] = [1400.0, 1200.0];
 
 /// How much nearer, in widths of the stroke, a panel hides an edge: one that crosses the edge's depth within the stroke does not.
 const NEARER: f64 = 20.0;
-
-/// Where the ray meets the parallelogram, by Cramer's rule.
-fn meets(shell: &Shell, panel: u32, from: Point, along: Vector) -> Option<f64> {
-    let [a, b, _, d] = shell.corner_points(panel);
-    let (u, w, to) = (b - a, d - a, from - a);
-    let whole = u.cross(w).dot(-along);
-    let r = to.cross(w).dot(-along) / whole;
-    let s = u.cross(to).dot(-along) / whole;
-    let t = u.cross(w).dot(to) / whole;
-    (whole != 0.0 && (0.0..=1.0).contains(&r) && (0.0..=1.0).contains(&s)).then_some(t)
-}
 
 /// How far a place is from a line on the picture.
 fn away(from: [f32; 2], to: [f32; 2], place: [f32; 2]) -> f32 {

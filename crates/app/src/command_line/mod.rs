@@ -1,19 +1,24 @@
 //! The command line. It is kept stable: other programs call it.
 
+mod animate;
 mod curve_words;
 mod fit;
 mod jobs;
 mod picture;
 mod refusal;
+mod solve;
 mod star_words;
 mod start;
 mod values;
+mod wants;
 
 use std::{ffi::OsString, io::Write, path::PathBuf, process::ExitCode};
 
 use clap::{Parser, Subcommand, error::ErrorKind};
 
 use start::Kind;
+
+use crate::window;
 
 /// Done.
 const DONE: u8 = 0;
@@ -38,8 +43,28 @@ const UNUSABLE: u8 = 2;
 struct Cli {
     #[command(subcommand)]
     command: Option<Command>,
+    /// What draws the window: opengl, wgpu (Vulkan), or auto, which takes the first of these that works.
+    #[arg(
+        long,
+        value_name = "WHICH",
+        value_enum,
+        default_value = "auto",
+        hide_possible_values = true
+    )]
+    renderer: WhichRenderer,
+    /// Write how long each frame takes while the picture changes, in ms, to a CSV file.
+    #[arg(long, value_name = "FILE.csv")]
+    frame_times: Option<PathBuf>,
     /// The design to open in the window.
     file: Option<PathBuf>,
+}
+
+/// What draws the window.
+#[derive(clap::ValueEnum, Clone, Copy, Debug)]
+enum WhichRenderer {
+    Auto,
+    Opengl,
+    Wgpu,
 }
 
 #[derive(Subcommand, Debug)]
@@ -76,6 +101,16 @@ enum Command {
         #[arg(long, value_delimiter = ',', value_name = "WORDS")]
         only: Vec<String>,
     },
+    /// Change parameters until figures of the shell are as wanted; exit 2 with the reason when they cannot be.
+    Solve(solve::Solve),
+    /// List the parameters of a design: keys, values, names.
+    Parameters {
+        /// The design.
+        file: PathBuf,
+        /// Print a JSON list, numbers at full precision.
+        #[arg(long)]
+        json: bool,
+    },
     /// Draw a picture, without a display.
     Picture {
         /// The design.
@@ -90,12 +125,14 @@ enum Command {
         #[arg(long, value_name = "WxH", default_value = "1200x800", value_parser = values::size)]
         size: [u32; 2],
     },
+    /// Show the growth, or a parameter that runs between two values, as moving pictures.
+    Animate(animate::Animate),
 }
 
 /// What the command line asks for.
 pub enum Asked {
-    /// The window, on a file or not.
-    Window(Option<PathBuf>),
+    /// The window.
+    Window(window::Options),
     /// Nothing more; leave with this status.
     Leave(ExitCode),
 }
@@ -108,12 +145,25 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Err(error) => return Asked::Leave(ExitCode::from(explain(&error))),
     };
     let done = match cli.command {
-        None => return Asked::Window(cli.file),
+        None => {
+            return Asked::Window(window::Options {
+                file: cli.file,
+                renderer: match cli.renderer {
+                    WhichRenderer::Auto => window::Renderer::Auto,
+                    WhichRenderer::Opengl => window::Renderer::OpenGl,
+                    WhichRenderer::Wgpu => window::Renderer::Wgpu,
+                },
+                frame_times: cli.frame_times,
+            });
+        }
         Some(Command::Start(kind)) => kind.make().map(|()| DONE),
         Some(Command::Fit(arguments)) => arguments.run().map(|()| DONE),
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),
+        Some(Command::Animate(animate)) => animate.make().map(|()| DONE),
+        Some(Command::Solve(options)) => options.run().map(|()| DONE),
+        Some(Command::Parameters { file, json }) => solve::list(&file, json).map(|()| DONE),
         Some(Command::Picture {
             file,
             output,

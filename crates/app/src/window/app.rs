@@ -1,13 +1,15 @@
 //! The window: `logic` changes the state, `ui` draws it and sends commands.
 
-use std::path::PathBuf;
+use std::{path::PathBuf, time::Instant};
 
 use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
 
 use super::{
     command::{Command, Sender},
     derived::Counts,
-    execute, ladder, menu,
+    execute,
+    frames::{FrameLog, Frames},
+    ladder, menu,
     panels::{self, Cx},
     panes::PaneAct,
     path_box, picture, prompts,
@@ -38,6 +40,7 @@ impl App {
     pub fn new(ctx: &egui::Context, design: Design, path: Option<PathBuf>) -> Self {
         let mut app = Self::on(ctx, State::new(design, path, Worker::start(ctx)));
         app.state.dialogs.system = Some(ctx.clone());
+        app.widgets.frames = Frames::watched();
         app
     }
 
@@ -88,6 +91,13 @@ impl App {
     #[must_use]
     pub fn with_stamp(mut self, stamp: Option<Stamp>) -> Self {
         self.state.safe.knows(stamp);
+        self
+    }
+
+    /// Writes how long frames take.
+    #[must_use]
+    pub(super) fn with_frame_log(mut self, log: Option<FrameLog>) -> Self {
+        self.widgets.frames.set_log(log);
         self
     }
 
@@ -238,6 +248,7 @@ impl App {
     fn follow(&mut self, ctx: &egui::Context) {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
+        execute::follow_search(state);
         execute::follow_fit(state);
         let design = std::sync::Arc::clone(state.design());
         execute::keep_climbed(state);
@@ -257,6 +268,8 @@ impl App {
 
 impl eframe::App for App {
     fn logic(&mut self, ctx: &egui::Context, _frame: &mut eframe::Frame) {
+        let panels = self.state.derived.totals.panels;
+        self.widgets.frames.begin(Instant::now(), panels);
         self.shortcuts(ctx);
         self.system_events(ctx);
         for command in self.sender.take() {
@@ -284,6 +297,7 @@ impl eframe::App for App {
         let sizes = self.state.theme.sizes;
         let widgets = &mut self.widgets;
         widgets.over_next = None;
+        let pictures = widgets.pictures;
         let bar = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::symmetric(sizes.margin, 4));
         let side = Frame::side_top_panel(ui.style()).inner_margin(egui::Margin::same(sizes.margin));
         Panel::top("menu").frame(bar).show(ui, |ui| menu::menu_ui(cx, ui));
@@ -320,6 +334,11 @@ impl eframe::App for App {
         prompts::unsaved_ui(cx, ui);
         safe::overwrite_ui(cx, ui);
         safe::hover_ui(cx, ui);
+        let held = ui.ctx().input(|i| i.pointer.any_down());
+        let (changed, panels) = (widgets.pictures != pictures, self.state.derived.totals.panels);
+        if let Some(wait) = widgets.frames.end(Instant::now(), changed, held, panels) {
+            ui.ctx().request_repaint_after(wait);
+        }
         let moved_on = widgets.over != widgets.over_next;
         widgets.over = widgets.over_next;
         if moved_on || !self.sender.is_empty() {

@@ -5,7 +5,7 @@ use std::path::PathBuf;
 use zonewright_geometry::{Point, Side};
 use zonewright_painter::Picture;
 
-use super::panes::PANES;
+use super::{panes::PANES, thing::Thing};
 
 /// A drag in the picture.
 #[derive(Clone, Copy, PartialEq, Debug)]
@@ -58,6 +58,8 @@ pub(super) struct PictureCache {
     pub key: Option<super::picture::Key>,
     /// The picture.
     pub picture: Picture,
+    /// The picture as triangles, and where its corner stands in them.
+    pub mesh: (Option<egui::Vec2>, std::sync::Arc<egui::Mesh>),
 }
 
 /// State of the widgets.
@@ -75,18 +77,24 @@ pub(super) struct Widgets {
     pub drag_pane: usize,
     /// The pane that the pointer is over.
     pub over_pane: Option<usize>,
+    /// What a click would pick, and in which pane.
+    pub over_thing: Option<(usize, Thing)>,
     /// The last call for the keyboard that a pane has answered.
     pub focus: u64,
     /// The open V that the pointer is over, in the strip or in the picture: its side, and its place among the open Vs.
     pub over: Option<(Side, usize)>,
     /// The same, as it is found while this frame is drawn.
     pub over_next: Option<(Side, usize)>,
+    /// How long frames take, and how much of the pictures is drawn.
+    pub frames: super::frames::Frames,
     /// The ladder.
     pub ladder: super::ladder::LadderWidgets,
     /// The front strip.
     pub strip: super::strip::StripWidgets,
     /// How sides, angles and folds are spread.
     pub spreads: super::panels::SpreadCache,
+    /// What solving shows.
+    pub solving: super::panels::SolveCache,
     /// The picture of each pane.
     pub cache: [PictureCache; PANES],
     /// How often a picture was put together.

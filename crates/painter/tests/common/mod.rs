@@ -1,11 +1,14 @@
-//! Shells built by hand, and a plain rasteriser of fills.
+//! Shells built by hand, and the ray cast that pictures are held against.
 
 #![allow(dead_code, reason = "each test file uses a part")]
+
+#[path = "../../../../tests/src/ray_cast.rs"]
+#[allow(unreachable_pub, reason = "the file is a public module of another member")]
+pub(crate) mod ray_cast;
 
 use std::collections::BTreeMap;
 
 use zonewright_geometry::{Edge, NONE, Panel, Point, Rim, Shell, Vector};
-use zonewright_painter::{Paint, Picture};
 
 /// A shell of panels given by their corner and two sides, with shared vertices, edges and a rim where there is one.
 pub(crate) fn shell(panels: &[[Vector; 3]]) -> Shell {
@@ -160,42 +163,4 @@ pub(crate) fn turned_waves(n: usize) -> Shell {
         *p = Point::new(q.x * c - q.y * s, q.x * s + q.y * c, q.z + 0.3 * q.x);
     }
     shell
-}
-
-/// Whether a point is in a polygon, by crossings of a ray to the right; points on the border belong to one side only.
-pub(crate) fn covers(polygon: &[[f32; 2]], x: f64, y: f64) -> bool {
-    let mut odd = false;
-    for (k, a) in polygon.iter().enumerate() {
-        // The same order of ends for both neighbours of a line, so that rounding is the same for both.
-        let b = polygon[(k + 1) % polygon.len()];
-        let (low, high) = if a[1] <= b[1] { (*a, b) } else { (b, *a) };
-        let [lx, ly, hx, hy] = [low[0], low[1], high[0], high[1]].map(f64::from);
-        if (ly <= y) != (hy <= y) && (hx - lx) * (y - ly) > (x - lx) * (hy - ly) {
-            odd = !odd;
-        }
-    }
-    odd
-}
-
-/// The panel painted last at each pixel's centre; [`NONE`] where there is none.
-pub(crate) fn rasterise(picture: &Picture) -> Vec<u32> {
-    let [w, h] = picture.size.map(|side| side as usize);
-    let mut pixels = vec![NONE; w * h];
-    for item in &picture.items {
-        let Paint::Fill { panel } = item.paint else { continue };
-        let polygon = picture.points_of(item);
-        let range = |axis: usize, size: usize| {
-            let low = polygon.iter().map(|p| p[axis]).fold(f32::MAX, f32::min);
-            let high = polygon.iter().map(|p| p[axis]).fold(f32::MIN, f32::max);
-            (low.floor().max(0.0) as usize)..(high.ceil().max(0.0) as usize).min(size)
-        };
-        for y in range(1, h) {
-            for x in range(0, w) {
-                if covers(polygon, x as f64 + 0.5, y as f64 + 0.5) {
-                    pixels[y * w + x] = panel;
-                }
-            }
-        }
-    }
-    pixels
 }

@@ -3,28 +3,35 @@
 mod backdrop;
 mod bar;
 mod front_marks;
+mod headroom_marks;
 mod hit;
 mod input;
 mod marks;
 mod overlay;
 mod point_snap;
+mod select_marks;
 mod snapping;
 mod zone_drag;
 
 pub(super) use zone_drag::ZoneWork;
 
+use std::sync::Arc;
+
 use egui::{Rect, Role, Sense, Ui, WidgetInfo};
-use zonewright_geometry::Side;
-use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Tints, with_egui};
+use zonewright_geometry::{Shell, Side, solve::Headroom};
+use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Scene, Tints, with_egui};
 
 use super::{
     command::Command,
+    frames::Detail,
     panels::Cx,
     panes::{Layout, PaneAct},
     state::State,
     view::ViewState,
     widgets::Widgets,
 };
+
+pub(super) use select_marks::{dimension_text, measured};
 
 /// The accessible name of the picture.
 pub const NAME: &str = "Picture of the shell";
@@ -40,12 +47,9 @@ pub(super) struct Key {
     camera: Camera,
     view: ViewState,
     over: Option<(Side, usize)>,
-    light: bool,
+    detail: Detail,
+    headroom: Vec<Headroom>,
 }
-
-/// Beyond this many panels edges are left out while the picture is dragged: the triangles that reach software OpenGL are what
-/// costs (a probe of 10,000 panels took 29 ms a frame filled, 93 ms with four edge strips each).
-const LIGHT_BEYOND: usize = 8000;
 
 /// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
 #[must_use]
@@ -73,6 +77,7 @@ pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     let size = ui.available_size().max(egui::vec2(50.0, 50.0));
     let (whole, _) = ui.allocate_exact_size(size, Sense::hover());
     widgets.over_pane = None;
+    widgets.over_thing = None;
     widgets.zones.over = None;
     let layout = cx.state.panes.layout;
     for (at, rect) in places(layout, whole, GAP).into_iter().enumerate() {
@@ -142,8 +147,14 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
     }
     put_together(cx, at, widgets);
     let painter = ui.painter_at(rect);
-    painter.rect_filled(rect, 0.0, cx.state.colours().picture());
-    with_egui::paint(&widgets.cache[at].picture, &painter, rect);
+    let cache = &mut widgets.cache[at];
+    let corner = rect.min.to_vec2();
+    if cache.mesh.0 != Some(corner) {
+        cache.mesh.0 = Some(corner);
+        with_egui::mesh_into(&cache.picture, corner, Arc::make_mut(&mut cache.mesh.1));
+    }
+    with_egui::paint_with(&cache.picture, &cache.mesh.1, &painter, rect);
+    hover_ui(cx, at, rect, &painter, widgets);
     if panes.layout != Layout::One && panes.active() == at {
         let edge = egui::Stroke::new(1.5, cx.state.colours().accent());
         painter.rect_stroke(rect, 0.0, edge, egui::StrokeKind::Inside);
@@ -156,6 +167,24 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
     }
 }
 
+/// Draws what a click would pick over the picture, which is not put together anew for it.
+fn hover_ui(cx: Cx<'_>, at: usize, rect: Rect, painter: &egui::Painter, widgets: &Widgets) {
+    let over = widgets.over_thing.as_ref().filter(|(pane, _)| *pane == at);
+    let Some((_, thing)) = over else { return };
+    let mut marks = Vec::new();
+    select_marks::hover_marks(cx.state, thing, &mut marks);
+    let look = Look {
+        palette: palette(cx.state),
+        ..Look::default()
+    };
+    let nothing = Shell::default();
+    let camera = &cx.state.panes.pane(at).camera;
+    let picture = Scene::quick(&nothing).picture(&nothing, camera, &look, &Tints::default(), &marks);
+    // Without the ground that a whole picture has: it would cover what is there.
+    let mesh = with_egui::mesh(&picture, rect.min.to_vec2());
+    painter.add(egui::Shape::mesh(mesh));
+}
+
 fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     let state = cx.state;
     let camera = state.panes.pane(at).camera;
@@ -165,7 +194,8 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         camera,
         view: state.view.clone(),
         over: widgets.over,
-        light: widgets.drag.is_some() && LIGHT_BEYOND < state.derived.totals.panels * state.panes.layout.shown(),
+        detail: widgets.frames.detail(),
+        headroom: headroom_marks::wanted(state),
     };
     if widgets.cache[at].key.as_ref() == Some(&key) {
         return;
@@ -173,10 +203,9 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     let derived = &state.derived;
     let uncrossed = derived.inspection.as_ref().is_some_and(|i| i.crossings.is_empty());
     let look = Look {
-        faces: match state.view.faces {
-            Faces::ShadedWithEdges if key.light => Faces::Shaded,
-            faces => faces,
-        },
+        faces: state.view.faces,
+        // The triangles that reach a driver in software are what costs, and two of three belong to edges.
+        only_rims: key.detail == Detail::Rims && state.view.faces != Faces::Wireframe,
         hidden_edges: state.view.hidden_edges,
         colour: state.view.colour,
         palette: palette(state),
@@ -192,10 +221,13 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     };
     let mut marks = marks::marks(state, widgets.over);
     backdrop::marks(state, &mut marks);
-    let mut picture = derived.scene.picture(&derived.shell, &camera, &look, &tints, &marks);
-    backdrop::add(state, &camera, &look, &mut picture);
-    widgets.cache[at].picture = picture;
-    widgets.cache[at].key = Some(key);
+    let cache = &mut widgets.cache[at];
+    derived
+        .scene
+        .picture_into(&derived.shell, &camera, &look, &tints, &marks, &mut cache.picture);
+    backdrop::add(state, &camera, &look, &mut cache.picture);
+    cache.key = Some(key);
+    cache.mesh.0 = None;
     widgets.pictures += 1;
 }
 
