@@ -1,7 +1,7 @@
 //! What the pictures show.
 
 use egui_kittest::{Harness, kittest::Queryable};
-use zonewright::window::{App, Command, Kind, LadderAct, Layout, PaneAct, ReadingAct, SelectAct, ZoneAct};
+use zonewright::window::{App, Command, GuideAct, Kind, LadderAct, Layout, PaneAct, ReadingAct, SelectAct, ZoneAct};
 use zonewright_painter::ColourBy;
 
 /// A picture.
@@ -38,9 +38,7 @@ pub(crate) const SCENES: &[Scene] = &[
         design: "plant-house.ron",
         size: USUAL,
         act: |harness| {
-            send(harness, Command::New("polar"));
-            send(harness, Command::AddCourse);
-            send(harness, Command::AddCourse);
+            send(harness, Command::Guide(GuideAct::Begin));
         },
     },
     Scene {
