@@ -3,9 +3,10 @@
 use proptest::prelude::*;
 use zonewright_geometry::{
     Angle, Point, Vector,
-    edit::Freedom,
+    edit::{Freedom, Measures},
     snap::{
-        ANGLE_STEP, Around, INCH_STEPS, MM_STEPS, ORDER, Rules, SnapTo, on_axis, round_step, snap_edge, snap_point,
+        ANGLE_STEP, Around, Drawing, INCH_STEPS, MM_STEPS, ORDER, Rules, SnapTo, on_axis, round_step, snap_edge,
+        snap_point,
     },
     start::{AxisClass, Star},
 };
@@ -207,6 +208,51 @@ fn a_point_takes_the_plane_of_its_neighbours_and_the_height_of_a_vertex() {
     let snapped = snap_point(Point::new(100.0, 400.0, 220.0), Some(a), None, &around, &rules);
     near(snapped.value.0, Vector::new(100.0, 400.0, 215.0));
     assert_eq!(snapped.to, [SnapTo::Height(0)]);
+}
+
+#[test]
+fn in_a_drawing_lengths_are_those_of_the_drawing_and_the_depth_stays() {
+    // A front, seen along y: the edge runs 77 in depth; 398 and 302 across and up make 499.6, at 37.2 degrees.
+    let front = Drawing::along(Vector::Y);
+    let rules = Rules {
+        angle_step: None,
+        ..RULES
+    };
+    let v = Vector::new(398.0, 77.0, 302.0);
+    let snapped = front.snap_edge(Point::ORIGIN, v, &Around::default(), &rules);
+    let flat = Vector::new(398.0, 0.0, 302.0);
+    near(snapped.value, flat * (500.0 / flat.length()) + Vector::Y * 77.0);
+    assert_eq!(snapped.to, [SnapTo::Length(500.0)]);
+    // In a plan every edge is level: that is not said, and the height stays.
+    let plan = Drawing::along(-Vector::Z);
+    let point = Point::new(401.0, 3.0, 123.0);
+    let snapped = plan.snap_point(point, Some(Point::ORIGIN), None, &Around::default(), &RULES);
+    near(snapped.value.0, Vector::new(400.0, 0.0, 123.0));
+    assert_eq!(
+        snapped.to,
+        [SnapTo::Length(400.0), SnapTo::Azimuth(Angle::from_degrees(0.0))]
+    );
+    // A vertex far behind the drawing's plane is one seen from it.
+    let vertices = [Point::new(405.0, 900.0, 307.0)];
+    let around = Around {
+        vertices: &vertices,
+        ..Around::default()
+    };
+    let snapped = front.snap_edge(Point::ORIGIN, v, &around, &rules);
+    near(snapped.value, Vector::new(405.0, 77.0, 307.0));
+    assert_eq!(snapped.to, [SnapTo::Vertex(0)]);
+}
+
+#[test]
+fn measures_are_what_a_bench_reads() {
+    // 3, 4, 12: a run of 5, a length of 13.
+    let m = Measures::of(Vector::new(-3.0, 4.0, -12.0));
+    assert!((m.length_mm - 13.0).abs() < 1e-12);
+    assert!((m.slope.degrees() - -(12.0_f64 / 5.0).atan().to_degrees()).abs() < 1e-12);
+    assert!((m.azimuth.degrees() - (180.0 - (4.0_f64 / 3.0).atan().to_degrees())).abs() < 1e-12);
+    near(m.vector(), Vector::new(-3.0, 4.0, -12.0));
+    let upright = Measures::of(Vector::Z * 7.0);
+    assert_eq!((upright.slope.degrees(), upright.azimuth.degrees()), (90.0, 0.0));
 }
 
 proptest! {

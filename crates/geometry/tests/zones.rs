@@ -12,6 +12,7 @@ use zonewright_geometry::{
     },
     grow,
     measure::totals,
+    snap::still_vertices,
     start::{
         AxisClass, ColumnForm, Curve, CurveShape, FreePath, HelicalForm, LoopForm, PolarBy, PolarForm, PolarPair,
         RibbonForm, RibbonFrom, Star, StarSolid, TranslationForm,
@@ -555,6 +556,41 @@ fn a_link_in_a_closed_path_keeps_it_closed() {
     let linked = link_zone(&before, start(2), start(0), Sign::Minus).unwrap();
     near(vector(&linked, start(2)), -vector(&before, start(0)), 1e-9);
     assert!(shell(&linked).closing_gap.unwrap() < 1e-9);
+}
+
+#[test]
+fn every_edge_belongs_to_the_zone_that_it_runs_along_also_where_a_seam_splits_it() {
+    let mut butted = canopy();
+    // Parts of a line and its twice as long copies meet along parts of their sides.
+    butted = set_zone(&butted, start(2), vector(&butted, start(1)) * 2.0).unwrap();
+    for shape in [canopy(), plain_polar(), butted, column()] {
+        let shell = shell(&shape);
+        for (index, edge) in (0..).zip(&shell.edges) {
+            let zone = shell.zones[shell.edge_zone(index).unwrap() as usize].vector;
+            let [a, b] = edge.ends.map(|v| shell.points[v as usize]);
+            assert!(
+                (b - a).cross(zone).length() <= 1e-6 * zone.length_squared(),
+                "edge {index}"
+            );
+        }
+        assert_eq!(shell.edge_zone(u32::MAX), None);
+    }
+}
+
+#[test]
+fn what_stays_in_a_trial_change_is_what_lies_before_the_zone() {
+    let before = canopy();
+    let by = Vector::new(1.0, 2.0, 0.0);
+    let after = set_zone(&before, start(3), vector(&before, start(3)) + by).unwrap();
+    let (a, b) = (shell(&before), shell(&after));
+    // Of 6 x 4 vertices those with at most three edges of the arc before them.
+    assert_eq!(still_vertices(&a, &b, None, by.length()).len(), 4 * 4);
+    let far = (0..)
+        .zip(a.points.iter().zip(&b.points))
+        .find(|(_, (p, q))| p.distance(**q) > 0.5)
+        .unwrap()
+        .0;
+    assert_eq!(still_vertices(&a, &b, Some(far), by.length()).len(), 2 * 4);
 }
 
 proptest! {

@@ -36,6 +36,16 @@ pub(super) fn check(design: &Design) -> Result<(), DesignError> {
     Ok(())
 }
 
+/// About how many bytes a design holds, without its backdrop, which all its states share.
+#[must_use]
+pub fn weight(design: &Design) -> usize {
+    let shape = &design.shape;
+    let steps = (shape.steps.len() + shape.finish.len()) * size_of::<zonewright_geometry::Step>();
+    let letters = letters(&shape.start) * size_of::<zonewright_geometry::start::FreeLetter>();
+    // Names nest; three words and some is what most have.
+    size_of::<Design>() + steps + letters + names(shape) * 64
+}
+
 fn bound(what: &'static str, count: usize, limit: usize) -> Result<(), DesignError> {
     if count > limit {
         return Err(DesignError::TooMany { what, count, limit });

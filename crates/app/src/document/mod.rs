@@ -13,11 +13,11 @@ use zonewright_geometry::Shape;
 use zonewright_shop::text::Units;
 
 pub use backdrop::{Backdrop, BackdropPlacement, Drawn, MAX_BACKDROP_PARTS, MAX_BACKDROP_POINTS};
-pub use bounds::{MAX_FILE_BYTES, MAX_LETTERS, MAX_NAME_BYTES, MAX_NAMES, MAX_STEPS};
+pub use bounds::{MAX_FILE_BYTES, MAX_LETTERS, MAX_NAME_BYTES, MAX_NAMES, MAX_STEPS, weight};
 pub use bundled::bundled;
 pub use new::new_design;
 pub use read::{parse_design, read_design};
-pub use write::{to_text, write_design, write_whole};
+pub use write::{to_line, to_text, write_design, write_whole};
 
 /// The number of the file format that this program writes, and the newest that it reads.
 pub const FORMAT: u32 = 1;

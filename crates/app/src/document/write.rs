@@ -49,6 +49,21 @@ pub fn to_text(design: &Design) -> String {
     text
 }
 
+/// The text of a design on one line, for keeping many of them; [`parse_design`] reads it.
+///
+/// It is empty where the design nests names deeper than a file may.
+#[must_use]
+pub fn to_line(design: &Design) -> String {
+    let file = FileOne {
+        format: FORMAT,
+        name: &design.name,
+        units: design.units,
+        shape: &design.shape,
+        backdrop: design.backdrop.as_ref(),
+    };
+    syntax().to_string(&file).unwrap_or_default()
+}
+
 /// Writes a design file.
 ///
 /// What is written is read back first, so a file that cannot be read again never takes the place of one that can.

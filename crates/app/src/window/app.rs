@@ -5,16 +5,16 @@ use std::{path::PathBuf, time::Instant};
 use egui::{CentralPanel, Frame, Key, Modifiers, Panel, Ui, ViewportCommand};
 
 use super::{
-    backdrop::BackdropAct,
     command::{Command, Sender},
     derived::Counts,
-    dialogs::Asked,
     execute,
     frames::{FrameLog, Frames},
     ladder, menu,
     panels::{self, Cx},
     panes::PaneAct,
-    path_box, picture, prompts, search,
+    path_box, picture, prompts,
+    safe::{self, SafeAct, Stamp},
+    search,
     state::State,
     strip,
     widgets::Widgets,
@@ -30,6 +30,8 @@ pub struct App {
     widgets: Widgets,
     title: String,
     dark: Option<bool>,
+    focused: bool,
+    size: Option<egui::Vec2>,
 }
 
 impl App {
@@ -56,13 +58,39 @@ impl App {
             widgets: Widgets::default(),
             title: String::new(),
             dark: None,
+            focused: true,
+            size: None,
         }
     }
 
-    /// Remembers in this file which design is open.
+    /// Remembers in this file which design is open, keeps unsaved designs beside it, and offers those that a crash left.
     #[must_use]
     pub fn with_session(mut self, session: Option<PathBuf>) -> Self {
-        self.state.session = session;
+        let Some(file) = session else { return self };
+        let state = &mut self.state;
+        state.safe = safe::Safe::start(&file, state.dialogs.system.clone());
+        state.view.dark = state.safe.session.dark;
+        if let Some(path) = state.path.clone()
+            && let Err(error) = state.safe.remember(|session| session.opened(&path))
+        {
+            state.say(format!(
+                "{error}; the program will not find this design by itself next time"
+            ));
+        }
+        self
+    }
+
+    /// Gives the design a file.
+    #[must_use]
+    pub fn with_path(mut self, path: Option<PathBuf>) -> Self {
+        self.state.path = path;
+        self
+    }
+
+    /// Says what the design's file was just before it was read.
+    #[must_use]
+    pub fn with_stamp(mut self, stamp: Option<Stamp>) -> Self {
+        self.state.safe.knows(stamp);
         self
     }
 
@@ -123,6 +151,10 @@ impl App {
     }
 
     fn shortcuts(&self, ctx: &egui::Context) {
+        if self.state.waiting.is_some() || self.state.safe.overwrite.is_some() {
+            // The question comes first; it has keys of its own.
+            return;
+        }
         let typing = ctx.text_edit_focused();
         let mut commands = Command::listed();
         // A shortcut with fewer modifiers also matches the keys of one with more.
@@ -162,22 +194,22 @@ impl App {
                 .dropped_files
                 .iter()
                 .map(|f| f.path().to_path_buf())
-                .find(|p| !p.as_os_str().is_empty())
+                .filter(|p| !p.as_os_str().is_empty())
+                .collect::<Vec<PathBuf>>()
         });
-        if let Some(path) = dropped {
-            let is_path = path_box::fits_ending(&path, Asked::Import.endings());
-            self.sender.send(if is_path {
-                Command::ImportPath(path)
-            } else if path_box::fits_ending(&path, Asked::Backdrop.endings()) {
-                Command::Backdrop(BackdropAct::LoadPath(path))
-            } else {
-                Command::OpenPath(path)
-            });
+        if !dropped.is_empty() {
+            self.sender.send(Command::Safe(SafeAct::Drop(dropped)));
         }
+        let focused = ctx.input(|i| i.focused);
+        if focused && !self.focused {
+            self.state.safe.look_at_file();
+        }
+        self.focused = focused;
         if ctx.input(|i| i.viewport().close_requested()) && !self.state.closing && self.state.history.unsaved() {
             ctx.send_viewport_cmd(ViewportCommand::CancelClose);
             self.sender.send(Command::Quit);
         }
+        self.size = ctx.input(|i| i.viewport().inner_rect).map(|r| r.size()).or(self.size);
         if let Some(command) = self.state.dialogs.poll() {
             self.sender.send(command);
         }
@@ -198,6 +230,7 @@ impl App {
             });
         }
         if self.state.closing {
+            self.state.safe.leave();
             ctx.send_viewport_cmd(ViewportCommand::Close);
         }
     }
@@ -236,6 +269,12 @@ impl eframe::App for App {
         if !ctx.input(|i| i.pointer.any_down()) {
             self.state.history.seal();
         }
+        let state = &mut self.state;
+        // What was to follow a save is forgotten when the save was given up.
+        if state.after_save.is_some() && !state.dialogs.is_open() && state.safe.overwrite.is_none() {
+            state.after_save = None;
+        }
+        state.safe.follow(&state.history, state.path.as_deref());
         self.follow(ctx);
         self.show_outside(ctx);
     }
@@ -275,6 +314,7 @@ impl eframe::App for App {
             .exact_size(sizes.strip)
             .show(ui, |ui| strip::strip_ui(cx, ui, widgets));
         CentralPanel::no_frame().frame(side).show(ui, |ui| {
+            safe::banners_ui(cx, ui);
             prompts::banners_ui(cx, ui);
             picture::picture_ui(cx, ui, widgets);
             ladder::banner_ui(cx, ui, ui.max_rect());
@@ -282,6 +322,8 @@ impl eframe::App for App {
         search::search_ui(cx, ui, widgets);
         path_box::path_box_ui(cx, ui, widgets);
         prompts::unsaved_ui(cx, ui);
+        safe::overwrite_ui(cx, ui);
+        safe::hover_ui(cx, ui);
         let held = ui.ctx().input(|i| i.pointer.any_down());
         let (changed, panels) = (widgets.pictures != pictures, self.state.derived.totals.panels);
         if let Some(wait) = widgets.frames.end(Instant::now(), changed, held, panels) {
@@ -291,6 +333,16 @@ impl eframe::App for App {
         widgets.over = widgets.over_next;
         if moved_on || !self.sender.is_empty() {
             ui.ctx().request_repaint();
+        }
+    }
+}
+
+impl Drop for App {
+    /// The size of the window is remembered at its end.
+    fn drop(&mut self) {
+        if let Some(size) = self.size {
+            // At its end, the window has nobody to tell.
+            let _ = self.state.safe.remember(|session| session.set_size(size.into()));
         }
     }
 }

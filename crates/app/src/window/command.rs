@@ -10,7 +10,7 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct,
+    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct,
     strip::StripAct, view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
@@ -132,6 +132,8 @@ pub enum Command {
     SelectPanel(Option<u32>),
     /// What the readouts are told.
     Readings(ReadingAct),
+    /// Recovers, reloads, overwrites, goes several steps back.
+    Safe(SafeAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -210,6 +212,7 @@ impl Command {
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
+        all.extend(super::safe::listed());
         all.extend(BackdropAct::listed().map(Self::Backdrop));
         all.extend(ZoneAct::listed().map(Self::Zone));
         all.extend(StripAct::listed().map(Self::Strip));
@@ -288,6 +291,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
+            Self::Safe(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),

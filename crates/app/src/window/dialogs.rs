@@ -139,6 +139,12 @@ impl Dialogs {
         }
     }
 
+    /// Whether a question is open.
+    #[must_use]
+    pub const fn is_open(&self) -> bool {
+        self.own.is_some() || self.pending.is_some()
+    }
+
     /// What the system is being asked for.
     #[must_use]
     pub fn waiting_for(&self) -> Option<Asked> {

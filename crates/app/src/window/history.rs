@@ -1,28 +1,23 @@
 //! Undo and redo without end.
 //!
-//! A design is parameters, not meshes, so a snapshot of it is small; every change keeps one. Changes with the same merge
+//! A design is parameters, not meshes, so a snapshot of it is small; every change keeps one, and older ones are packed
+//! ([`super::history_stack`]). Changes with the same merge
 //! key that follow each other without a pause become one undo step: that is how a drag is one.
 
 use std::sync::Arc;
 
+use super::history_stack::Stack;
 use crate::document::Design;
 
 /// What makes neighbouring changes one undo step.
 pub(super) type MergeKey = String;
 
-/// A state that can be gone back to, and the change that leads away from it.
-#[derive(Clone, Debug)]
-struct Entry {
-    design: Arc<Design>,
-    label: String,
-}
-
 /// The states before and after the one shown.
 #[derive(Debug)]
 pub struct History {
     now: Arc<Design>,
-    past: Vec<Entry>,
-    future: Vec<Entry>,
+    past: Stack,
+    future: Stack,
     open: Option<MergeKey>,
     saved: Option<Arc<Design>>,
     revision: u64,
@@ -37,12 +32,49 @@ impl History {
         Self {
             saved: saved.then(|| Arc::clone(&now)),
             now,
-            past: Vec::new(),
-            future: Vec::new(),
+            past: Stack::default(),
+            future: Stack::default(),
             open: None,
             revision: 1,
             unsaved: !saved,
         }
+    }
+
+    /// Begins with a design that no file holds, and with states before it, the newest last.
+    #[must_use]
+    pub fn recovered(design: Arc<Design>, earlier: Vec<(String, Arc<Design>)>) -> Self {
+        let mut past = Stack::default();
+        for (label, design) in earlier {
+            past.push(design, label);
+        }
+        Self {
+            now: design,
+            past,
+            future: Stack::default(),
+            open: None,
+            saved: None,
+            revision: 1,
+            unsaved: true,
+        }
+    }
+
+    /// The newest states before the one shown, at most so many, the newest last, each with the change that leads away.
+    #[must_use]
+    pub fn newest(&self, most: usize) -> Vec<(String, Arc<Design>)> {
+        let open = self.past.open().take(most);
+        let mut newest: Vec<_> = open.map(|(label, d)| (label.to_owned(), Arc::clone(d))).collect();
+        newest.reverse();
+        newest
+    }
+
+    /// Labels of the changes that can be taken back, the newest first.
+    pub fn undo_labels(&self) -> impl Iterator<Item = &str> {
+        self.past.labels()
+    }
+
+    /// Labels of the changes that can be made again, the next first.
+    pub fn redo_labels(&self) -> impl Iterator<Item = &str> {
+        self.future.labels()
     }
 
     /// The same history, with a revision later than this one: what was kept by revision is worked out again.
@@ -71,20 +103,18 @@ impl History {
     }
 
     /// Changes the design. Nothing happens when it stays the same. With the key of the change before, it joins that undo step.
-    pub fn change(&mut self, design: Design, label: impl Into<String>, key: Option<MergeKey>) {
-        if design == *self.now {
+    pub fn change(&mut self, design: impl Into<Arc<Design>>, label: impl Into<String>, key: Option<MergeKey>) {
+        let design = design.into();
+        if *design == *self.now {
             return;
         }
         let joins = key.is_some() && key == self.open && !self.past.is_empty();
         if !joins {
-            self.past.push(Entry {
-                design: Arc::clone(&self.now),
-                label: label.into(),
-            });
+            self.past.push(Arc::clone(&self.now), label.into());
         }
         self.future.clear();
         self.open = key;
-        self.show(Arc::new(design));
+        self.show(design);
     }
 
     /// Ends the undo step that further changes would join.
@@ -97,44 +127,38 @@ impl History {
         if self.open.take().is_none() {
             return false;
         }
-        let entry = self.past.pop();
-        entry.map(|entry| self.show(entry.design)).is_some()
+        let entry = self.past.pop(&self.now);
+        entry.map(|(design, _)| self.show(design)).is_some()
     }
 
     /// Goes one step back; gives the label of the change taken back.
     pub fn undo(&mut self) -> Option<String> {
-        let entry = self.past.pop()?;
-        self.future.push(Entry {
-            design: Arc::clone(&self.now),
-            label: entry.label.clone(),
-        });
+        let (design, label) = self.past.pop(&self.now)?;
+        self.future.push(Arc::clone(&self.now), label.clone());
         self.open = None;
-        self.show(entry.design);
-        Some(entry.label)
+        self.show(design);
+        Some(label)
     }
 
     /// Goes one step forward; gives the label of the change made again.
     pub fn redo(&mut self) -> Option<String> {
-        let entry = self.future.pop()?;
-        self.past.push(Entry {
-            design: Arc::clone(&self.now),
-            label: entry.label.clone(),
-        });
+        let (design, label) = self.future.pop(&self.now)?;
+        self.past.push(Arc::clone(&self.now), label.clone());
         self.open = None;
-        self.show(entry.design);
-        Some(entry.label)
+        self.show(design);
+        Some(label)
     }
 
     /// Label of the change that undo would take back.
     #[must_use]
     pub fn undo_label(&self) -> Option<&str> {
-        self.past.last().map(|e| e.label.as_str())
+        self.past.labels().next()
     }
 
     /// Label of the change that redo would make again.
     #[must_use]
     pub fn redo_label(&self) -> Option<&str> {
-        self.future.last().map(|e| e.label.as_str())
+        self.future.labels().next()
     }
 
     /// Says that a file holds this design now.
@@ -148,14 +172,11 @@ impl History {
     /// # Errors
     /// A sentence that names it.
     pub fn check(&self) -> Result<(), String> {
-        let line: Vec<&Arc<Design>> = self
-            .past
-            .iter()
-            .map(|e| &e.design)
-            .chain([&self.now])
-            .chain(self.future.iter().rev().map(|e| &e.design))
-            .collect();
-        if let Some(at) = self.past.iter().chain(&self.future).position(|e| e.label.is_empty()) {
+        let near = |stack: &Stack| stack.open().map(|(_, d)| Arc::clone(d)).collect::<Vec<_>>();
+        let (past, future) = (near(&self.past), near(&self.future));
+        let now = [Arc::clone(&self.now)];
+        let line: Vec<&Arc<Design>> = past.iter().rev().chain(&now).chain(&future).collect();
+        if let Some(at) = self.past.labels().chain(self.future.labels()).position(str::is_empty) {
             return Err(format!("undo step {at} has no label"));
         }
         if self.open.is_some() && !self.future.is_empty() {
@@ -232,11 +253,77 @@ mod tests {
         assert_eq!((history.revision(), history.undo_label()), (revision, None));
     }
 
+    /// A closed path of so many edges round a circle, up and down.
+    fn long_path(edges: u32) -> Design {
+        use zonewright_geometry::{
+            Point, Role, Start, Vector,
+            start::{FreeLetter, FreePath, FreeVector},
+        };
+        let letters = (0..edges).map(|id| {
+            let turn = std::f64::consts::TAU * f64::from(id) / f64::from(edges);
+            let up = if id % 2 == 0 { -400.0 } else { 400.0 };
+            FreeLetter {
+                id,
+                vector: FreeVector::Own(Vector::new(300.0 * turn.cos(), 300.0 * turn.sin(), up)),
+                role: if id % 2 == 0 { Role::Zig } else { Role::Zag },
+            }
+        });
+        let mut design = Design::clone(&design("long"));
+        design.shape.start = Start::Zigzag(FreePath {
+            origin: Point::ORIGIN,
+            closed: true,
+            letters: letters.collect(),
+        });
+        design
+    }
+
+    /// The design after step `turn`: two neighbouring edges are others, as a dragged point makes them.
+    fn dragged(design: &Design, turn: u32) -> Design {
+        let mut design = design.clone();
+        if let zonewright_geometry::Start::Zigzag(path) = &mut design.shape.start {
+            let at = (turn as usize * 37) % (path.letters.len() - 1);
+            for letter in &mut path.letters[at..at + 2] {
+                let by = f64::from(turn).sqrt();
+                letter.vector = zonewright_geometry::start::FreeVector::Own(zonewright_geometry::Vector::new(
+                    by,
+                    300.0 - by,
+                    by / 3.0,
+                ));
+            }
+        }
+        design
+    }
+
+    #[test]
+    fn a_long_session_on_a_long_path_holds_little_and_comes_back_exactly() {
+        const EDGES: u32 = 400;
+        const STEPS: u32 = 100;
+        let first = long_path(EDGES);
+        let mut history = History::new(first.clone(), true);
+        let open = 8 * crate::document::weight(&first);
+        (history.past, history.future) = (Stack::limited(open), Stack::limited(open));
+        let mut now = first.clone();
+        for turn in 1..=STEPS {
+            now = dragged(&now, turn);
+            history.change(now.clone(), "Move a point", None);
+        }
+        let (held, plain) = (history.past.bytes(), STEPS as usize * crate::document::weight(&first));
+        // Derived: two edges are a dozen lines of some twenty bytes; with a margin, a kilobyte a step.
+        assert!(held < open + STEPS as usize * 1024, "{held} of {plain} bytes");
+        while history.undo().is_some() {}
+        assert_eq!(**history.now(), first);
+        assert!(history.future.bytes() < open + STEPS as usize * 1024);
+        while history.redo().is_some() {}
+        assert_eq!(**history.now(), now);
+    }
+
     proptest! {
         /// Planted answer: a plain list of all states and a place in it.
         #[test]
         fn any_sequence_keeps_every_state(acts in proptest::collection::vec(0_u8..4, 1..60)) {
             let mut history = History::new(design("0"), true);
+            // So little room that nearly every state is packed.
+            (history.past, history.future) = (Stack::limited(2500), Stack::limited(2500));
             let mut states = vec!["0".to_owned()];
             let mut at = 0;
             for (turn, act) in (1..).zip(acts) {

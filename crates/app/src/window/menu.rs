@@ -11,6 +11,7 @@ use super::{
     ladder::LadderAct,
     panels::Cx,
     panes::{Layout, PaneAct},
+    safe::{self, SafeAct},
 };
 
 /// Draws the menu bar.
@@ -22,11 +23,12 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
                     named(cx, ui, kind.name, Command::New(kind.word));
                 }
             });
+            items(cx, ui, [Command::Open]);
+            safe::recent_ui(cx, ui);
             items(
                 cx,
                 ui,
                 [
-                    Command::Open,
                     Command::OpenSample,
                     Command::Import,
                     Command::Backdrop(BackdropAct::Load),
@@ -35,12 +37,15 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             ui.separator();
             items(cx, ui, [Command::Save, Command::SaveAs, Command::Export]);
             ui.separator();
+            items(cx, ui, [SafeAct::Reload, SafeAct::LookForOrphans].map(Command::Safe));
+            ui.separator();
             items(cx, ui, [Command::Quit]);
         });
         ui.menu_button("Edit", |ui| {
             let history = &cx.state.history;
             undo(cx, ui, "Undo", history.undo_label(), Command::Undo);
             undo(cx, ui, "Redo", history.redo_label(), Command::Redo);
+            safe::steps_ui(cx, ui);
             ui.separator();
             items(cx, ui, [Command::FreePoints, Command::ShareGap, Command::FlipOutside]);
         });

@@ -8,7 +8,7 @@ use std::{
 
 use eframe::egui_wgpu::{WgpuConfiguration, WgpuSetup};
 
-use super::{App, execute, frames::FrameLog, session};
+use super::{App, execute, frames::FrameLog, safe::Stamp, session};
 use crate::document::{self, Design};
 
 /// What draws the window.
@@ -43,19 +43,22 @@ const PACKAGES: [&str; 2] = ["libgl1 libegl1 libgl1-mesa-dri", "libvulkan1 mesa-
 /// One sentence, when no window can be opened: why, what to install, and that the command line needs none.
 pub fn run(options: &Options) -> Result<(), String> {
     let session = session::file();
-    let (design, path, message) = first_design(options.file.as_deref(), session.as_deref())?;
+    let remembered = session.as_deref().map(session::read).unwrap_or_default();
+    let first = first_design(options.file.as_deref(), &remembered)?;
+    let size = remembered.size().unwrap_or([1280.0, 800.0]);
     let log = options.frame_times.as_deref().map(FrameLog::create).transpose()?;
     // Once the window has been there, a failure is no reason to open another one on the design as it was.
     let shown = Rc::new(Cell::new(false));
     let open = |renderer: eframe::Renderer| {
-        let (design, path, session) = (design.clone(), path.clone(), session.clone());
-        let (message, log, shown) = (message.clone(), log.clone(), Rc::clone(&shown));
+        let (first, session) = (first.clone(), session.clone());
+        let (log, shown) = (log.clone(), Rc::clone(&shown));
         let create: eframe::AppCreator<'_> = Box::new(move |cc| {
             shown.set(true);
-            let app = App::new(&cc.egui_ctx, design, path).with_frame_log(log);
-            Ok(Box::new(app.with_session(session).with_message(message)))
+            let app = App::new(&cc.egui_ctx, first.design, first.path).with_frame_log(log);
+            let app = app.with_session(session).with_stamp(first.stamp);
+            Ok(Box::new(app.with_message(first.message)))
         });
-        eframe::run_native("zonewright", native(renderer), create)
+        eframe::run_native("zonewright", native(renderer, size), create)
     };
     let (first, second) = match options.renderer {
         Renderer::Auto => (eframe::Renderer::Glow, Some(eframe::Renderer::Wgpu)),
@@ -72,7 +75,7 @@ pub fn run(options: &Options) -> Result<(), String> {
     opened.map_err(|error| refused(&error, options.renderer, shown.get()))
 }
 
-fn native(renderer: eframe::Renderer) -> eframe::NativeOptions {
+fn native(renderer: eframe::Renderer, size: [f32; 2]) -> eframe::NativeOptions {
     let mut wgpu_options = WgpuConfiguration::default();
     if let WgpuSetup::CreateNew(setup) = &mut wgpu_options.wgpu_setup {
         setup.instance_descriptor.backends = wgpu::Backends::VULKAN;
@@ -83,7 +86,7 @@ fn native(renderer: eframe::Renderer) -> eframe::NativeOptions {
         viewport: egui::ViewportBuilder::default()
             .with_title("zonewright")
             .with_app_id("zonewright")
-            .with_inner_size([1280.0, 800.0])
+            .with_inner_size(size)
             .with_min_inner_size([900.0, 560.0])
             .with_drag_and_drop(true),
         renderer,
@@ -123,22 +126,46 @@ fn refused(error: &eframe::Error, renderer: Renderer, shown: bool) -> String {
     )
 }
 
-/// The design to begin with, its file, and what is to be said about it.
-fn first_design(
-    file: Option<&Path>,
-    session: Option<&Path>,
-) -> Result<(Design, Option<PathBuf>, Option<String>), String> {
+/// The design to begin with.
+#[derive(Clone)]
+struct First {
+    design: Design,
+    path: Option<PathBuf>,
+    /// Of its file, from before it was read.
+    stamp: Option<Stamp>,
+    /// What is to be said about it.
+    message: Option<String>,
+}
+
+/// Reads the design to begin with: this file, or else the last design, or else the sample.
+fn first_design(file: Option<&Path>, session: &session::Session) -> Result<First, String> {
+    let read = |file: &Path| {
+        let stamp = Stamp::of_file(file).ok();
+        let path = Some(file.to_path_buf());
+        document::read_design(file).map(|design| First {
+            design,
+            path,
+            stamp,
+            message: None,
+        })
+    };
     if let Some(file) = file {
-        let design = document::read_design(file).map_err(|error| error.to_string())?;
-        return Ok((design, Some(file.to_path_buf()), None));
+        return read(file).map_err(|error| error.to_string());
     }
     let mut message = None;
-    if let Some(last) = session.and_then(session::last).filter(|last| last.is_file()) {
-        match document::read_design(&last) {
-            Ok(design) => return Ok((design, Some(last), None)),
+    if let Some(last) = session.last().filter(|last| last.is_file()) {
+        match read(&last) {
+            Ok(first) => return Ok(first),
             // The last design may be broken by now; that must not keep the window from opening.
             Err(error) => message = Some(execute::sentence(&format!("{error}. The sample is shown instead."))),
         }
     }
-    Ok((session::sample()?, None, message))
+    let mut design = session::sample()?;
+    design.units = session.units().unwrap_or(design.units);
+    Ok(First {
+        design,
+        path: None,
+        stamp: None,
+        message,
+    })
 }

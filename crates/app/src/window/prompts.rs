@@ -1,6 +1,6 @@
 //! Questions and messages: unsaved changes, what went wrong, waiting for the system.
 
-use egui::{Frame, Modal, Ui};
+use egui::{Button, Frame, Key, Modal, Modifiers, Ui};
 
 use super::{
     command::{Command, Unsaved},
@@ -12,23 +12,40 @@ pub(super) fn question(ui: &Ui, id: &'static str) -> Modal {
     Modal::new(egui::Id::unique(id)).frame(Frame::popup(ui.style()).inner_margin(16))
 }
 
+/// A choice of a question: a button that a letter presses too. The first one has the keyboard when the question opens, so
+/// that Enter presses it.
+pub(super) fn choice(ui: &mut Ui, text: &str, key: Key, first: bool) -> bool {
+    let button = ui.add(Button::new(text).shortcut_text(key.name()));
+    let button = button.accessible_name(text);
+    if first {
+        // The question has just opened when it was not there in the pass before.
+        let (id, pass) = (button.id.with("last pass"), ui.ctx().cumulative_pass_nr());
+        let last: Option<u64> = ui.data(|d| d.get_temp(id));
+        if last.is_none_or(|last| last + 1 < pass) {
+            button.request_focus();
+        }
+        ui.data_mut(|d| d.insert_temp(id, pass));
+    }
+    button.clicked() || ui.input_mut(|i| i.consume_key(Modifiers::NONE, key))
+}
+
 /// Asks about unsaved changes, while something waits for the answer.
 pub(super) fn unsaved_ui(cx: Cx<'_>, ui: &Ui) {
     if cx.state.waiting.is_none() {
         return;
     }
     let modal = question(ui, "unsaved").show(ui.ctx(), |ui| {
-        ui.set_width(380.0);
+        ui.set_width(420.0);
         ui.heading("Unsaved changes");
         ui.label(format!("{} has changes that no file holds.", cx.state.file_name()));
         ui.add_space(4.0);
         ui.horizontal(|ui| {
-            for (text, answer) in [
-                ("Save and go on", Unsaved::Save),
-                ("Discard the changes", Unsaved::Discard),
-                ("Stay", Unsaved::Stay),
+            for (text, key, answer) in [
+                ("Save and go on", Key::S, Unsaved::Save),
+                ("Discard the changes", Key::D, Unsaved::Discard),
+                ("Stay", Key::Escape, Unsaved::Stay),
             ] {
-                if ui.button(text).clicked() {
+                if choice(ui, text, key, answer == Unsaved::Save) {
                     cx.tx.send(Command::Unsaved(answer));
                 }
             }

@@ -2,7 +2,7 @@
 
 use egui::{Key, ScrollArea, TextEdit, Ui};
 
-use super::{command::Command, panels::Cx, widgets::Widgets};
+use super::{command::Command, panels::Cx, safe, widgets::Widgets};
 
 /// Draws the search while it is open.
 pub(super) fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
@@ -17,20 +17,20 @@ pub(super) fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
             .desired_width(f32::INFINITY);
         let field = ui.add(field).accessible_name("Name of a command");
         field.request_focus();
-        let found = found(&widgets.search);
+        let found = found(&widgets.search, safe::openings(cx));
         ScrollArea::vertical()
             .max_height(340.0)
             .auto_shrink([false, true])
             .show(ui, |ui| {
-                for command in &found {
-                    row(cx, ui, command);
+                for (name, command) in &found {
+                    row(cx, ui, name, command);
                 }
                 if found.is_empty() {
                     ui.weak("No command has that in its name.");
                 }
             });
         if ui.input(|i| i.key_pressed(Key::Enter))
-            && let Some(first) = found.into_iter().next()
+            && let Some((_, first)) = found.into_iter().next()
         {
             cx.tx.send(Command::Dismiss);
             cx.tx.send(first);
@@ -41,9 +41,9 @@ pub(super) fn search_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
     }
 }
 
-fn row(cx: Cx<'_>, ui: &mut Ui, command: &Command) {
+fn row(cx: Cx<'_>, ui: &mut Ui, name: &str, command: &Command) {
     let words = command.words();
-    let mut button = egui::Button::new(words.name).min_size(egui::vec2(ui.available_width(), 0.0));
+    let mut button = egui::Button::new(name).min_size(egui::vec2(ui.available_width(), 0.0));
     if let Some(keys) = command.shortcut() {
         button = button.shortcut_text(ui.ctx().format_shortcut(&keys));
     }
@@ -53,13 +53,14 @@ fn row(cx: Cx<'_>, ui: &mut Ui, command: &Command) {
     }
 }
 
-/// Commands whose name has all the typed words in it, in the order of the menus.
-fn found(typed: &str) -> Vec<Command> {
+/// Commands whose name has all the typed words in it, in the order of the menus; then those that have names of their own.
+fn found(typed: &str, more: Vec<(String, Command)>) -> Vec<(String, Command)> {
     let typed = typed.to_lowercase();
     let has_all = |name: &str| typed.split_whitespace().all(|word| name.contains(word));
-    let commands = Command::listed().into_iter();
-    commands
-        .filter(|c| !matches!(c, Command::Find) && has_all(&c.words().name.to_lowercase()))
+    let listed = Command::listed().into_iter().map(|c| (c.words().name.to_owned(), c));
+    listed
+        .chain(more)
+        .filter(|(name, c)| !matches!(c, Command::Find) && has_all(&name.to_lowercase()))
         .collect()
 }
 
@@ -69,8 +70,11 @@ mod tests {
 
     #[test]
     fn a_part_of_the_name_finds_a_command() {
-        let names: Vec<&str> = found("add cour").iter().map(|c| c.words().name).collect();
+        let names: Vec<String> = found("add cour", Vec::new())
+            .into_iter()
+            .map(|(name, _)| name)
+            .collect();
         assert_eq!(names, ["Add a course"]);
-        assert!(found("no such thing").is_empty());
+        assert!(found("no such thing", Vec::new()).is_empty());
     }
 }

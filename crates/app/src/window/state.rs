@@ -8,7 +8,7 @@ use zonewright_shop::text::Units;
 
 use super::{
     backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes,
-    readings::Remembered, theme::Theme, view::ViewState, worker::Worker,
+    readings::Remembered, safe::Safe, theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -50,8 +50,8 @@ pub struct State {
     pub search: Option<String>,
     /// Whether the window is to close.
     pub closing: bool,
-    /// Where the session is remembered; none in tests that do not ask for it.
-    pub session: Option<PathBuf>,
+    /// What keeps designs and files from being lost.
+    pub safe: Safe,
     /// The state that the readouts are compared with.
     pub remembered: Option<Remembered>,
     /// Colours and sizes.
@@ -77,7 +77,7 @@ impl State {
             after_save: None,
             search: None,
             closing: false,
-            session: None,
+            safe: Safe::default(),
             remembered: None,
             theme: Theme::bundled(),
         }

@@ -80,6 +80,21 @@ impl ZoneAct {
         Words { name, hint }
     }
 
+    /// What a toggle says: what it does, its keys, and the key that turns it round during a drag.
+    pub(super) fn hint(&self, ctx: &egui::Context) -> String {
+        let words = self.words();
+        let keys = self
+            .shortcut()
+            .map(|(modifiers, key)| egui::KeyboardShortcut::new(modifiers, key));
+        let keys = keys.map_or_else(String::new, |keys| format!(" ({})", ctx.format_shortcut(&keys)));
+        let held = match self {
+            Self::Together => " Hold a during a drag for the opposite.",
+            Self::Snap => " Hold n during a drag for none.",
+            _ => "",
+        };
+        format!("{}{keys}: {}{held}", words.name, words.hint)
+    }
+
     /// Its keys.
     pub(super) const fn shortcut(&self) -> Option<(Modifiers, Key)> {
         match self {

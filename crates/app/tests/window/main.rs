@@ -10,6 +10,7 @@ mod ladder;
 mod panels;
 mod panes;
 mod readings;
+mod safe;
 mod strip;
 mod view;
 mod zones;

@@ -11,7 +11,8 @@ use zonewright::{
 };
 use zonewright_geometry::{
     Angle, Point, Spurs, Start, Vector, ZoneKind,
-    edit::Measures,
+    edit::{Measures, set_zone},
+    grow,
     snap::{MM_STEPS, round_step},
     start::{Curve, CurveShape, FreePath, TranslationForm},
 };
@@ -26,7 +27,19 @@ struct Grip {
     far: Point,
 }
 
+/// The ends are told apart as the window does: the far one is the one that moves when the zone is changed.
 fn grip(harness: &Harness<'_, App>, zone: u32) -> Grip {
+    let state = harness.state().state();
+    let name = state.derived.shell.zones[zone as usize].name;
+    let change = Vector::new(0.3, -0.2, 0.25);
+    let changed = set_zone(
+        state.shape(),
+        name,
+        state.derived.shell.zones[zone as usize].vector + change,
+    )
+    .unwrap();
+    let (after, _) = grow(&changed);
+    let moves = |v: u32| (after.points[v as usize] - state.derived.shell.points[v as usize]).length();
     let state = harness.state().state();
     let (derived, camera) = (&state.derived, &state.panes.pane(0).camera);
     let shell = &derived.shell;
@@ -48,6 +61,9 @@ fn grip(harness: &Harness<'_, App>, zone: u32) -> Grip {
             continue;
         }
         for [near, far] in [edge.ends, [edge.ends[1], edge.ends[0]]] {
+            if moves(far) < moves(near) {
+                continue;
+            }
             let [near, far] = [near, far].map(|v| shell.points[v as usize]);
             let at = picture_place(harness, near + (far - near) * 0.68);
             let pos = at - corner;

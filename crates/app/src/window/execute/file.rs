@@ -14,7 +14,9 @@ use crate::{
         command::{Command, Unsaved},
         dialogs::Asked,
         history::History,
-        kinds, session,
+        kinds,
+        safe::{Overwrite, Stamp},
+        session,
         state::State,
     },
 };
@@ -25,7 +27,12 @@ pub(crate) const ENDING: &str = "ron";
 /// Carries out a command about files.
 pub(super) fn run(state: &mut State, command: Command) {
     match command {
-        Command::New(_) | Command::Open | Command::OpenPath(_) | Command::OpenSample | Command::Quit
+        Command::New(_)
+        | Command::Open
+        | Command::OpenPath(_)
+        | Command::OpenSample
+        | Command::Safe(_)
+        | Command::Quit
             if state.history.unsaved() =>
         {
             state.waiting = Some(Box::new(command));
@@ -46,7 +53,10 @@ fn run_saved(state: &mut State, command: Command) {
             .dialogs
             .ask(Asked::Import, state.path.as_deref(), &state.file_name()),
         Command::OpenSample => match session::sample() {
-            Ok(design) => show(state, design, None),
+            Ok(mut design) => {
+                design.units = state.safe.session.units().unwrap_or(design.units);
+                show(state, design, None);
+            }
             Err(text) => state.complain(text),
         },
         Command::Save => match state.path.clone() {
@@ -64,6 +74,7 @@ fn run_saved(state: &mut State, command: Command) {
         Command::Quit => state.closing = true,
         Command::Unsaved(answer) => answered(state, answer),
         Command::Show(design, path) => show(state, *design, path),
+        Command::Safe(act) => super::safe::run(state, act),
         _ => {}
     }
 }
@@ -84,7 +95,7 @@ fn make_new(state: &mut State, word: &str) {
     let kind = kinds::kind(word);
     match document::new_design(kind.usual(), kind.courses, Spurs::default()) {
         Ok(mut design) => {
-            design.units = state.units();
+            design.units = state.safe.session.units().unwrap_or_else(|| state.units());
             show(state, design, None);
             state.say(format!("A new {}", kind.name.to_lowercase()));
         }
@@ -94,9 +105,16 @@ fn make_new(state: &mut State, word: &str) {
 
 /// Shows a design in place of the one that is there; its history begins.
 fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
+    show_history(state, History::new(design, true), path);
+}
+
+/// The same, with a past.
+pub(super) fn show_history(state: &mut State, history: History, path: Option<PathBuf>) {
     let revision = state.history.revision();
-    state.history = History::new(design, true).after(revision);
+    state.history = history.after(revision);
     state.path = path;
+    state.safe.settled();
+    state.safe.knows(None);
     state.message = None;
     state.view.point = None;
     state.view.panel = None;
@@ -110,16 +128,37 @@ fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
 }
 
 fn open(state: &mut State, path: &Path) {
+    // Before it is read: what changes it from now on is noticed.
+    let stamp = Stamp::of_file(path).ok();
     match document::read_design(path) {
-        Ok(design) => show(state, design, Some(path.to_path_buf())),
+        Ok(design) => {
+            show(state, design, Some(path.to_path_buf()));
+            state.safe.knows(stamp);
+        }
         Err(error) => state.complain(sentence(&format!("{error}. The design in the window was kept."))),
     }
 }
 
+/// Saves, unless something speaks against overwriting the file: that is asked about first.
 fn save(state: &mut State, path: &Path) {
+    match state.safe.in_the_way(path) {
+        Some(why) => {
+            let path = path.to_path_buf();
+            state.safe.overwrite = Some(Overwrite { path, why });
+        }
+        None => write(state, path),
+    }
+}
+
+/// Saves, whatever the file holds now.
+pub(super) fn write(state: &mut State, path: &Path) {
     let design = Arc::clone(state.design());
     match document::write_design(path, &design) {
         Ok(()) => {
+            state
+                .safe
+                .knows(Some(Stamp::written(path, document::to_text(&design).as_bytes())));
+            state.safe.settled();
             state.history.mark_saved(design);
             state.path = Some(path.to_path_buf());
             remember(state);
@@ -136,10 +175,8 @@ fn save(state: &mut State, path: &Path) {
 }
 
 fn remember(state: &mut State) {
-    let (Some(session), Some(path)) = (&state.session, &state.path) else {
-        return;
-    };
-    if let Err(error) = session::remember(session, path) {
+    let Some(path) = state.path.clone() else { return };
+    if let Err(error) = state.safe.remember(|session| session.opened(&path)) {
         let text = format!("{error}; the program will not find this design by itself next time");
         state.say(text);
     }

@@ -7,6 +7,7 @@ mod ladder;
 mod panes;
 mod path;
 mod readings;
+mod safe;
 mod shape;
 mod splice;
 mod steps;
@@ -75,6 +76,8 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::FlipOutside => shape::flip_outside(state),
         Command::SetUnits(units) => shape::set_units(state, units),
         Command::SwapUnits => shape::swap_units(state),
+        Command::Safe(act) if act.replaces_design() => file::run(state, Command::Safe(act)),
+        Command::Safe(act) => safe::run(state, act),
         Command::Readings(act) => readings::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {

@@ -128,6 +128,9 @@ pub(super) fn flip_outside(state: &mut State) {
 /// Sets the unit in which lengths are shown and typed.
 pub(super) fn set_units(state: &mut State, units: Units) {
     state.change("Change the unit", None, |design| design.units = units);
+    if let Err(error) = state.safe.remember(|session| session.set_units(units)) {
+        state.say(format!("{error}; the unit will not be remembered"));
+    }
 }
 
 /// Millimetres to inches and back.

@@ -41,7 +41,13 @@ pub(super) fn run(state: &mut State, command: Command) {
                 .filter(|p| (*p as usize) < shell.panels.len())
                 .map(|p| (p, shell.panel_name(p)));
         }
-        Command::SwapTheme => view.dark = !view.dark,
+        Command::SwapTheme => {
+            view.dark = !view.dark;
+            let dark = view.dark;
+            if let Err(error) = state.safe.remember(|session| session.dark = dark) {
+                state.say(format!("{error}; the look will not be remembered"));
+            }
+        }
         Command::Find => state.search = Some(String::new()),
         Command::Dismiss => dismiss(state),
         _ => {}
@@ -53,7 +59,11 @@ fn dismiss(state: &mut State) {
     if state.view.strip.span.take().is_some() {
         return;
     }
-    if state.search.take().is_some() || state.waiting.take().is_some() || state.dialogs.close() {
+    if state.search.take().is_some()
+        || state.safe.overwrite.take().is_some()
+        || state.waiting.take().is_some()
+        || state.dialogs.close()
+    {
         return;
     }
     if state.message.take().is_some() {

@@ -88,6 +88,9 @@ fn drag(state: &mut State, base: &Arc<Design>, zone: ZoneRef, vector: Vector, to
         Ok(shape) => {
             let label = format!("Drag {}", name.to_lowercase());
             state.change(&label, Some("drag a zone".to_owned()), |design| design.shape = shape);
+            state.say(format!(
+                "{label} · x, y, z: an axis · l: length only · a: alike · n: no snapping · Esc: back"
+            ));
             state.view.zones.picked = Some(zone);
         }
         // The drag stays where it was last possible.

@@ -20,7 +20,6 @@ const ROWS_SHOWN: usize = 8;
 
 /// Draws the zones.
 pub(super) fn zones_ui(cx: Cx<'_>, ui: &mut Ui) {
-    toggles(cx, ui);
     let shell = &cx.state.derived.shell;
     if shell.zones.is_empty() {
         ui.weak("The start gives no zones: see the findings.");
@@ -34,28 +33,12 @@ pub(super) fn zones_ui(cx: Cx<'_>, ui: &mut Ui) {
             ui.weak("Pick a zone here, or drag any edge in the picture.");
         }
     }
+    directions(cx, ui);
 }
 
-/// How changes and drags go.
-fn toggles(cx: Cx<'_>, ui: &mut Ui) {
+/// What drags snap to, besides what is round and what is there. How they go is chosen above the picture.
+fn directions(cx: Cx<'_>, ui: &mut Ui) {
     let view = &cx.state.view.zones;
-    for (on, act, key) in [
-        (
-            view.together,
-            ZoneAct::Together,
-            "Hold a during a drag for the opposite.",
-        ),
-        (view.snap, ZoneAct::Snap, "Hold n during a drag for none."),
-    ] {
-        let (mut on, words, command) = (on, act.words(), Command::Zone(act));
-        let keys = command
-            .shortcut()
-            .map_or_else(String::new, |keys| format!(" ({})", ui.ctx().format_shortcut(&keys)));
-        let hint = format!("{}{keys} {key}", words.hint);
-        if ui.checkbox(&mut on, words.name).on_hover_text(hint).changed() {
-            cx.tx.send(command);
-        }
-    }
     if !view.snap {
         return;
     }

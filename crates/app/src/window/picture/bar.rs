@@ -8,6 +8,7 @@ use crate::window::{
     fields::wide_choice,
     panels::Cx,
     panes::{Layout, PaneAct},
+    zones::ZoneAct,
 };
 
 /// What a view can show; none is the free view.
@@ -61,7 +62,24 @@ pub(super) fn bar_ui(cx: Cx<'_>, ui: &mut Ui) {
         if ui.checkbox(&mut hidden, "Hidden edges").changed() {
             cx.tx.send(Command::HiddenEdges);
         }
+        ui.separator();
+        for (on, act, text) in [
+            (view.zones.together, ZoneAct::Together, "Alike"),
+            (view.zones.snap, ZoneAct::Snap, "Snap"),
+        ] {
+            toggle(ui, cx, on, act, text);
+        }
     });
+}
+
+/// A toggle of how zones and points are dragged.
+fn toggle(ui: &mut Ui, cx: Cx<'_>, on: bool, act: ZoneAct, text: &str) {
+    let hint = act.hint(ui.ctx());
+    let name = act.words().name;
+    let button = egui::Button::selectable(on, text).frame_when_inactive(true);
+    if ui.add(button).on_hover_text(hint).accessible_name(name).clicked() {
+        cx.tx.send(Command::Zone(act));
+    }
 }
 
 /// A button that shows how a layout shares the window.

@@ -66,6 +66,14 @@ pub(crate) struct Tip {
     pub line: Option<[Point; 2]>,
 }
 
+impl Tip {
+    /// Moves the marks along.
+    fn shift(&mut self, by: Vector) {
+        self.ring = self.ring.map(|point| point + by);
+        self.line = self.line.map(|ends| ends.map(|point| point + by));
+    }
+}
+
 /// What the pointer is over among the zones, and what is dragged there.
 #[derive(Debug, Default)]
 pub(crate) struct ZoneWork {
@@ -145,12 +153,15 @@ pub(crate) struct ZoneDrag {
     /// The edge that was taken, and its end that is held.
     edge: u32,
     near: u32,
+    far: u32,
     near_at: Point,
     far_at: Point,
     /// From the held end to the other, as the shell stands.
     vector: Vector,
     /// 1 when that is along the zone, -1 when against it.
     along: f64,
+    /// How many times the change of the vector the far end moves: more than once where edges of the zone lie before it.
+    carried: f64,
     /// From the grown frame to the one where the shell stands, for vectors.
     placed: DMat3,
     from: Pos2,
@@ -165,49 +176,88 @@ struct Still {
     neighbours: Vec<(u32, Vector)>,
 }
 
-/// Begins a drag when there is an edge at the place that was pressed. The end nearer to the pointer follows it; the other one is held.
+/// Begins a drag when there is an edge at the place that was pressed. The end that the zone carries along follows the pointer, the other one is
+/// held; where the zone carries both alike, the one nearer to the pointer follows.
 pub(super) fn begin(state: &State, camera: &Camera, from: Pos2, rect: Rect) -> Option<ZoneDrag> {
+    if state.derived.revision != state.history.revision() {
+        // The shell that is shown is not that of the design yet.
+        return None;
+    }
     let pos = from - rect.min;
     let edge = hit::edge_at(state, camera, pos)?;
     let shell = Arc::clone(&state.derived.shell);
     let zone = (*state.derived.zones.of_edge.get(edge as usize)?)?;
-    let ends = shell.edges[edge as usize].ends;
     let away = |v: u32| {
         let seen = camera.project(shell.points[v as usize]);
         seen.map_or(f32::MAX, |seen| (Vec2::from(seen.pos) - pos).length())
     };
-    let [near, far] = if away(ends[0]) < away(ends[1]) {
-        [ends[1], ends[0]]
-    } else {
-        ends
-    };
-    let [near_at, far_at] = [near, far].map(|v| shell.points[v as usize]);
-    let placed = turned(&state.shape().placement);
-    let whole = placed * shell.zones[zone as usize].vector;
-    let along = if (far_at - near_at).dot(whole) < 0.0 { -1.0 } else { 1.0 };
-    Some(ZoneDrag {
+    let mut ends = shell.edges[edge as usize].ends;
+    if away(ends[0]) < away(ends[1]) {
+        ends.reverse();
+    }
+    let mut drag = ZoneDrag {
         base: Arc::clone(state.design()),
         name: shell.zones[zone as usize].name,
         zone,
         edge,
-        near,
-        // Of a side that is met in its middle only a part may have been pressed.
-        near_at: far_at - whole * along,
-        far_at,
-        vector: whole * along,
-        along,
-        placed,
+        near: ends[0],
+        far: ends[1],
+        near_at: Point::ORIGIN,
+        far_at: Point::ORIGIN,
+        vector: Vector::ZERO,
+        along: 1.0,
+        carried: 1.0,
+        placed: turned(&state.shape().placement),
         from,
         still: [None, None],
         shell,
-    })
+    };
+    let trial = drag.trial(false);
+    let moved = |v: u32| trial.as_ref().and_then(|(after, _)| drag.moved(after, v));
+    if let (Some(near), Some(far)) = (moved(drag.near), moved(drag.far))
+        && far.length() < near.length() * (1.0 - ALIKE)
+    {
+        core::mem::swap(&mut drag.near, &mut drag.far);
+    }
+    drag.take_hold(trial.as_ref());
+    Some(drag)
 }
 
+/// Movements that differ by less than this part are alike.
+const ALIKE: f64 = 1e-6;
+
 impl ZoneDrag {
+    /// Works out what the ends and a trial say.
+    fn take_hold(&mut self, trial: Option<&(Shell, Vector)>) {
+        let [near_at, far_at] = [self.near, self.far].map(|v| self.shell.points[v as usize]);
+        let whole = self.placed * self.shell.zones[self.zone as usize].vector;
+        self.along = if (far_at - near_at).dot(whole) < 0.0 { -1.0 } else { 1.0 };
+        self.vector = whole * self.along;
+        self.far_at = far_at;
+        // Of a side that is met in its middle only a part may have been pressed.
+        self.near_at = far_at - self.vector;
+        let Some((after, change)) = trial else { return };
+        let change = self.placed * *change * self.along;
+        if let Some(moved) = self.moved(after, self.far) {
+            let times = moved.dot(change) / change.length_squared();
+            // Otherwise the ground or the closing of the front moves the shell besides, and the held end is what counts.
+            if 1.0 <= times && moved.distance(change * times) <= ALIKE * change.length() {
+                self.carried = times;
+            }
+        }
+        self.still[0] = Some(self.still_after(after, change.length()));
+    }
+
+    /// By how much a vertex has moved in a trial; none when the shell has grown otherwise.
+    fn moved(&self, after: &Shell, v: u32) -> Option<Vector> {
+        let same = after.points.len() == self.shell.points.len();
+        same.then(|| after.points[v as usize] - self.shell.points[v as usize])
+    }
+
     /// What a place of the pointer makes of the zone.
     fn step(&mut self, state: &State, camera: &Camera, pos: Pos2, held: Held) -> (ZoneAct, Tip) {
         let by = pos - self.from;
-        let moved = camera.move_in_view_plane(self.far_at, by.x, by.y);
+        let moved = camera.move_in_view_plane(self.far_at, by.x, by.y) / if held.together { 1.0 } else { self.carried };
         let free = if held.length {
             Freedom::Line(self.vector.normalize())
         } else if held.together {
@@ -273,6 +323,11 @@ impl ZoneDrag {
         let rules = rules(camera, self.far_at, state.units());
         let star = star_directions(state);
         let near = self.near_at;
+        // Where the held end stands by now, for the marks.
+        let shell = &state.derived.shell;
+        let now = shell.points.get(self.near as usize).copied();
+        let now = now.filter(|_| shell.points.len() == self.shell.points.len());
+        let shift = now.map_or(Vector::ZERO, |now| now - self.shell.points[self.near as usize]);
         let still = self.still(held.together);
         let neighbours: Vec<Vector> = still.neighbours.iter().map(|(_, v)| *v).collect();
         let around = Around {
@@ -292,6 +347,7 @@ impl ZoneDrag {
             neighbours: &zones,
         };
         words(&snapped.to, &names, tip, &still.vertices, [near, near + snapped.value]);
+        tip.shift(shift);
         snapped.value
     }
 
@@ -299,18 +355,23 @@ impl ZoneDrag {
     fn still(&mut self, together: bool) -> &Still {
         let place = usize::from(together);
         if self.still[place].is_none() {
-            self.still[place] = Some(self.try_change(together).unwrap_or_default());
+            let trial = self.trial(together);
+            let still = trial.map(|(after, change)| self.still_after(&after, (self.placed * change).length()));
+            self.still[place] = Some(still.unwrap_or_default());
         }
         self.still[place].get_or_insert_with(Still::default)
     }
 
-    fn try_change(&self, together: bool) -> Option<Still> {
+    /// The shell after a small change of the zone, and the change in the grown frame; none when the zone cannot be changed.
+    fn trial(&self, together: bool) -> Option<(Shell, Vector)> {
         let own = self.shell.zones[self.zone as usize].vector;
-        let size = own.length() * TRIAL;
-        let change = Vector::from_array(AWRY).normalize() * size;
+        let change = Vector::from_array(AWRY).normalize() * (own.length() * TRIAL);
         let set = if together { set_together } else { set_zone };
         let shape = set(&self.base.shape, self.name, own + change).ok()?;
-        let (after, _) = grow(&shape);
+        Some((grow(&shape).0, change))
+    }
+
+    fn still_after(&self, after: &Shell, size_mm: f64) -> Still {
         let panels = self.shell.edges[self.edge as usize].panels;
         let neighbours = panels
             .into_iter()
@@ -319,13 +380,13 @@ impl ZoneDrag {
             .map(|letter| self.shell.zone_of(letter))
             .filter(|zone| {
                 let vector = |shell: &Shell| shell.zones.get(*zone as usize).map(|z| z.vector);
-                *zone != self.zone && vector(&self.shell) == vector(&after)
+                *zone != self.zone && vector(&self.shell) == vector(after)
             })
             .map(|zone| (zone, self.placed * self.shell.zones[zone as usize].vector));
-        Some(Still {
+        Still {
             neighbours: neighbours.collect(),
-            vertices: still_vertices(&self.shell, &after, Some(self.near), size),
-        })
+            vertices: still_vertices(&self.shell, after, Some(self.near), size_mm),
+        }
     }
 }
 
