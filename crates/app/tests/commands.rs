@@ -4,6 +4,7 @@
 
 mod designs;
 mod program;
+mod solving;
 
 use std::{collections::BTreeSet, fs};
 

@@ -15,6 +15,7 @@ mod record;
 mod shell;
 mod shell_check;
 pub mod snap;
+pub mod solve;
 mod space;
 pub mod start;
 

@@ -254,6 +254,23 @@ impl Shell {
         }
     }
 
+    /// The panel with a name, and whether the name has its letters the other way round: then the shell has been turned inside out
+    /// since, and the panel's corners run the other way from the same first one.
+    #[must_use]
+    pub fn panel_named(&self, name: &PanelName) -> Option<(u32, bool)> {
+        let letter = |name: &LetterName| {
+            let alike = |l: &&Letter| (l.maker, l.index, l.sign) == (name.maker, name.index, name.sign);
+            let found = (0_u32..).zip(&self.letters).filter(|(_, l)| alike(l));
+            found.map(|(k, _)| k).find(|k| self.letter_name(*k) == *name)
+        };
+        let [a, b] = [letter(&name.letters.0)?, letter(&name.letters.1)?];
+        let aft = name.side == Side::Aft;
+        let named = |p: &Panel| (p.course < 0) == aft && (p.letters == [a, b] || p.letters == [b, a]);
+        let turn = usize::try_from(name.turn).ok()?;
+        let (found, panel) = (0_u32..).zip(&self.panels).filter(|(_, p)| named(p)).nth(turn)?;
+        Some((found, panel.letters != [a, b]))
+    }
+
     /// The zone of an edge, by index in [`Shell::zones`]; none for an edge without a panel.
     #[must_use]
     pub fn edge_zone(&self, edge: u32) -> Option<u32> {

@@ -12,6 +12,10 @@ use crate::{
 
 /// Positions so many pixels outside the picture can still show, by the width of a stroke.
 const MARGIN: f32 = 16.0;
+/// The width of a dimension line, in pixels.
+const DIMENSION_WIDTH: f32 = 1.5;
+/// Half the length of the ticks at its ends, by axis, in pixels.
+const TICK: f32 = 4.0;
 /// How opaque a marked polygon is, of 255.
 const PREVIEW_ALPHA: u8 = 120;
 
@@ -319,6 +323,7 @@ impl<'a> Emitter<'a> {
                     self.line([from, to], colour, stroke(self.look.edge_width, false, false));
                 }
             }
+            MarkKind::Dimension { text, size } => self.dimension(&mark.at, colour, text, *size),
             MarkKind::Label { text, size } => {
                 for place in self.seen(&mark.at) {
                     self.picture.texts.push(Text {
@@ -331,6 +336,60 @@ impl<'a> Emitter<'a> {
                     });
                 }
             }
+        }
+    }
+
+    /// A dimension line. Its text stands beside the middle of what is seen of it, on the upper side, so that it does not lie on the line.
+    fn dimension(&mut self, at: &[Point], colour: Colour, text: &str, size: f32) {
+        let [Some(&first), Some(&last)] = [at.first(), at.last()] else {
+            return;
+        };
+        if !(first.is_finite() && last.is_finite()) {
+            return;
+        }
+        let Some(ends) = self.clip.line([first, last].map(|p| self.lens.to_camera(p))) else {
+            return;
+        };
+        let [a, b] = ends.map(|seen| self.lens.onto(seen));
+        let along = [b[0] - a[0], b[1] - a[1]];
+        let length = along[0].hypot(along[1]);
+        let mut up = [0.0, -1.0];
+        if length > 0.0 {
+            let [x, y] = along.map(|d| d / length);
+            // Of the two directions across the line, the one that leads up; beside an upright line, to the right.
+            up = if x.abs() < 1e-3 {
+                [1.0, 0.0]
+            } else {
+                [y * x.signum(), -x.abs()]
+            };
+            self.picture.push([a, b], colour, stroke(DIMENSION_WIDTH, false, false));
+            // Halfway between along and across.
+            let slant = [(x - y) * TICK, (x + y) * TICK];
+            for end in self.seen(&[first, last]) {
+                let tick = [-1.0, 1.0].map(|k| [end[0] + slant[0] * k, end[1] + slant[1] * k]);
+                self.picture
+                    .push(tick, colour, stroke(DIMENSION_WIDTH * 1.6, false, false));
+            }
+        }
+        // A text has about half its height a letter; beside a steep line it keeps clear by its width.
+        let half = size * 0.25 * text.chars().count() as f32;
+        let away = (up[1].abs() * size * 0.75).max(up[0].abs() * (half + size * 0.5));
+        let middle = [(a[0] + b[0]) * 0.5, (a[1] + b[1]) * 0.5];
+        let [w, h] = self.picture.size;
+        if (0.0..=w).contains(&middle[0]) && (0.0..=h).contains(&middle[1]) {
+            let pos = [middle[0] + up[0] * away, middle[1] + up[1] * away];
+            self.picture.texts.push(Text {
+                // The whole text stays on the picture.
+                pos: [
+                    pos[0].clamp(half.min(w * 0.5), (w - half).max(w * 0.5)),
+                    pos[1].clamp((size * 0.5).min(h * 0.5), (h - size * 0.5).max(h * 0.5)),
+                ],
+                anchor: Anchor::Centre,
+                size,
+                colour,
+                halo: self.look.palette.background,
+                text: text.to_owned(),
+            });
         }
     }
 

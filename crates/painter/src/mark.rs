@@ -58,6 +58,13 @@ pub enum MarkKind {
     },
     /// A translucent convex polygon with the points as corners, such as the panel that a step would make.
     Polygon,
+    /// A dimension line from the first point to the last, a slanting tick at each end, its text across the middle.
+    Dimension {
+        /// The text.
+        text: String,
+        /// The height of the letters' line.
+        size: f32,
+    },
     /// A text beside each point.
     Label {
         /// The text.

@@ -381,3 +381,52 @@ fn positions_stay_near_the_picture() {
         );
     }
 }
+
+/// A dimension: a line, a tick at 45 degrees over each end, a text beside the middle and clear of the line.
+#[test]
+fn a_dimension_has_ticks_at_its_ends_and_its_text_beside_it() {
+    let shell = cube();
+    let camera = Camera {
+        projection: Projection::Parallel,
+        ..seen(&shell, View::Front)
+    };
+    let dimension = |at: Vec<Point>| Mark {
+        at,
+        kind: MarkKind::Dimension {
+            text: "100 mm".to_owned(),
+            size: 13.0,
+        },
+        tone: Tone::Selection,
+    };
+    let draw = |mark: Mark| Scene::exact(&shell).picture(&shell, &camera, &Look::default(), &Tints::default(), &[mark]);
+    let plain = Scene::exact(&shell).picture(&shell, &camera, &Look::default(), &Tints::default(), &[]);
+    let (a, b) = (shell.points[0], shell.points[0] + Vector::new(40.0, 0.0, 30.0));
+    let [from, to] = [a, b].map(|p| camera.project(p).unwrap().pos);
+    let picture = draw(dimension(vec![a, b]));
+    let added = &picture.items[plain.items.len()..];
+    assert_eq!(added.len(), 3);
+    assert_eq!(picture.points_of(&added[0]), [from, to]);
+    let along = [to[0] - from[0], to[1] - from[1]];
+    for (item, end) in added[1..].iter().zip([from, to]) {
+        let [p, q] = [picture.points_of(item)[0], picture.points_of(item)[1]];
+        assert!(((p[0] + q[0]) * 0.5 - end[0]).hypot((p[1] + q[1]) * 0.5 - end[1]) < 1e-3);
+        let tick = [q[0] - p[0], q[1] - p[1]];
+        let cosine = (tick[0] * along[0] + tick[1] * along[1]) / (tick[0].hypot(tick[1]) * along[0].hypot(along[1]));
+        assert!((cosine.abs() - 0.5_f32.sqrt()).abs() < 1e-4, "{cosine}");
+    }
+    let text = &picture.texts[0];
+    assert_eq!(text.colour, Look::default().palette.selection);
+    let middle = [(from[0] + to[0]) * 0.5, (from[1] + to[1]) * 0.5];
+    let off = [text.pos[0] - middle[0], text.pos[1] - middle[1]];
+    assert!(
+        (off[0] * along[0] + off[1] * along[1]).abs() < 1e-2,
+        "straight across the line"
+    );
+    assert!(off[1] < -6.5, "above it");
+    // No length: the text alone. Nowhere: nothing.
+    let none = draw(dimension(vec![a, a]));
+    assert_eq!((none.items.len(), none.texts.len()), (plain.items.len(), 1));
+    let lost = draw(dimension(vec![a, Point::new(f64::NAN, 0.0, 0.0)]));
+    assert_eq!((lost.items.len(), lost.texts.len()), (plain.items.len(), 0));
+    assert!(draw(dimension(Vec::new())).texts.is_empty());
+}

@@ -10,6 +10,7 @@ pub mod lists;
 pub mod marks;
 pub mod models;
 pub mod parts;
+mod solve_text;
 pub mod spread;
 #[cfg(test)]
 mod test_shells;
@@ -21,3 +22,4 @@ pub use family::{FamilyTolerance, Hand};
 pub use finding_text::{FindingText, FindingWriter, level_word};
 pub use marks::Mark;
 pub use parts::{Family, Mate, Mates, PartEdge, PartPanel, Parts};
+pub use solve_text::{change_line, figure_name, figure_value, parameter_value, reached_line, unsolved_text, zone_name};

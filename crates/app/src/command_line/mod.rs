@@ -1,13 +1,16 @@
 //! The command line. It is kept stable: other programs call it.
 
+mod animate;
 mod curve_words;
 mod fit;
 mod jobs;
 mod picture;
 mod refusal;
+mod solve;
 mod star_words;
 mod start;
 mod values;
+mod wants;
 
 use std::{ffi::OsString, io::Write, path::PathBuf, process::ExitCode};
 
@@ -98,6 +101,16 @@ enum Command {
         #[arg(long, value_delimiter = ',', value_name = "WORDS")]
         only: Vec<String>,
     },
+    /// Change parameters until figures of the shell are as wanted; exit 2 with the reason when they cannot be.
+    Solve(solve::Solve),
+    /// List the parameters of a design: keys, values, names.
+    Parameters {
+        /// The design.
+        file: PathBuf,
+        /// Print a JSON list, numbers at full precision.
+        #[arg(long)]
+        json: bool,
+    },
     /// Draw a picture, without a display.
     Picture {
         /// The design.
@@ -112,6 +125,8 @@ enum Command {
         #[arg(long, value_name = "WxH", default_value = "1200x800", value_parser = values::size)]
         size: [u32; 2],
     },
+    /// Show the growth, or a parameter that runs between two values, as moving pictures.
+    Animate(animate::Animate),
 }
 
 /// What the command line asks for.
@@ -146,6 +161,9 @@ pub fn run(arguments: impl IntoIterator<Item = OsString>) -> Asked {
         Some(Command::Report { file, json }) => jobs::report(&file, json).map(|()| DONE),
         Some(Command::Check { file, json }) => jobs::check(&file, json).map(|stop| if stop { STOPPED } else { DONE }),
         Some(Command::Export { file, to, only }) => jobs::export(&file, &to, &only).map(|()| DONE),
+        Some(Command::Animate(animate)) => animate.make().map(|()| DONE),
+        Some(Command::Solve(options)) => options.run().map(|()| DONE),
+        Some(Command::Parameters { file, json }) => solve::list(&file, json).map(|()| DONE),
         Some(Command::Picture {
             file,
             output,

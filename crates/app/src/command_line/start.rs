@@ -264,12 +264,7 @@ impl Kind {
     pub(super) fn make(self) -> Result<(), String> {
         let (start, common) = self.start()?;
         let path = &common.output;
-        if !common.force && path.symlink_metadata().is_ok() {
-            return Err(format!(
-                "{} is there already and was left as it is; give another name, or --force to overwrite it",
-                path.display()
-            ));
-        }
+        free_to_write(path, common.force)?;
         let spurs = match common.spurs {
             SpurWord::Retract => Spurs::Retract,
             SpurWord::Hold => Spurs::Hold,
@@ -362,6 +357,17 @@ impl Kind {
             }
         })
     }
+}
+
+/// Refuses to overwrite a file that is there, unless that is forced.
+pub(super) fn free_to_write(path: &Path, force: bool) -> Result<(), String> {
+    if !force && path.symlink_metadata().is_ok() {
+        return Err(format!(
+            "{} is there already and was left as it is; give another name, or --force to overwrite it",
+            path.display()
+        ));
+    }
+    Ok(())
 }
 
 fn imported(file: &Path, tolerance: f64, closed: bool) -> Result<FreePath, String> {

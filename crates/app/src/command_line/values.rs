@@ -1,6 +1,7 @@
 //! Values of the command line's options.
 
-use zonewright_geometry::{Angle, Point};
+use zonewright_geometry::{Angle, Point, parameter::ParameterKind};
+use zonewright_painter::View;
 use zonewright_shop::text::{ParseError, Units, parse_angle, parse_length};
 
 use super::refusal::uncapitalised;
@@ -87,4 +88,33 @@ pub(super) fn moved(text: &str) -> Result<(u32, zonewright_geometry::Vector), St
         .split_once(':')
         .ok_or_else(|| format!("`{text}` moves no point; write NODE:x,y,z, as in 3:0,0,50"))?;
     Ok((count(node)?, point(by)?.0))
+}
+
+/// A named view.
+pub(super) fn view(name: &str) -> Result<View, String> {
+    View::parse(name).ok_or_else(|| {
+        let names = View::ALL.map(View::name).join(", ");
+        format!("there is no view `{name}`; there are {names}")
+    })
+}
+
+/// A parameter that runs between two values: `start.pitch=20..50`. The values are read when the parameter's kind is known.
+pub(super) fn sweep(text: &str) -> Result<[String; 3], String> {
+    let wrong = || "write KEY=FROM..TO, as in start.pitch=20..50".to_owned();
+    let (key, range) = text.split_once('=').ok_or_else(wrong)?;
+    let (from, to) = range.split_once("..").ok_or_else(wrong)?;
+    let parts = [key, from, to].map(|part| part.trim().to_owned());
+    if parts.iter().any(String::is_empty) {
+        return Err(wrong());
+    }
+    Ok(parts)
+}
+
+/// A value of a parameter: a length, an angle, or a plain number.
+pub(super) fn of_kind(kind: ParameterKind, text: &str) -> Result<f64, String> {
+    match kind {
+        ParameterKind::Length => length(text),
+        ParameterKind::Angle => angle(text).map(Angle::degrees),
+        ParameterKind::Factor | ParameterKind::Count => number(text),
+    }
 }

@@ -139,6 +139,15 @@ impl App {
         self.widgets.strip.outlines()
     }
 
+    /// Carries out what has been sent and works out what follows from it, as before each frame; for the bench of the strip.
+    pub fn work(&mut self) {
+        for command in self.sender.take() {
+            execute::run(&mut self.state, command);
+        }
+        let design = std::sync::Arc::clone(self.state.design());
+        self.state.derived.catch_up(&design, self.state.history.revision());
+    }
+
     /// Draws the strip alone: one frame of it for its bench.
     pub fn strip_frame(&mut self, ui: &mut Ui) {
         let cx = Cx {
@@ -239,6 +248,7 @@ impl App {
     fn follow(&mut self, ctx: &egui::Context) {
         let (now, dragging) = ctx.input(|i| (i.time, i.pointer.any_down() || i.pointer.any_released()));
         let state = &mut self.state;
+        execute::follow_search(state);
         execute::follow_fit(state);
         let design = std::sync::Arc::clone(state.design());
         execute::keep_climbed(state);

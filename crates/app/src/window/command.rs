@@ -11,7 +11,7 @@ use zonewright_shop::text::Units;
 
 use super::{
     backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct,
-    strip::StripAct, view::Hand, zones::ZoneAct,
+    selection::SelectAct, solving::SolveAct, strip::StripAct, view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -100,6 +100,8 @@ pub enum Command {
     Pan(egui::Vec2),
     /// Zooms by a factor, keeping the place under a point of the picture.
     Zoom(egui::Pos2, f32),
+    /// Picks things, measures between them.
+    Select(SelectAct),
     /// Does something to the views.
     Pane(PaneAct),
     /// Changes, links or picks zones.
@@ -134,6 +136,8 @@ pub enum Command {
     Readings(ReadingAct),
     /// Recovers, reloads, overwrites, goes several steps back.
     Safe(SafeAct),
+    /// Solves for wanted figures.
+    Solving(SolveAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -205,6 +209,7 @@ impl Command {
             Self::HiddenEdges,
             Self::SwapUnits,
             Self::SwapSide,
+            Self::Solving(SolveAct::Run),
             Self::Readings(ReadingAct::Remember),
             Self::Readings(ReadingAct::GoBack),
             Self::Readings(ReadingAct::Forget),
@@ -213,6 +218,7 @@ impl Command {
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(super::safe::listed());
+        all.extend(SelectAct::listed().map(Self::Select));
         all.extend(BackdropAct::listed().map(Self::Backdrop));
         all.extend(ZoneAct::listed().map(Self::Zone));
         all.extend(StripAct::listed().map(Self::Strip));
@@ -272,6 +278,7 @@ impl Command {
             Self::Pan(_) => ("Move the picture", "Moves the camera along the screen."),
             Self::Zoom(..) => ("Zoom", "Brings the shell nearer or farther."),
             Self::Pane(act) => return act.words(),
+            Self::Select(act) => return act.words(),
             Self::Zone(act) => return act.words(),
             Self::Look(view) => return super::view::look_words(*view),
             Self::SetProjection(Projection::Perspective) => ("Perspective", "Draws far things smaller."),
@@ -292,6 +299,7 @@ impl Command {
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
             Self::Safe(act) => return act.words(),
+            Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),
@@ -332,6 +340,7 @@ impl Command {
             Self::Find => (Modifiers::COMMAND, Key::K),
             Self::Ladder(act) => act.keys()?,
             Self::Pane(act) => act.shortcut()?,
+            Self::Select(act) => act.shortcut()?,
             Self::Zone(act) => act.shortcut()?,
             _ => return None,
         };

@@ -196,8 +196,8 @@ impl Derived {
         let until = Instant::now() + PATIENCE;
         let fresh = (revision, self.climbing) != self.asked_for;
         if fresh {
-            self.backdrop.follow(design.backdrop.as_ref());
             let job = self.ask(design, revision, dragging);
+            self.backdrop.follow(design.backdrop.as_ref());
             worker.growing.request(job);
         }
         while let Some(grown) = if fresh && self.pending().is_some() {

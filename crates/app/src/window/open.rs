@@ -44,21 +44,27 @@ const PACKAGES: [&str; 2] = ["libgl1 libegl1 libgl1-mesa-dri", "libvulkan1 mesa-
 pub fn run(options: &Options) -> Result<(), String> {
     let session = session::file();
     let remembered = session.as_deref().map(session::read).unwrap_or_default();
-    let first = first_design(options.file.as_deref(), &remembered)?;
-    let size = remembered.size().unwrap_or([1280.0, 800.0]);
+    let first_shown = first_design(options.file.as_deref(), &remembered)?;
     let log = options.frame_times.as_deref().map(FrameLog::create).transpose()?;
     // Once the window has been there, a failure is no reason to open another one on the design as it was.
     let shown = Rc::new(Cell::new(false));
     let open = |renderer: eframe::Renderer| {
-        let (first, session) = (first.clone(), session.clone());
+        let (first_shown, session) = (first_shown.clone(), session.clone());
         let (log, shown) = (log.clone(), Rc::clone(&shown));
         let create: eframe::AppCreator<'_> = Box::new(move |cc| {
             shown.set(true);
-            let app = App::new(&cc.egui_ctx, first.design, first.path).with_frame_log(log);
-            let app = app.with_session(session).with_stamp(first.stamp);
-            Ok(Box::new(app.with_message(first.message)))
+            let First {
+                design,
+                path,
+                stamp,
+                message,
+            } = first_shown;
+            let app = App::new(&cc.egui_ctx, design, path).with_frame_log(log);
+            Ok(Box::new(
+                app.with_session(session).with_stamp(stamp).with_message(message),
+            ))
         });
-        eframe::run_native("zonewright", native(renderer, size), create)
+        eframe::run_native("zonewright", native(renderer, remembered.size()), create)
     };
     let (first, second) = match options.renderer {
         Renderer::Auto => (eframe::Renderer::Glow, Some(eframe::Renderer::Wgpu)),
@@ -75,7 +81,7 @@ pub fn run(options: &Options) -> Result<(), String> {
     opened.map_err(|error| refused(&error, options.renderer, shown.get()))
 }
 
-fn native(renderer: eframe::Renderer, size: [f32; 2]) -> eframe::NativeOptions {
+fn native(renderer: eframe::Renderer, size: Option<[f32; 2]>) -> eframe::NativeOptions {
     let mut wgpu_options = WgpuConfiguration::default();
     if let WgpuSetup::CreateNew(setup) = &mut wgpu_options.wgpu_setup {
         setup.instance_descriptor.backends = wgpu::Backends::VULKAN;
@@ -86,7 +92,7 @@ fn native(renderer: eframe::Renderer, size: [f32; 2]) -> eframe::NativeOptions {
         viewport: egui::ViewportBuilder::default()
             .with_title("zonewright")
             .with_app_id("zonewright")
-            .with_inner_size(size)
+            .with_inner_size(size.unwrap_or([1280.0, 800.0]))
             .with_min_inner_size([900.0, 560.0])
             .with_drag_and_drop(true),
         renderer,

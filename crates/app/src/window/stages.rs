@@ -162,7 +162,7 @@ pub enum Inspected {
     },
     /// How far each panel is from the backdrop.
     Left {
-        /// What it is about.
+        /// Which growth it is about.
         ticket: u64,
         /// The distances, one a panel.
         left: Vec<PanelLeft>,

@@ -8,7 +8,7 @@ use zonewright_shop::text::Units;
 
 use super::{
     backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes,
-    readings::Remembered, safe::Safe, theme::Theme, view::ViewState, worker::Worker,
+    readings::Remembered, safe::Safe, solving::Solving, theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -30,6 +30,8 @@ pub struct State {
     pub view: ViewState,
     /// From where one looks, in each of the views.
     pub panes: Panes,
+    /// The growth that what is picked was found again in.
+    pub(crate) followed: u64,
     /// What follows from the design.
     pub derived: Derived,
     /// What is done with the backdrop.
@@ -54,6 +56,8 @@ pub struct State {
     pub safe: Safe,
     /// The state that the readouts are compared with.
     pub remembered: Option<Remembered>,
+    /// Solving for wanted figures.
+    pub solving: Solving,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -67,6 +71,7 @@ impl State {
             path,
             view: ViewState::default(),
             panes: Panes::default(),
+            followed: 0,
             derived: Derived::new(),
             backdrop: BackdropState::default(),
             worker,
@@ -79,6 +84,7 @@ impl State {
             closing: false,
             safe: Safe::default(),
             remembered: None,
+            solving: Solving::default(),
             theme: Theme::bundled(),
         }
     }

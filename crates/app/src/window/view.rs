@@ -3,7 +3,9 @@
 use zonewright_geometry::{Direction, PanelName, Side, Vector, start::DragRule};
 use zonewright_painter::{ColourBy, Faces, View};
 
-use super::{command::Words, ladder::LadderView, readings::Shown, strip::StripView, zones::ZoneView};
+use super::{
+    command::Words, ladder::LadderView, readings::Shown, selection::Selection, strip::StripView, zones::ZoneView,
+};
 
 /// What a splice inserts.
 #[derive(Clone, PartialEq, Debug)]
@@ -40,6 +42,8 @@ pub struct ViewState {
     pub point: Option<usize>,
     /// The picked panel, by its index in the shell and by its name.
     pub panel: Option<(u32, PanelName)>,
+    /// The picked vertex or edge, and what is measured.
+    pub selection: Selection,
     /// Whether distances to the backdrop are coloured without their side.
     pub without_sign: bool,
     /// The picked zone, and how zones are dragged.
@@ -67,6 +71,7 @@ impl Default for ViewState {
             strip: StripView::default(),
             point: None,
             panel: None,
+            selection: Selection::default(),
             without_sign: false,
             zones: ZoneView::default(),
             rule: DragRule::Neighbours,

@@ -5,7 +5,7 @@ use std::path::PathBuf;
 use zonewright_geometry::{Point, Side};
 use zonewright_painter::Picture;
 
-use super::panes::PANES;
+use super::{panes::PANES, thing::Thing};
 
 /// A drag in the picture.
 #[derive(Clone, Copy, PartialEq, Debug)]
@@ -77,6 +77,8 @@ pub(super) struct Widgets {
     pub drag_pane: usize,
     /// The pane that the pointer is over.
     pub over_pane: Option<usize>,
+    /// What a click would pick, and in which pane.
+    pub over_thing: Option<(usize, Thing)>,
     /// The last call for the keyboard that a pane has answered.
     pub focus: u64,
     /// The open V that the pointer is over, in the strip or in the picture: its side, and its place among the open Vs.
@@ -91,6 +93,8 @@ pub(super) struct Widgets {
     pub strip: super::strip::StripWidgets,
     /// How sides, angles and folds are spread.
     pub spreads: super::panels::SpreadCache,
+    /// What solving shows.
+    pub solving: super::panels::SolveCache,
     /// The picture of each pane.
     pub cache: [PictureCache; PANES],
     /// How often a picture was put together.

@@ -14,7 +14,10 @@ use std::{
     time::{Duration, Instant},
 };
 
-use super::stages::{Grow, Grown, Inspect, Inspected, grow_stages, inspect_stages};
+use super::{
+    solving::{SearchDone, SearchJob, search_stages},
+    stages::{Grow, Grown, Inspect, Inspected, grow_stages, inspect_stages},
+};
 
 /// The threads of a window.
 #[derive(Debug)]
@@ -23,6 +26,8 @@ pub struct Worker {
     pub growing: Lane<Grow, Grown>,
     /// Crossings and the exact depth order.
     pub inspecting: Lane<Inspect, Inspected>,
+    /// Searches for wanted figures.
+    pub solving: Lane<SearchJob, SearchDone>,
 }
 
 impl Worker {
@@ -32,6 +37,7 @@ impl Worker {
         Self {
             growing: Lane::start("zonewright-grow", ctx, grow_stages),
             inspecting: Lane::start("zonewright-inspect", ctx, inspect_stages),
+            solving: Lane::start("zonewright-solve", ctx, search_stages),
         }
     }
 
@@ -41,6 +47,7 @@ impl Worker {
         Self {
             growing: Lane::inline(grow_stages),
             inspecting: Lane::inline(inspect_stages),
+            solving: Lane::inline(search_stages),
         }
     }
 }

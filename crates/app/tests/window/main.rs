@@ -11,6 +11,8 @@ mod panels;
 mod panes;
 mod readings;
 mod safe;
+mod selection;
+mod solving;
 mod strip;
 mod view;
 mod zones;

@@ -91,7 +91,7 @@ fn a_pointed_v_says_what_its_panel_measures_and_what_a_splice_adds() {
     let area = 369.0_f64.sqrt() * 0.01;
     for part in [
         "Open V 1",
-        "500 mm × 500 mm",
+        "500 × 500 mm",
         &format!("{acute:.2}°"),
         &format!("{area:.3} m²"),
     ] {
@@ -99,13 +99,13 @@ fn a_pointed_v_says_what_its_panel_measures_and_what_a_splice_adds() {
     }
     // The hand is 400 mm upright: two panels of 500 and 400, each with cosine 4 / 5.
     let acute = 0.8_f64.acos().to_degrees();
-    let spliced = "spliced: 2 panels, 2 of 500 mm × 400 mm";
+    let spliced = "spliced: 2 panels of 500 × 400 mm";
     assert!(
         said.contains(spliced) && said.contains(&format!("{acute:.2}°")),
         "{said}"
     );
     let value = harness.get_by_label("Open V 1").value().unwrap();
-    assert!(value.contains("500 mm × 500 mm"), "{value}");
+    assert!(value.contains("500 × 500 mm"), "{value}");
     harness.get_by_label(&said);
 }
 
@@ -245,7 +245,7 @@ fn repeating_acts_on_every_kth_v_round_the_front() {
     harness.get_by_label("At every 2nd V").click();
     harness.run();
     point_at(&mut harness, "Open V 3");
-    assert!(said(&harness).ends_with("at 4 Vs"), "{}", said(&harness));
+    assert!(said(&harness).starts_with("Open V 3, at 4 Vs: "), "{}", said(&harness));
     harness.get_by_label("Open V 3").click();
     harness.run();
     let Some(Act::Splice {

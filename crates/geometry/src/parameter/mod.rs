@@ -46,7 +46,7 @@ impl ParameterKind {
 pub struct Parameter {
     /// Its key.
     pub key: String,
-    /// Its plain name.
+    /// Its plain name. Points, letters, directions and zones are counted from 1 in it, and from 0 in the key, as in the record.
     pub name: String,
     /// What its number is.
     pub kind: ParameterKind,

@@ -53,7 +53,7 @@ impl Walk<'_> {
                 for (k, point) in points.iter_mut().enumerate() {
                     self.vector(
                         &format!("{key}.point.{k}"),
-                        &format!("{name}: point {k}"),
+                        &format!("{name}: point {}", k + 1),
                         "free",
                         &mut point.0,
                     );

@@ -30,7 +30,7 @@ impl Walk<'_> {
                 self.vs(key, name, at);
                 for (k, direction) in directions.iter_mut().enumerate() {
                     if let Direction::Own(vector) = direction {
-                        let (key, name) = (format!("{key}direction.{k}"), format!("{name}: direction {k}"));
+                        let (key, name) = (format!("{key}direction.{k}"), format!("{name}: direction {}", k + 1));
                         self.vector_and_length(&key, &name, "directions", vector);
                     }
                 }
@@ -58,10 +58,10 @@ impl Walk<'_> {
     pub(super) fn zones(&mut self, zones: &mut [ZoneRule]) {
         for rule in zones {
             let (key, name) = match rule.zone {
-                ZoneRef::Start(id) => (format!("zone.start.{id}"), format!("Zone {id}")),
+                ZoneRef::Start(id) => (format!("zone.start.{id}"), format!("Zone {}", u64::from(id) + 1)),
                 ZoneRef::Spliced(step, k) => (
                     format!("zone.step.{}.{k}", step.0),
-                    format!("Zone {k} of step {}", step.0),
+                    format!("Zone {} of step {}", u64::from(k) + 1, step.0),
                 ),
             };
             if !self.wants(&key) {

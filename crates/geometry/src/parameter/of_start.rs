@@ -58,7 +58,7 @@ impl Walk<'_> {
                 let at = point.0[part];
                 self.number(
                     &format!("{key}{axis}"),
-                    &format!("Point {k}, {axis}"),
+                    &format!("Point {}, {axis}", k + 1),
                     range,
                     at,
                     |to| {
@@ -108,7 +108,7 @@ impl Walk<'_> {
             let own = &mut form.moved[first].1;
             let others = sum - *own;
             let mut whole = sum;
-            let (key, name) = (format!("start.moved.{node}"), format!("Movement of point {node}"));
+            let (key, name) = (format!("start.moved.{node}"), format!("Movement of node {node}"));
             self.vector(&key, &name, "moved", &mut whole);
             if whole != sum {
                 *own = whole - others;
@@ -161,11 +161,11 @@ impl Walk<'_> {
             }
             match &mut letter.length {
                 StarLength::Mm(length) => {
-                    let name = format!("Letter {k}, length");
+                    let name = format!("Letter {}, length", k + 1);
                     self.length(&format!("{key}length"), &name, LENGTH, "length", length);
                 }
                 StarLength::Golden(steps) => {
-                    let name = format!("Letter {k}, golden steps");
+                    let name = format!("Letter {}, golden steps", k + 1);
                     self.signed(&format!("{key}golden"), &name, most, "golden", steps);
                 }
             }

@@ -44,6 +44,16 @@ impl Units {
         }
     }
 
+    /// Two lengths for reading, the longer first, with one unit for both: `700 × 400 mm`.
+    #[must_use]
+    pub fn sides(self, mm: [f64; 2]) -> String {
+        let [long, short] = [mm[0].max(mm[1]), mm[0].min(mm[1])];
+        match self {
+            Self::Mm => format!("{} × {}", trimmed(long, 1), self.length(short)),
+            Self::Inch => format!("{} × {}", self.length(long), self.length(short)),
+        }
+    }
+
     /// A length for a field that is typed in: what [`super::parse_length`] with these units reads back, to 0.001 mm or
     /// 0.0001 inch.
     #[must_use]

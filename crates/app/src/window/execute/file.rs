@@ -118,6 +118,7 @@ pub(super) fn show_history(state: &mut State, history: History, path: Option<Pat
     state.message = None;
     state.view.point = None;
     state.view.panel = None;
+    state.view.selection = Default::default();
     state.view.finding = None;
     state.view.ladder = crate::window::ladder::LadderView::default();
     state.view.shown = None;

@@ -91,17 +91,23 @@ pub(super) fn delete(state: &mut State, at: usize) {
     }
 }
 
-/// Keeps the picked panel picked after the shell has grown anew, as long as the same panel is at its place.
+/// Keeps what is picked and measured after the shell has grown anew, as long as it is there.
 pub(crate) fn keep_picked(state: &mut State) {
-    let shell = &state.derived.shell;
-    let stays = state
-        .view
-        .panel
-        .as_ref()
-        .is_none_or(|(panel, name)| (*panel as usize) < shell.panels.len() && shell.panel_name(*panel) == *name);
-    if !stays {
-        state.view.panel = None;
+    let growth = state.derived.growth();
+    if state.followed == growth {
+        return;
     }
+    state.followed = growth;
+    let shell = &state.derived.shell;
+    if let Some((panel, name)) = &mut state.view.panel {
+        let stays = (*panel as usize) < shell.panels.len() && shell.panel_name(*panel) == *name;
+        match shell.panel_named(name).filter(|_| !stays) {
+            Some((found, _)) => (*panel, *name) = (found, shell.panel_name(found)),
+            None if stays => {}
+            None => state.view.panel = None,
+        }
+    }
+    state.view.selection.follow(&state.derived);
 }
 
 #[cfg(test)]

@@ -8,7 +8,9 @@ mod panes;
 mod path;
 mod readings;
 mod safe;
+mod select;
 mod shape;
+mod solving;
 mod splice;
 mod steps;
 mod strip;
@@ -21,6 +23,8 @@ pub(crate) use finish::keep_picked;
 pub(crate) use ladder::keep_climbed;
 pub(crate) use panes::{fit_when_pending, refit};
 pub(crate) use path::moved_path;
+pub(crate) use select::picked;
+pub(crate) use solving::follow_search;
 
 use super::{command::Command, state::State};
 
@@ -79,11 +83,13 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::Safe(act) if act.replaces_design() => file::run(state, Command::Safe(act)),
         Command::Safe(act) => safe::run(state, act),
         Command::Readings(act) => readings::run(state, act),
+        Command::Solving(act) => solving::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {
                 state.dialogs.open_own(asked);
             }
         }
+        Command::Select(act) => select::run(state, act),
         other => view::run(state, other),
     }
 }

@@ -52,6 +52,8 @@ fn commit(state: &mut State, shape: Shape, edit: PathEdit, converts: bool) {
         Start::Zigzag(path) => path.letters.len() + usize::from(!path.closed),
         _ => 0,
     };
+    state.view.panel = None;
+    state.view.selection.part = None;
     state.view.point = match edit {
         PathEdit::Insert(at) | PathEdit::Split(at) => Some(at + 1),
         PathEdit::Delete(_) | PathEdit::Close(_) => None,

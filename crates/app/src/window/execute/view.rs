@@ -2,8 +2,12 @@
 
 use zonewright_geometry::Side;
 
-use super::panes;
-use crate::window::{command::Command, state::State};
+use super::{panes, select};
+use crate::window::{
+    command::Command,
+    state::State,
+    thing::{Kind, Thing},
+};
 
 /// Carries out a command that leaves the design alone.
 pub(super) fn run(state: &mut State, command: Command) {
@@ -31,15 +35,12 @@ pub(super) fn run(state: &mut State, command: Command) {
             view.shown = None;
         }
         Command::SelectPoint(point) => {
-            view.point = point;
-            view.panel = None;
+            let thing = point.map(Thing::Point);
+            select::take(state, thing);
         }
         Command::SelectPanel(panel) => {
-            let shell = &state.derived.shell;
-            view.point = None;
-            view.panel = panel
-                .filter(|p| (*p as usize) < shell.panels.len())
-                .map(|p| (p, shell.panel_name(p)));
+            let thing = panel.and_then(|p| Kind::Panel.thing(&state.derived, p));
+            select::take(state, thing);
         }
         Command::SwapTheme => {
             view.dark = !view.dark;
@@ -54,7 +55,8 @@ pub(super) fn run(state: &mut State, command: Command) {
     }
 }
 
-/// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then what is picked.
+/// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then a measure that was begun,
+/// then what is picked.
 fn dismiss(state: &mut State) {
     if state.view.strip.span.take().is_some() {
         return;
@@ -70,11 +72,12 @@ fn dismiss(state: &mut State) {
         return;
     }
     // One looks at the whole again before anything is let go.
-    if state.view.ladder.climbed.take().is_none() {
+    if state.view.selection.from.take().is_none() && state.view.ladder.climbed.take().is_none() {
         state.view.finding = None;
         state.view.shown = None;
         state.view.point = None;
         state.view.panel = None;
+        state.view.selection.part = None;
         state.view.ladder.picked = None;
     }
 }

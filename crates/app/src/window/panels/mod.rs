@@ -9,6 +9,9 @@ mod panel_panel;
 mod path_table;
 mod placement_panel;
 mod readouts;
+mod selection_panel;
+mod solve_fields;
+mod solve_panel;
 mod spread_panel;
 mod star_fields;
 mod start_fields;
@@ -22,6 +25,7 @@ mod zones_panel;
 pub(super) use directions::zone_name;
 use egui::{Align, Frame, Layout, Margin, Panel, RichText, ScrollArea, Ui};
 
+pub(super) use solve_panel::SolveCache;
 pub(super) use spread_panel::SpreadCache;
 
 use super::{
@@ -76,14 +80,14 @@ pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
         });
 }
 
-/// The right panel: the picked panel, readouts and findings.
+/// The right panel: what is picked, readouts and findings.
 pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     ScrollArea::vertical()
         .auto_shrink(false)
         .id_salt("right")
         .show(ui, |ui| {
-            if let Some((panel, _)) = &cx.state.view.panel {
-                section(ui, "Panel", true, |ui| panel_panel::panel_ui(cx, ui, *panel));
+            if !selection_panel::is_empty(cx) {
+                section(ui, "Selection", true, |ui| selection_panel::selection_ui(cx, ui));
             }
             section(ui, "Readouts", true, |ui| {
                 if cx.state.view.ladder.climbed.is_some() {
@@ -91,6 +95,7 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
                 }
                 readouts::readouts_ui(cx, ui);
             });
+            section(ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
             section(ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
             section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
         });

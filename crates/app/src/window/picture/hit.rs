@@ -1,15 +1,21 @@
-//! What is under the pointer: a point of the path, or an open V.
+//! What is under the pointer: a point of the path, an open V, or a part of the shell.
 
-use zonewright_geometry::{NONE, OpenV, Point};
+use zonewright_geometry::{OpenV, Point, Shell};
 use zonewright_painter::{Camera, Pick, pick};
 
-use crate::window::state::State;
+use crate::window::{
+    state::State,
+    thing::{Kind, Thing},
+};
 
 /// How near the pointer must come to something small, in points.
 const REACH: f32 = 9.0;
 
-/// How near the pointer must come to an edge that is picked before the panel there: only when it is exactly on it.
-const EXACT: f32 = 0.0;
+/// How near the pointer must come to a vertex or an edge of the shell, in points.
+const PART_REACH: f32 = 5.0;
+
+/// Of a panel that is narrow on the picture, vertices and edges take up no more than this part of its width on each side.
+const PART_SHARE: f32 = 0.15;
 
 /// Something that the pointer is over.
 #[derive(Clone, Copy, PartialEq, Eq, Debug)]
@@ -36,20 +42,34 @@ pub(super) fn middle(v: &OpenV) -> Point {
     v.nodes[0] + (v.nodes[2] - v.nodes[0]) * 0.5
 }
 
-/// The panel at a place of the picture; exactly on an edge it is one of the edge's panels.
-pub(super) fn panel_at(state: &State, camera: &Camera, pos: egui::Vec2) -> Option<u32> {
+/// The vertex, edge or panel at a place of the picture: small things first, but never so that the panel there cannot be reached.
+pub(super) fn part_at(state: &State, camera: &Camera, pos: egui::Vec2) -> Option<Thing> {
     let (scene, shell) = (&state.derived.scene, &state.derived.shell);
-    match pick(scene, shell, camera, [pos.x, pos.y], EXACT)? {
-        Pick::Panel(panel) => Some(panel),
-        Pick::Edge(edge) => {
-            let panels = shell.edges.get(edge as usize)?.panels;
-            panels.into_iter().find(|p| *p != NONE)
-        }
-        Pick::Vertex(vertex) => {
-            let at = shell.panels.iter().position(|p| p.corners.contains(&vertex))?;
-            u32::try_from(at).ok()
-        }
-    }
+    let at = |reach| pick(scene, shell, camera, [pos.x, pos.y], reach);
+    let found = match at(0.0) {
+        Some(Pick::Panel(panel)) => at(PART_REACH.min(PART_SHARE * width(shell, camera, panel))),
+        _ => at(PART_REACH),
+    };
+    let (kind, index) = match found? {
+        Pick::Vertex(vertex) => (Kind::Vertex, vertex),
+        Pick::Edge(edge) => (Kind::Edge, edge),
+        Pick::Panel(panel) => (Kind::Panel, panel),
+    };
+    kind.thing(&state.derived, index)
+}
+
+/// How wide a panel is across its longer sides on the picture, in points.
+fn width(shell: &Shell, camera: &Camera, panel: u32) -> f32 {
+    let lens = camera.lens();
+    let [a, b, c, d] = shell.corner_points(panel).map(|p| lens.project(p));
+    let (Some(a), Some(b), Some(c), Some(d)) = (a, b, c, d) else {
+        return f32::INFINITY;
+    };
+    let [a, b, c, d] = [a, b, c, d].map(|seen| egui::Vec2::from(seen.pos));
+    let (one, other) = (c - a, d - b);
+    let area = (one.x * other.y - one.y * other.x).abs() * 0.5;
+    let longest = [b - a, c - b, d - c, a - d].map(egui::Vec2::length);
+    area / longest.into_iter().fold(1.0, f32::max)
 }
 
 /// How near the pointer must come to an edge to take hold of it, in points: less than to something that is drawn larger, so

@@ -1,6 +1,6 @@
 //! Pointer and keys on the picture.
 
-use egui::{Key, PointerButton, Pos2, Rect, Response, Ui, Vec2};
+use egui::{Event, Key, PointerButton, Pos2, Rect, Response, Ui, Vec2};
 use zonewright_geometry::{Point, Vector};
 use zonewright_painter::Camera;
 
@@ -14,7 +14,9 @@ use crate::window::{
     panes::PaneAct,
     path_edit::PathEdit,
     path_place::PlacedPath,
+    selection::SelectAct,
     splice_marks::v_name,
+    thing::{Kind, Thing},
     widgets::{Drag, Widgets},
     zones::ZoneAct,
 };
@@ -47,6 +49,14 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets)
     if let Some(Hit::V(index)) = hit {
         widgets.over_next = Some((cx.state.view.side, index));
     }
+    if let Some(pos) = hovered.filter(|_| widgets.drag.is_none()) {
+        let over = match hit {
+            Some(Hit::Point(point)) => Some(Thing::Point(point)),
+            Some(Hit::V(_)) => None,
+            None => hit::part_at(cx.state, camera, pos),
+        };
+        widgets.over_thing = over.map(|thing| (at, thing));
+    }
     if hit.is_none()
         && let Some(pos) = hovered.filter(|_| widgets.drag.is_none())
     {
@@ -64,7 +74,7 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets)
         activate(cx, at);
     }
     if response.clicked() {
-        clicked(cx, seen);
+        clicked(cx, ui, seen);
     }
     if response.drag_started() {
         widgets.drag = begin(cx, ui, seen, widgets);
@@ -94,6 +104,10 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>, widgets: &mut Widgets)
     }
     if response.has_focus() {
         keys(cx, ui, seen);
+        // While something is dragged, letters are its locks.
+        if widgets.drag.is_none() {
+            step_keys(cx, ui);
+        }
     }
 }
 
@@ -104,27 +118,41 @@ fn activate(cx: Cx<'_>, at: usize) {
     }
 }
 
-fn clicked(cx: Cx<'_>, seen: Seen<'_>) {
+fn clicked(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) {
     let Seen { at, rect, response } = seen;
     let camera = &cx.state.panes.pane(at).camera;
     let Some(pos) = response.interact_pointer_pos() else {
         return;
     };
-    match hit::at(cx.state, camera, pos - rect.min) {
-        Some(Hit::Point(point)) => {
-            let picked = cx.state.view.point == Some(point);
-            cx.tx.send(Command::SelectPoint((!picked).then_some(point)));
+    let pos = pos - rect.min;
+    let hit = hit::at(cx.state, camera, pos);
+    let shift = ui.input(|i| {
+        let released =
+            |e: &Event| matches!(e, Event::PointerButton { pressed: false, modifiers, .. } if modifiers.shift);
+        i.events.iter().any(released)
+    });
+    if shift || cx.state.view.selection.from.is_some() {
+        // What is measured to is never spliced.
+        let to = match hit {
+            Some(Hit::Point(point)) => Some(Thing::Point(point)),
+            _ => hit::part_at(cx.state, camera, pos),
+        };
+        if let Some(to) = to {
+            cx.tx.send(Command::Select(SelectAct::MeasureTo(to)));
         }
+        return;
+    }
+    match hit {
+        Some(Hit::Point(point)) => cx.tx.send(Command::Select(SelectAct::Pick(Thing::Point(point)))),
         Some(Hit::V(index)) => {
             if let Some(name) = v_name(cx.state, cx.state.view.side, index) {
                 cx.tx.send(Command::ToggleSplice(cx.state.view.side, name));
             }
         }
-        None => {
-            let picked = cx.state.view.panel.as_ref().map(|(panel, _)| *panel);
-            let panel = hit::panel_at(cx.state, camera, pos - rect.min);
-            cx.tx.send(Command::SelectPanel(panel.filter(|p| picked != Some(*p))));
-        }
+        None => cx.tx.send(match hit::part_at(cx.state, camera, pos) {
+            Some(thing) => Command::Select(SelectAct::Pick(thing)),
+            None => Command::SelectPoint(None),
+        }),
     }
 }
 
@@ -238,6 +266,39 @@ fn wheel(cx: Cx<'_>, ui: &Ui, seen: Seen<'_>) {
         activate(cx, at);
         cx.tx.send(Command::Zoom((pos - rect.min).to_pos2(), factor));
     }
+}
+
+/// Keys that pick the next thing of a kind; with shift, the one before.
+const STEPS: [(Key, Kind); 4] = [
+    (Key::N, Kind::Point),
+    (Key::V, Kind::Vertex),
+    (Key::E, Kind::Edge),
+    (Key::P, Kind::Panel),
+];
+
+fn step_keys(cx: Cx<'_>, ui: &Ui) {
+    ui.input(|i| {
+        for event in &i.events {
+            let Event::Key {
+                key,
+                pressed: true,
+                modifiers,
+                ..
+            } = event
+            else {
+                continue;
+            };
+            if modifiers.command || modifiers.alt {
+                continue;
+            }
+            if let Some((_, kind)) = STEPS.iter().find(|(step, _)| step == key) {
+                cx.tx.send(Command::Select(SelectAct::Step(*kind, modifiers.shift)));
+            }
+            if *key == Key::Enter && cx.state.view.selection.from.is_some() {
+                cx.tx.send(Command::Select(SelectAct::Measure));
+            }
+        }
+    });
 }
 
 /// Arrows turn a free view and move a measured drawing along, with shift the other way round; plus and minus zoom.

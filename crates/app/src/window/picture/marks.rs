@@ -3,7 +3,7 @@
 use zonewright_geometry::{Place, Point, Shell, Side};
 use zonewright_painter::{Colour, Mark, MarkKind, Tone};
 
-use super::{front_marks, hit};
+use super::{front_marks, headroom_marks, hit};
 use crate::window::state::State;
 
 /// More marks than this would hide the picture and slow the window down.
@@ -15,8 +15,10 @@ pub(super) fn marks(state: &State, over: Option<(Side, usize)>) -> Vec<Mark> {
     panel_marks(state, &mut marks);
     path_marks(state, &mut marks);
     v_marks(state, &mut marks);
+    super::select_marks::select_marks(state, &mut marks);
     front_marks::letter_marks(state, &mut marks);
     front_marks::preview_marks(state, over, &mut marks);
+    headroom_marks::marks(state, &mut marks);
     if let Some(place) = state.view.shown.and_then(|shown| shown.place(&state.derived)) {
         place_marks(&state.derived.shell, &place, Tone::Selection, &mut marks);
     }

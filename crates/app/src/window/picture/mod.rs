@@ -3,11 +3,13 @@
 mod backdrop;
 mod bar;
 mod front_marks;
+mod headroom_marks;
 mod hit;
 mod input;
 mod marks;
 mod overlay;
 mod point_snap;
+mod select_marks;
 mod snapping;
 mod zone_drag;
 
@@ -16,8 +18,8 @@ pub(super) use zone_drag::ZoneWork;
 use std::sync::Arc;
 
 use egui::{Rect, Role, Sense, Ui, WidgetInfo};
-use zonewright_geometry::Side;
-use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Tints, with_egui};
+use zonewright_geometry::{Shell, Side, solve::Headroom};
+use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Scene, Tints, with_egui};
 
 use super::{
     command::Command,
@@ -28,6 +30,8 @@ use super::{
     view::ViewState,
     widgets::Widgets,
 };
+
+pub(super) use select_marks::{dimension_text, measured};
 
 /// The accessible name of the picture.
 pub const NAME: &str = "Picture of the shell";
@@ -44,6 +48,7 @@ pub(super) struct Key {
     view: ViewState,
     over: Option<(Side, usize)>,
     detail: Detail,
+    headroom: Vec<Headroom>,
 }
 
 /// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
@@ -72,6 +77,7 @@ pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     let size = ui.available_size().max(egui::vec2(50.0, 50.0));
     let (whole, _) = ui.allocate_exact_size(size, Sense::hover());
     widgets.over_pane = None;
+    widgets.over_thing = None;
     widgets.zones.over = None;
     let layout = cx.state.panes.layout;
     for (at, rect) in places(layout, whole, GAP).into_iter().enumerate() {
@@ -148,6 +154,7 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
         with_egui::mesh_into(&cache.picture, corner, Arc::make_mut(&mut cache.mesh.1));
     }
     with_egui::paint_with(&cache.picture, &cache.mesh.1, &painter, rect);
+    hover_ui(cx, at, rect, &painter, widgets);
     if panes.layout != Layout::One && panes.active() == at {
         let edge = egui::Stroke::new(1.5, cx.state.colours().accent());
         painter.rect_stroke(rect, 0.0, edge, egui::StrokeKind::Inside);
@@ -160,6 +167,24 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
     }
 }
 
+/// Draws what a click would pick over the picture, which is not put together anew for it.
+fn hover_ui(cx: Cx<'_>, at: usize, rect: Rect, painter: &egui::Painter, widgets: &Widgets) {
+    let over = widgets.over_thing.as_ref().filter(|(pane, _)| *pane == at);
+    let Some((_, thing)) = over else { return };
+    let mut marks = Vec::new();
+    select_marks::hover_marks(cx.state, thing, &mut marks);
+    let look = Look {
+        palette: palette(cx.state),
+        ..Look::default()
+    };
+    let nothing = Shell::default();
+    let camera = &cx.state.panes.pane(at).camera;
+    let picture = Scene::quick(&nothing).picture(&nothing, camera, &look, &Tints::default(), &marks);
+    // Without the ground that a whole picture has: it would cover what is there.
+    let mesh = with_egui::mesh(&picture, rect.min.to_vec2());
+    painter.add(egui::Shape::mesh(mesh));
+}
+
 fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
     let state = cx.state;
     let camera = state.panes.pane(at).camera;
@@ -170,6 +195,7 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         view: state.view.clone(),
         over: widgets.over,
         detail: widgets.frames.detail(),
+        headroom: headroom_marks::wanted(state),
     };
     if widgets.cache[at].key.as_ref() == Some(&key) {
         return;

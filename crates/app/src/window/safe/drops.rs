@@ -44,7 +44,7 @@ pub(in super::super) fn what(files: &[PathBuf]) -> Dropped {
         Dropped::Backdrop(file.clone())
     } else {
         refused(format!(
-            "{} is neither a design nor a path that can be imported.",
+            "{} is neither a design, nor a path that can be imported, nor a mesh.",
             name(file)
         ))
     }

@@ -8,7 +8,7 @@ use super::{act::StripAct, sight::Sight, words};
 use crate::window::{command::Command, fields::wide_choice, panels::Cx, widgets::Widgets};
 
 /// Draws the head.
-pub(super) fn head_ui(cx: Cx<'_>, ui: &mut Ui) {
+pub(super) fn head_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets, lane: Rect) {
     ui.spacing_mut().item_spacing.y = 3.0;
     let side = cx.state.view.side;
     ui.horizontal(|ui| {
@@ -23,6 +23,9 @@ pub(super) fn head_ui(cx: Cx<'_>, ui: &mut Ui) {
                 cx.tx.send(Command::SetSide(to));
             }
         }
+        ui.add_space(ui.spacing().item_spacing.x);
+        ui.spacing_mut().item_spacing.x = 3.0;
+        zoom_ui(cx, ui, widgets, lane);
     });
     let front = &cx.state.derived.shell.fronts[usize::from(side == Side::Aft)];
     let closed = if front.closed { ", closed" } else { "" };
@@ -72,37 +75,36 @@ fn repeat_ui(cx: Cx<'_>, ui: &mut Ui, side: Side) {
     }
 }
 
-/// Draws the line above the lane: what is pointed at, and the zoom.
-pub(super) fn line_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets, lane: Rect) {
-    let flat = &cx.state.derived.strip_on(cx.state.view.side).flat;
-    let strip = &mut widgets.strip;
-    let shown = strip.told.as_ref().map(|told| told.line.clone()).unwrap_or_default();
-    ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
-        let sight = Sight::new(flat, lane, strip.zoom);
-        let middle = lane.center().x;
-        if button(ui, "Whole", "Show the whole front") {
-            strip.zoom = sight.scaled(flat, sight.least() / sight.scale, middle);
-        }
-        if button(ui, "+", "Zoom the strip in") {
-            strip.zoom = sight.scaled(flat, super::keys::ZOOM_STEP, middle);
-        }
-        if button(ui, "−", "Zoom the strip out") {
-            strip.zoom = sight.scaled(flat, 1.0 / super::keys::ZOOM_STEP, middle);
-        }
-        ui.with_layout(Layout::left_to_right(Align::Center), |ui| {
-            let (text, name) = if shown.is_empty() {
-                let hint = RichText::new("Point at a notch to see its panel. A click splices, a drag fills.").weak();
-                (hint, "Nothing is pointed at in the strip")
-            } else {
-                (RichText::new(&shown), shown.as_str())
-            };
-            let label = ui.add(Label::new(text).truncate());
-            label.widget_info(|| WidgetInfo::labeled(AccessRole::Label, true, name));
-        });
+/// Draws the line above the lane: what is pointed at.
+pub(super) fn line_ui(ui: &mut Ui, widgets: &Widgets) {
+    let shown = widgets.strip.told.as_ref().map_or("", |told| told.line.as_str());
+    let hint = "Point at a notch to see its panel. A click splices, a drag fills.";
+    ui.with_layout(Layout::left_to_right(Align::Center), |ui| {
+        let (text, name) = if shown.is_empty() {
+            (RichText::new(hint).weak(), "Nothing is pointed at in the strip")
+        } else {
+            (RichText::new(shown), shown)
+        };
+        let label = ui.add(Label::new(text.small()).truncate());
+        label.widget_info(|| WidgetInfo::labeled(AccessRole::Label, true, name));
     });
 }
 
-fn button(ui: &mut Ui, text: &str, name: &str) -> bool {
-    let button = ui.add(egui::Button::new(text).small()).on_hover_text(name);
-    button.accessible_name(name).clicked()
+/// The zoom's buttons.
+fn zoom_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets, lane: Rect) {
+    let flat = &cx.state.derived.strip_on(cx.state.view.side).flat;
+    let strip = &mut widgets.strip;
+    let sight = Sight::new(flat, lane, strip.zoom);
+    let middle = lane.center().x;
+    let steps = [
+        ("−", "Zoom the strip out", 1.0 / super::keys::ZOOM_STEP),
+        ("+", "Zoom the strip in", super::keys::ZOOM_STEP),
+        ("All", "Show the whole front", sight.least() / sight.scale),
+    ];
+    for (text, name, factor) in steps {
+        let button = ui.add(egui::Button::new(text).small()).on_hover_text(name);
+        if button.accessible_name(name).clicked() {
+            strip.zoom = sight.scaled(flat, factor, middle);
+        }
+    }
 }

@@ -6,11 +6,15 @@ use zonewright_painter::Palette;
 
 use crate::window::{picture, state::State};
 
+/// How much of the text's colour letters get on a light ground.
+const DARKER: f32 = 0.2;
+
 /// The colours of zones.
 #[derive(Debug)]
 pub(super) struct ZoneColours<'a> {
     shell: &'a Shell,
     palette: Palette,
+    light: bool,
 }
 
 impl<'a> ZoneColours<'a> {
@@ -20,6 +24,7 @@ impl<'a> ZoneColours<'a> {
         Self {
             shell: &state.derived.shell,
             palette: picture::palette(state),
+            light: !state.view.dark,
         }
     }
 
@@ -30,6 +35,12 @@ impl<'a> ZoneColours<'a> {
         let letter = letters[drawn % letters.len().max(1)].letter;
         let zone = &self.shell.zones[self.shell.zone_of(letter) as usize];
         let colour = self.palette.category(zone.counts_as as usize);
+        // A thin line in a pale colour is hard to see on a light ground.
+        let colour = if self.light {
+            colour.mix(self.palette.text, DARKER)
+        } else {
+            colour
+        };
         Color32::from_rgb(colour.r, colour.g, colour.b)
     }
 }

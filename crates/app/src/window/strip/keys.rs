@@ -1,6 +1,6 @@
 //! Keys of the strip while it has the focus: arrows move along the notches, with shift they choose a span.
 
-use egui::{EventFilter, Key, Modifiers, Response, Ui};
+use egui::{Event, EventFilter, Key, Modifiers, Response, Ui};
 use zonewright_geometry::Side;
 
 use super::{
@@ -35,41 +35,56 @@ pub(super) fn handle(cx: Cx<'_>, ui: &Ui, ground: &Response, strip: &mut StripWi
     let open = cx.state.derived.open_on(side);
     strip.cursor = strip.cursor.min(count - 1);
     let page = sight.vs(flat, open).len().max(LEAST_PAGE);
-    let (to, shift) = ui.input(|i| {
-        let mut to = strip.cursor;
-        let times = |key| i.num_presses(key);
-        if i.modifiers.command || i.modifiers.alt {
-            return (to, false);
+    // Key by key, with the modifiers that each came with: a slow frame may bring several.
+    let known = span.filter(|s| s.range(&cx.state.derived).is_some());
+    let (mut to, mut anchor) = (strip.cursor, known.map(|s| s.anchor));
+    let mut moved = false;
+    ui.input(|i| {
+        for event in &i.events {
+            let Event::Key {
+                key,
+                pressed: true,
+                modifiers,
+                ..
+            } = event
+            else {
+                continue;
+            };
+            if modifiers.command || modifiers.alt {
+                continue;
+            }
+            let next = match key {
+                Key::ArrowRight => to + 1,
+                Key::ArrowLeft => to.saturating_sub(1),
+                Key::PageDown => to + page,
+                Key::PageUp => to.saturating_sub(page),
+                Key::Home => 0,
+                Key::End => count - 1,
+                _ => continue,
+            };
+            anchor = modifiers.shift.then(|| anchor.unwrap_or(to));
+            to = next.min(count - 1);
+            moved = true;
         }
-        to = (to + times(Key::ArrowRight) + page * times(Key::PageDown)).min(count - 1);
-        to = to.saturating_sub(times(Key::ArrowLeft) + page * times(Key::PageUp));
-        if 0 < times(Key::Home) {
-            to = 0;
-        }
-        if 0 < times(Key::End) {
-            to = count - 1;
-        }
-        (to, i.modifiers.shift)
     });
-    let moved = to != strip.cursor;
-    if moved {
+    let span = if moved {
         let revision = cx.state.derived.revision;
-        let known = span.filter(|s| s.range(&cx.state.derived).is_some());
-        let next = shift.then(|| Span {
+        let next = anchor.map(|anchor| Span {
             side,
             revision,
-            anchor: known.map_or(strip.cursor, |s| s.anchor),
+            anchor,
             to,
         });
         if next != cx.state.view.strip.span {
             cx.tx.send(Command::Strip(StripAct::Span(next)));
         }
         strip.cursor = to;
-        reveal(cx, strip, side, sight);
-    }
-    if moved {
         strip.by_key = true;
-    }
+        reveal(cx, strip, side, sight);
+        next
+    } else {
+        known
+    };
     let picks = || {
         let range = span.and_then(|s| s.range(&cx.state.derived));
         Picks {

@@ -213,11 +213,9 @@ fn numbers(cx: Cx<'_>, ui: &Ui, sight: &Sight, side: Side) {
     let font = egui::TextStyle::Small.resolve(ui.style());
     let painter = ui.painter_at(sight.lane);
     let foot = sight.lane.bottom() - if sight.is_silhouette() { 10.0 } else { 2.0 };
-    let first = vs.start.next_multiple_of(step);
-    let shown = (first..vs.end)
-        .step_by(step)
-        .map(|at| if step == 1 { at } else { at.max(1) - 1 });
-    for at in shown.filter(|at| vs.contains(at)) {
+    // Numbers count from 1: the first shown is the first that the step divides.
+    let first = (vs.start + 1).next_multiple_of(step) - 1;
+    for at in (first..vs.end).step_by(step) {
         painter.text(
             pos2(x(at), foot),
             egui::Align2::CENTER_BOTTOM,

@@ -26,10 +26,12 @@ use super::{panels::Cx, widgets::Widgets};
 pub const NAME: &str = "Front strip";
 
 /// Width of the head, in points.
-const HEAD: f32 = 152.0;
+const HEAD: f32 = 186.0;
 /// Height of the line that says what is pointed at, and of the overview, in points.
 const LINE: f32 = 22.0;
-const OVERVIEW: f32 = 12.0;
+const OVERVIEW: f32 = 10.0;
+/// Space between the lane and the overview, in points.
+const BETWEEN: f32 = 3.0;
 
 /// What the strip keeps between frames.
 #[derive(Debug, Default)]
@@ -60,15 +62,22 @@ pub(super) fn strip_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     let (left, right) = room.split_left_right_at_x(room.left() + HEAD);
     let right = Rect::from_min_max(right.min + vec2(gap, 0.0), right.max);
     let (line, below) = right.split_top_bottom_at_y(right.top() + LINE);
-    let lane = below.shrink2(vec2(0.0, 2.0));
-    let lane = Rect::from_min_max(lane.min, lane.max - vec2(0.0, OVERVIEW));
-    let bar = Rect::from_min_max(egui::pos2(lane.left(), lane.bottom() + 4.0), below.max);
+    let flat = &cx.state.derived.strip_on(cx.state.view.side).flat;
+    let mut lane = below;
+    // Whether all is in sight does not depend on the height of the lane.
+    let scrolls = !sight::Sight::new(flat, lane, widgets.strip.zoom).is_whole(flat);
+    if scrolls {
+        lane.max.y -= OVERVIEW + BETWEEN;
+    }
+    let bar = Rect::from_min_max(egui::pos2(lane.left(), lane.bottom() + BETWEEN), below.max);
     ui.scope_builder(UiBuilder::new().max_rect(left).id_salt("strip head"), |ui| {
-        head::head_ui(cx, ui);
+        head::head_ui(cx, ui, widgets, lane);
     });
     lane::lane_ui(cx, ui, widgets, lane);
-    overview::overview_ui(cx, ui, widgets, bar, lane);
+    if scrolls {
+        overview::overview_ui(cx, ui, widgets, bar, lane);
+    }
     ui.scope_builder(UiBuilder::new().max_rect(line).id_salt("strip line"), |ui| {
-        head::line_ui(cx, ui, widgets, lane);
+        head::line_ui(ui, widgets);
     });
 }

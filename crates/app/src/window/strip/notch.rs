@@ -1,6 +1,8 @@
 //! A notch: an open V in the strip.
 
-use egui::{Painter, Pos2, Rect, Response, Role as AccessRole, Sense, Shape, Stroke, Ui, WidgetInfo, pos2, vec2};
+use egui::{
+    Painter, Pos2, Rect, Response, Role as AccessRole, Sense, Shape, Stroke, Tooltip, Ui, WidgetInfo, pos2, vec2,
+};
 use zonewright_geometry::Side;
 
 use super::{
@@ -120,7 +122,9 @@ pub(super) fn notch_ui(
             .add(Shape::convex_polygon(marker, colours.accent(), Stroke::NONE));
     }
     if pointed.v == Some(at) && !by_key {
-        response.on_hover_ui(|ui| tooltip(cx, ui, side, at, pointed));
+        // Above the line that says the same in short.
+        let tip = Tooltip::for_enabled(&response).gap(super::LINE + 6.0);
+        tip.show(|ui| tooltip(cx, ui, side, at, pointed));
     }
 }
 

@@ -5,7 +5,7 @@ use egui::{CornerRadius, Rect, Role as AccessRole, Sense, Stroke, StrokeKind, Ui
 use super::sight::{Sight, Zoom};
 use crate::window::{panels::Cx, widgets::Widgets};
 
-/// Draws the bar, unless the whole front is in sight.
+/// Draws the bar; it is there while not all of the front is in sight.
 pub(super) fn overview_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets, bar: Rect, lane: Rect) {
     let side = cx.state.view.side;
     let front = cx.state.derived.strip_on(side);
@@ -14,9 +14,6 @@ pub(super) fn overview_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets, bar: Rect,
     let sight = Sight::new(flat, lane, strip.zoom);
     let whole = sight.whole(flat);
     let seen = f64::from(lane.width());
-    if whole <= seen + 0.5 {
-        return;
-    }
     let share = f64::from(bar.width()) / whole;
     let response = ui.interact(bar, ui.scope_id().with("overview"), Sense::CLICK | Sense::DRAG);
     let letters = sight.letters(flat);

@@ -89,6 +89,12 @@ impl Sight {
         flat.width() * self.scale + 2.0 * f64::from(MARGIN)
     }
 
+    /// Whether the whole front is in sight, to half a point.
+    #[must_use]
+    pub(super) fn is_whole(&self, flat: &Flat) -> bool {
+        self.whole(flat) <= f64::from(self.lane.width()) + 0.5
+    }
+
     fn most_offset(&self, flat: &Flat) -> f64 {
         (self.whole(flat) - f64::from(self.lane.width())).max(0.0)
     }

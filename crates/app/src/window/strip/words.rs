@@ -18,9 +18,8 @@ pub(super) fn v_name(state: &State, side: Side, at: usize) -> String {
 }
 
 fn panel(state: &State, panel: &PanelAhead) -> String {
-    let [a, b] = panel.sides_mm;
-    let [a, b] = [a.max(b), a.min(b)].map(|mm| state.units().length(mm));
-    format!("{a} × {b}, {}", text::degrees(panel.acute.degrees(), 2))
+    let sides = state.units().sides(panel.sides_mm);
+    format!("{sides}, {}", text::degrees(panel.acute.degrees(), 2))
 }
 
 /// What filling an open V makes.
@@ -50,18 +49,22 @@ pub(super) fn spliced(state: &State, side: Side, at: usize) -> String {
             None => sizes.push((size, 1)),
         }
     }
-    let sizes: Vec<String> = sizes
+    if let [(size, count)] = &sizes[..] {
+        return match count {
+            1 => format!("spliced: 1 panel of {size}"),
+            n => format!("spliced: {n} panels of {size}"),
+        };
+    }
+    let listed: Vec<String> = sizes
         .into_iter()
-        .map(
-            |(size, count)| {
-                if count == 1 { size } else { format!("{count} of {size}") }
-            },
-        )
+        .map(|(size, count)| match count {
+            1 => size,
+            n => format!("{n} of {size}"),
+        })
         .collect();
     match panels.len() {
         0 => "spliced: no panel".to_owned(),
-        1 => format!("spliced: 1 panel, {}", sizes.join("; ")),
-        n => format!("spliced: {n} panels, {}", sizes.join("; ")),
+        n => format!("spliced: {n} panels, {}", listed.join("; ")),
     }
 }
 
@@ -80,15 +83,15 @@ pub(super) fn v_line(state: &State, side: Side, at: usize) -> String {
     } else {
         spliced(state, side, at)
     };
-    let mut line = format!("{}: {}; {splice}", v_name(state, side, at), filled(state, side, at));
+    let mut name = v_name(state, side, at);
     if state.view.strip.repeat.is_some() {
         let reached = clicked(state, side, &[at]);
-        line += &format!("; at {} Vs", reached.len());
+        name += &format!(", at {} Vs", reached.len());
         if !all_turn(state, side, &reached) {
-            line += ", directions not turned";
+            name += ", directions not turned";
         }
     }
-    line
+    format!("{name}: {}; {splice}", filled(state, side, at))
 }
 
 /// What filling a span makes, in one line. `at` are the Vs of the span.
