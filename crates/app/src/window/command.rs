@@ -10,8 +10,9 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct,
-    selection::SelectAct, solving::SolveAct, strip::StripAct, view::Hand, zones::ZoneAct,
+    animating::AnimateAct, backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit,
+    readings::ReadingAct, safe::SafeAct, selection::SelectAct, solving::SolveAct, strip::StripAct, view::Hand,
+    zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -138,6 +139,8 @@ pub enum Command {
     Safe(SafeAct),
     /// Solves for wanted figures.
     Solving(SolveAct),
+    /// Plays or writes an animation.
+    Animate(AnimateAct),
     /// Light or dark.
     SwapTheme,
     /// Finds a command by its name.
@@ -216,6 +219,7 @@ impl Command {
             Self::SwapTheme,
             Self::Find,
         ]);
+        all.extend(AnimateAct::listed().map(Self::Animate));
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(super::safe::listed());
         all.extend(SelectAct::listed().map(Self::Select));
@@ -298,6 +302,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
+            Self::Animate(act) => return act.words(),
             Self::Safe(act) => return act.words(),
             Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
