@@ -2,8 +2,8 @@
 
 #![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
 
-mod backdrop;
 mod animation;
+mod backdrop;
 mod common;
 mod editing;
 mod import;
