@@ -7,7 +7,7 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    animating::Animating, backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs,
+    animating::Animating, backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, guide::Guide,
     history::History, panes::Panes, readings::Remembered, safe::Safe, solving::Solving, theme::Theme, view::ViewState,
     worker::Worker,
 };
@@ -61,6 +61,8 @@ pub struct State {
     pub animating: Animating,
     /// Solving for wanted figures.
     pub solving: Solving,
+    /// The first shell.
+    pub guide: Guide,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -89,6 +91,7 @@ impl State {
             remembered: None,
             animating: Animating::default(),
             solving: Solving::default(),
+            guide: Guide::default(),
             theme: Theme::bundled(),
         }
     }
