@@ -9,7 +9,7 @@ use super::{
     derived::Counts,
     execute,
     frames::{FrameLog, Frames},
-    ladder, menu,
+    guide, ladder, menu,
     panels::{self, Cx},
     panes::PaneAct,
     path_box, picture, prompts,
@@ -84,6 +84,13 @@ impl App {
     #[must_use]
     pub fn with_path(mut self, path: Option<PathBuf>) -> Self {
         self.state.path = path;
+        self
+    }
+
+    /// Offers the first shell, to whoever has not opened a design before.
+    #[must_use]
+    pub const fn with_offer(mut self, offered: bool) -> Self {
+        self.state.guide.offered = offered;
         self
     }
 
@@ -261,6 +268,7 @@ impl App {
         if let Some(seconds) = state.derived.settle(&design, &mut state.worker, now) {
             ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
         }
+        guide::follow(state);
         execute::fit_when_pending(state);
         execute::refit(state, dragging || state.derived.by_drag());
     }
@@ -326,6 +334,7 @@ impl eframe::App for App {
         CentralPanel::no_frame().frame(side).show(ui, |ui| {
             safe::banners_ui(cx, ui);
             prompts::banners_ui(cx, ui);
+            guide::card_ui(cx, ui);
             picture::picture_ui(cx, ui, widgets);
             ladder::banner_ui(cx, ui, ui.max_rect());
         });

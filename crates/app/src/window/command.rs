@@ -10,8 +10,9 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit, readings::ReadingAct, safe::SafeAct,
-    selection::SelectAct, solving::SolveAct, strip::StripAct, view::Hand, zones::ZoneAct,
+    backdrop::BackdropAct, guide::GuideAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit,
+    readings::ReadingAct, safe::SafeAct, selection::SelectAct, solving::SolveAct, strip::StripAct, view::Hand,
+    zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -140,6 +141,10 @@ pub enum Command {
     Solving(SolveAct),
     /// Light or dark.
     SwapTheme,
+    /// Shows or hides what the colours mean.
+    SwapLegend,
+    /// Begins or leaves the first shell.
+    Guide(GuideAct),
     /// Finds a command by its name.
     Find,
     /// Types a path instead of waiting for the system's dialog.
@@ -213,7 +218,9 @@ impl Command {
             Self::Readings(ReadingAct::Remember),
             Self::Readings(ReadingAct::GoBack),
             Self::Readings(ReadingAct::Forget),
+            Self::SwapLegend,
             Self::SwapTheme,
+            Self::Guide(GuideAct::Begin),
             Self::Find,
         ]);
         all.extend(PaneAct::listed().map(Self::Pane));
@@ -301,6 +308,8 @@ impl Command {
             Self::Safe(act) => return act.words(),
             Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),
+            Self::SwapLegend => ("Legend", "Shows or hides what the colours mean."),
+            Self::Guide(act) => return act.words(),
             Self::Find => ("Find a command…", "Lists all commands and finds them by name."),
             Self::TypePath => ("Type a path", "Opens the program's own box for paths."),
             Self::Dismiss => ("Close", "Closes the message that is open."),

@@ -7,6 +7,7 @@ use zonewright_shop::text::Units;
 use super::{
     backdrop::BackdropAct,
     command::Command,
+    guide::{self, GuideAct, Target},
     kinds,
     ladder::LadderAct,
     panels::Cx,
@@ -17,7 +18,7 @@ use super::{
 /// Draws the menu bar.
 pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
     MenuBar::new().ui(ui, |ui| {
-        ui.menu_button("File", |ui| {
+        let file = ui.menu_button("File", |ui| {
             ui.menu_button("New", |ui| {
                 for kind in &kinds::KINDS {
                     named(cx, ui, kind.name, Command::New(kind.word));
@@ -41,6 +42,7 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             ui.separator();
             items(cx, ui, [Command::Quit]);
         });
+        guide::outline(cx, ui, Target::File, file.response.rect);
         ui.menu_button("Edit", |ui| {
             let history = &cx.state.history;
             undo(cx, ui, "Undo", history.undo_label(), Command::Undo);
@@ -83,9 +85,11 @@ pub(super) fn menu_ui(cx: Cx<'_>, ui: &mut Ui) {
             );
             items(cx, ui, [Command::HiddenEdges]);
             ui.separator();
-            items(cx, ui, [Command::SwapTheme]);
+            items(cx, ui, [Command::SwapLegend, Command::SwapTheme]);
         });
-        items(cx, ui, [Command::Find]);
+        ui.menu_button("Help", |ui| {
+            items(cx, ui, [Command::Guide(GuideAct::Begin), Command::Find])
+        });
         ui.with_layout(egui::Layout::right_to_left(egui::Align::Center), |ui| right_ui(cx, ui));
     });
 }

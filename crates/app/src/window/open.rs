@@ -45,6 +45,8 @@ pub fn run(options: &Options) -> Result<(), String> {
     let session = session::file();
     let remembered = session.as_deref().map(session::read).unwrap_or_default();
     let first_shown = first_design(options.file.as_deref(), &remembered)?;
+    // Whoever has opened or saved a design before knows the way.
+    let newcomer = options.file.is_none() && remembered.last().is_none();
     let log = options.frame_times.as_deref().map(FrameLog::create).transpose()?;
     // Once the window has been there, a failure is no reason to open another one on the design as it was.
     let shown = Rc::new(Cell::new(false));
@@ -61,7 +63,10 @@ pub fn run(options: &Options) -> Result<(), String> {
             } = first_shown;
             let app = App::new(&cc.egui_ctx, design, path).with_frame_log(log);
             Ok(Box::new(
-                app.with_session(session).with_stamp(stamp).with_message(message),
+                app.with_session(session)
+                    .with_stamp(stamp)
+                    .with_message(message)
+                    .with_offer(newcomer),
             ))
         });
         eframe::run_native("zonewright", native(renderer, remembered.size()), create)

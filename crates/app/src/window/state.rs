@@ -7,8 +7,8 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, history::History, panes::Panes,
-    readings::Remembered, safe::Safe, solving::Solving, theme::Theme, view::ViewState, worker::Worker,
+    backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, guide::Guide, history::History,
+    panes::Panes, readings::Remembered, safe::Safe, solving::Solving, theme::Theme, view::ViewState, worker::Worker,
 };
 use crate::document::Design;
 
@@ -58,6 +58,8 @@ pub struct State {
     pub remembered: Option<Remembered>,
     /// Solving for wanted figures.
     pub solving: Solving,
+    /// The first shell.
+    pub guide: Guide,
     /// Colours and sizes.
     pub theme: Theme,
 }
@@ -85,6 +87,7 @@ impl State {
             safe: Safe::default(),
             remembered: None,
             solving: Solving::default(),
+            guide: Guide::default(),
             theme: Theme::bundled(),
         }
     }

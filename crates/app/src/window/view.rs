@@ -32,6 +32,8 @@ pub struct ViewState {
     pub hidden_edges: bool,
     /// What colours say.
     pub colour: ColourBy,
+    /// Whether the picture says what they mean.
+    pub legend: bool,
     /// The live front.
     pub side: Side,
     /// The directions in hand.
@@ -66,6 +68,7 @@ impl Default for ViewState {
             faces: Faces::ShadedWithEdges,
             hidden_edges: false,
             colour: ColourBy::Zone,
+            legend: true,
             side: Side::Fore,
             hand: Hand::default(),
             strip: StripView::default(),

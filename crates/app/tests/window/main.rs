@@ -5,8 +5,10 @@
 mod backdrop;
 mod common;
 mod editing;
+mod first_shell;
 mod import;
 mod ladder;
+mod legend;
 mod panels;
 mod panes;
 mod readings;

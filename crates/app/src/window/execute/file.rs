@@ -32,6 +32,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         | Command::OpenPath(_)
         | Command::OpenSample
         | Command::Safe(_)
+        | Command::Guide(_)
         | Command::Quit
             if state.history.unsaved() =>
         {
@@ -75,6 +76,7 @@ fn run_saved(state: &mut State, command: Command) {
         Command::Unsaved(answer) => answered(state, answer),
         Command::Show(design, path) => show(state, *design, path),
         Command::Safe(act) => super::safe::run(state, act),
+        Command::Guide(act) => super::guide::run(state, act),
         _ => {}
     }
 }
@@ -104,7 +106,7 @@ fn make_new(state: &mut State, word: &str) {
 }
 
 /// Shows a design in place of the one that is there; its history begins.
-fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
+pub(super) fn show(state: &mut State, design: Design, path: Option<PathBuf>) {
     show_history(state, History::new(design, true), path);
 }
 

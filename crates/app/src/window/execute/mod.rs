@@ -3,6 +3,7 @@
 mod backdrop;
 mod file;
 mod finish;
+mod guide;
 mod ladder;
 mod panes;
 mod path;
@@ -26,7 +27,7 @@ pub(crate) use path::moved_path;
 pub(crate) use select::picked;
 pub(crate) use solving::follow_search;
 
-use super::{command::Command, state::State};
+use super::{command::Command, guide::GuideAct, state::State};
 
 /// Carries a command out.
 pub(super) fn run(state: &mut State, command: Command) {
@@ -44,6 +45,8 @@ pub(super) fn run(state: &mut State, command: Command) {
         | Command::Quit
         | Command::Unsaved(_)
         | Command::Show(..) => file::run(state, command),
+        Command::Guide(GuideAct::Begin) => file::run(state, command),
+        Command::Guide(act) => guide::run(state, act),
         Command::Undo => match state.history.undo() {
             Some(label) => state.say(format!("Undone: {label}")),
             None => state.say("Nothing to undo"),

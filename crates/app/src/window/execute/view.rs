@@ -2,7 +2,7 @@
 
 use zonewright_geometry::Side;
 
-use super::{panes, select};
+use super::{guide, panes, select};
 use crate::window::{
     command::Command,
     state::State,
@@ -22,6 +22,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::SetFaces(faces) => view.faces = faces,
         Command::HiddenEdges => view.hidden_edges = !view.hidden_edges,
         Command::SetColour(colour) => view.colour = colour,
+        Command::SwapLegend => view.legend = !view.legend,
         Command::SetDragRule(rule) => view.rule = rule,
         Command::SetSide(side) => view.side = side,
         Command::SwapSide => {
@@ -55,8 +56,8 @@ pub(super) fn run(state: &mut State, command: Command) {
     }
 }
 
-/// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then a measure that was begun,
-/// then what is picked.
+/// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then the first shell, then a
+/// measure that was begun, then what is picked.
 fn dismiss(state: &mut State) {
     if state.view.strip.span.take().is_some() {
         return;
@@ -69,6 +70,10 @@ fn dismiss(state: &mut State) {
         return;
     }
     if state.message.take().is_some() {
+        return;
+    }
+    if state.guide.going.is_some() {
+        guide::leave(state);
         return;
     }
     // One looks at the whole again before anything is let go.

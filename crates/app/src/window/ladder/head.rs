@@ -3,13 +3,19 @@
 use egui::{Align, Frame, Layout, Margin, Rect, RichText, Ui, UiBuilder, pos2};
 
 use super::{LadderAct, add_menu};
-use crate::window::{command::Command, panels::Cx};
+use crate::window::{
+    command::Command,
+    guide::{self, Target},
+    panels::Cx,
+};
 
 /// Draws the buttons for courses and steps, and where one is.
 pub(super) fn head_ui(cx: Cx<'_>, ui: &mut Ui) {
     let climbed = cx.state.view.ladder.climbed;
     ui.horizontal(|ui| {
-        button(cx, ui, "Add a course", Command::AddCourse);
+        guide::framed(cx, ui, Target::Courses, |ui| {
+            button(cx, ui, "Add a course", Command::AddCourse);
+        });
         ui.with_layout(Layout::right_to_left(Align::Center), |ui| {
             button(cx, ui, "−", Command::RemoveCourse);
         });

@@ -30,6 +30,7 @@ pub(super) use spread_panel::SpreadCache;
 
 use super::{
     command::{Command, Sender},
+    guide::{self, Target},
     ladder::LadderAct,
     state::State,
     widgets::Widgets,
@@ -68,15 +69,19 @@ pub(super) fn left_ui(cx: Cx<'_>, ui: &mut Ui) {
         .auto_shrink(false)
         .id_salt("left")
         .show(ui, |ui| {
-            section(ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
+            section(cx, ui, "Start", true, |ui| start_panel::start_ui(cx, ui));
             if let Some(backdrop) = &cx.state.design().backdrop {
-                section(ui, "Backdrop", true, |ui| backdrop_panel::backdrop_ui(cx, ui, backdrop));
+                section(cx, ui, "Backdrop", true, |ui| {
+                    backdrop_panel::backdrop_ui(cx, ui, backdrop)
+                });
             }
-            section(ui, "Path", true, |ui| path_table::path_ui(cx, ui));
-            section(ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
-            section(ui, "Zones", true, |ui| zones_panel::zones_ui(cx, ui));
-            section(ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
-            section(ui, "Tolerances", false, |ui| tolerances_panel::tolerances_ui(cx, ui));
+            section(cx, ui, "Path", true, |ui| path_table::path_ui(cx, ui));
+            section(cx, ui, "Directions in hand", true, |ui| directions::hand_ui(cx, ui));
+            section(cx, ui, "Zones", true, |ui| zones_panel::zones_ui(cx, ui));
+            section(cx, ui, "Placement", false, |ui| placement_panel::placement_ui(cx, ui));
+            section(cx, ui, "Tolerances", false, |ui| {
+                tolerances_panel::tolerances_ui(cx, ui)
+            });
         });
 }
 
@@ -87,29 +92,47 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
         .id_salt("right")
         .show(ui, |ui| {
             if !selection_panel::is_empty(cx) {
-                section(ui, "Selection", true, |ui| selection_panel::selection_ui(cx, ui));
+                section(cx, ui, "Selection", true, |ui| selection_panel::selection_ui(cx, ui));
             }
-            section(ui, "Readouts", true, |ui| {
+            section(cx, ui, "Readouts", true, |ui| {
                 if cx.state.view.ladder.climbed.is_some() {
                     ui.colored_label(cx.state.colours().accent(), "Of the part that is shown");
                 }
                 readouts::readouts_ui(cx, ui);
             });
-            section(ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
-            section(ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
-            section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
+            section(cx, ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
+            section(cx, ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
+            section(cx, ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
         });
 }
 
+/// How many rows of a table are shown before it scrolls: so many that a long one leaves the sections after it in sight.
+fn rows_shown(ui: &Ui, rows: usize) -> usize {
+    /// Rows that are shown in any case, and at most.
+    const ROWS: std::ops::RangeInclusive<usize> = 5..=12;
+    /// The part of the window's height that a table may take.
+    const SHARE: f32 = 0.2;
+    let row = ui.spacing().interact_size.y + ui.spacing().item_spacing.y;
+    let room = (ui.ctx().content_rect().height() * SHARE / row) as usize;
+    rows.min(room.clamp(*ROWS.start(), *ROWS.end()))
+}
+
 /// A section that can be folded away.
-fn section(ui: &mut Ui, title: &str, open: bool, contents: impl FnOnce(&mut Ui)) {
-    egui::CollapsingHeader::new(egui::RichText::new(title).heading())
+fn section(cx: Cx<'_>, ui: &mut Ui, title: &str, open: bool, contents: impl FnOnce(&mut Ui)) {
+    let shown = egui::CollapsingHeader::new(egui::RichText::new(title).heading())
         .id_salt(title)
         .default_open(open)
         .show_unindented(ui, |ui| {
             contents(ui);
             ui.add_space(ui.spacing().item_spacing.y);
         });
+    // Of a section that is folded away, the first shell marks the head; of the findings always, for they may be many.
+    let mut wanted = guide::wanted(cx).iter().copied();
+    if let Some(target) = wanted.find(|target| target.section() == Some(title))
+        && (shown.openness < 1.0 || target == Target::Findings)
+    {
+        guide::outline(cx, ui, target, shown.header_response.rect);
+    }
 }
 
 /// The head of a card: what it is about, and a button that closes it.

@@ -7,9 +7,6 @@ use zonewright_geometry::{Point, Role, start::DragRule};
 use super::{Cx, small};
 use crate::window::{command::Command, fields, path_edit::PathEdit, path_place::PlacedPath};
 
-/// Rows that are shown before the table scrolls.
-const ROWS_SHOWN: usize = 8;
-
 /// Draws the table of the start's path.
 pub(super) fn path_ui(cx: Cx<'_>, ui: &mut Ui) {
     let Some(path) = &cx.state.derived.path else {
@@ -93,7 +90,7 @@ fn free_ui(cx: Cx<'_>, ui: &mut Ui, path: &PlacedPath) {
 
 fn table(cx: Cx<'_>, ui: &mut Ui, path: &PlacedPath) {
     let row = ui.spacing().interact_size.y;
-    let height = (row + ui.spacing().item_spacing.y) * (path.own.len().min(ROWS_SHOWN) + 1) as f32 + 2.0;
+    let height = (row + ui.spacing().item_spacing.y) * (super::rows_shown(ui, path.own.len()) + 1) as f32 + 2.0;
     ui.spacing_mut().item_spacing.x = 4.0;
     TableBuilder::new(ui)
         .id_salt("path")

@@ -15,9 +15,6 @@ use crate::window::{
     zones::{SnapStar, ZoneAct},
 };
 
-/// Rows that are shown before the table scrolls.
-const ROWS_SHOWN: usize = 8;
-
 /// Draws the zones.
 pub(super) fn zones_ui(cx: Cx<'_>, ui: &mut Ui) {
     let shell = &cx.state.derived.shell;
@@ -68,7 +65,7 @@ fn table(cx: Cx<'_>, ui: &mut Ui) {
         Palette::light()
     };
     let row = ui.spacing().interact_size.y;
-    let shown = shell.zones.len().min(ROWS_SHOWN);
+    let shown = super::rows_shown(ui, shell.zones.len());
     let height = (row + ui.spacing().item_spacing.y) * (shown + 1) as f32 + 2.0;
     ui.spacing_mut().item_spacing.x = 4.0;
     TableBuilder::new(ui)

@@ -6,6 +6,7 @@ mod front_marks;
 mod headroom_marks;
 mod hit;
 mod input;
+mod legend;
 mod marks;
 mod overlay;
 mod point_snap;
@@ -24,6 +25,7 @@ use zonewright_painter::{Camera, Colour, Faces, Look, Palette, Scene, Tints, wit
 use super::{
     command::Command,
     frames::Detail,
+    guide,
     panels::Cx,
     panes::{Layout, PaneAct},
     state::State,
@@ -83,7 +85,13 @@ pub(super) fn picture_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
     for (at, rect) in places(layout, whole, GAP).into_iter().enumerate() {
         pane_ui(cx, ui, at, rect, widgets);
         bar::pane_bar_ui(cx, ui, at, rect);
+        if at == 0 && cx.state.derived.shell.panels.is_empty() {
+            empty_ui(cx, ui, rect);
+        }
         overlay::overlay_ui(cx, ui, at, rect, &widgets.zones);
+        if at == 0 {
+            legend::legend_ui(cx, ui, rect);
+        }
     }
 }
 
@@ -159,12 +167,6 @@ fn pane_ui(cx: Cx<'_>, ui: &Ui, at: usize, rect: Rect, widgets: &mut Widgets) {
         let edge = egui::Stroke::new(1.5, cx.state.colours().accent());
         painter.rect_stroke(rect, 0.0, edge, egui::StrokeKind::Inside);
     }
-    if at == 0 {
-        backdrop::legend_ui(cx, ui, rect);
-    }
-    if at == 0 && cx.state.derived.shell.panels.is_empty() {
-        empty_ui(cx, ui, rect);
-    }
 }
 
 /// Draws what a click would pick over the picture, which is not put together anew for it.
@@ -232,24 +234,35 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
 }
 
 /// What an empty picture says.
-fn empty_ui(cx: Cx<'_>, ui: &Ui, rect: egui::Rect) {
-    let lines = [
-        "Nothing has grown yet.",
+fn empty_ui(cx: Cx<'_>, ui: &mut Ui, rect: Rect) {
+    const LINES: [&str; 4] = [
         "Choose a start on the left and give its parameters.",
         "Add a course to fill every open V at once.",
         "Click an open V in the strip below to splice there.",
         "The findings on the right say what stands in the way.",
     ];
-    let step = cx.state.theme.sizes.text * 1.8;
-    let top = rect.center().y - step * 2.0;
-    for (at, line) in lines.into_iter().enumerate() {
-        let pos = egui::pos2(rect.center().x, top + step * at as f32);
-        let font = egui::TextStyle::Body.resolve(ui.style());
-        let colour = if at == 0 {
-            cx.state.colours().text()
-        } else {
-            cx.state.colours().text_weak()
-        };
-        ui.painter().text(pos, egui::Align2::CENTER_CENTER, line, font, colour);
-    }
+    let guided = cx.state.guide.going.is_some();
+    // The card of the first shell says what to do, while there is one.
+    let lines: &[&str] = if guided { &[] } else { &LINES };
+    let step = ui.text_style_height(&egui::TextStyle::Body) + ui.spacing().item_spacing.y;
+    // At the foot, so that the path in the middle stays to be seen.
+    let above = rect.height() - step * (lines.len() as f32 + if guided { 1.5 } else { 3.5 });
+    let room = Rect::from_min_max(egui::pos2(rect.left() + 16.0, rect.top() + above.max(36.0)), rect.max);
+    let builder = egui::UiBuilder::new()
+        .max_rect(room.with_max_x(rect.right() - 16.0))
+        .id_salt("empty");
+    ui.scope_builder(builder, |ui| {
+        // A text that can be selected would take the drags that turn the picture.
+        ui.style_mut().interaction.selectable_labels = false;
+        ui.vertical_centered(|ui| {
+            ui.label("Nothing has grown yet.");
+            for line in lines {
+                ui.weak(*line);
+            }
+            if !guided {
+                ui.add_space(ui.spacing().item_spacing.y);
+                guide::offer_ui(cx, ui);
+            }
+        });
+    });
 }

@@ -20,7 +20,11 @@ pub(super) use choice::{clicked, directions_at, previewed, reached};
 use egui::{Rect, Ui, UiBuilder, vec2};
 pub use front::StripFront;
 
-use super::{panels::Cx, widgets::Widgets};
+use super::{
+    guide::{self, Target},
+    panels::Cx,
+    widgets::Widgets,
+};
 
 /// The accessible name of the strip.
 pub const NAME: &str = "Front strip";
@@ -74,6 +78,7 @@ pub(super) fn strip_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
         head::head_ui(cx, ui, widgets, lane);
     });
     lane::lane_ui(cx, ui, widgets, lane);
+    guide::outline(cx, ui, Target::Strip, lane);
     if scrolls {
         overview::overview_ui(cx, ui, widgets, bar, lane);
     }
