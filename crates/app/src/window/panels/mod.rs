@@ -101,10 +101,10 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
                 }
                 readouts::readouts_ui(cx, ui);
             });
-            section(ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
-            section(ui, "Animation", false, |ui| animation_panel::animation_ui(cx, ui));
-            section(ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
-            section(ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
+            section(cx, ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
+            section(cx, ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
+            section(cx, ui, "Animation", false, |ui| animation_panel::animation_ui(cx, ui));
+            section(cx, ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
         });
 }
 
