@@ -9,6 +9,7 @@ use std::{collections::BTreeSet, fs, path::Path};
 use proptest::{strategy::Strategy, strategy::ValueTree, test_runner::TestRunner};
 use zonewright::document::{Design, bundled, parse_design, read_design, to_text};
 use zonewright::report::report;
+use zonewright::window::Command;
 use zonewright_geometry::{Act, Code, Level, Outside, grow};
 
 fn docs() -> std::path::PathBuf {
@@ -188,4 +189,37 @@ fn bundled_designs_grow_clean() {
         let stop = report.findings.iter().find(|f| f.level() != Level::Note);
         assert!(stop.is_none(), "{name}: {stop:?}");
     }
+}
+
+#[test]
+fn the_manual_names_every_key_and_has_every_picture_that_it_shows() {
+    let folder = docs().join("manual");
+    let keys = fs::read_to_string(folder.join("keys.md")).unwrap();
+    let named: BTreeSet<&str> = keys.split([' ', ',', '(', ')', '|', '\n']).collect();
+    for command in Command::listed() {
+        if let Some(shortcut) = command.shortcut() {
+            let shortcut = shortcut.format(&egui::ModifierNames::NAMES, false);
+            assert!(
+                named.contains(shortcut.as_str()),
+                "{shortcut}: {}",
+                command.words().name
+            );
+        }
+    }
+    let mut shown = BTreeSet::new();
+    for file in fs::read_dir(&folder).unwrap().map(|f| f.unwrap().path()) {
+        if file.extension().is_none_or(|e| e != "md") {
+            continue;
+        }
+        for link in fs::read_to_string(&file).unwrap().split("](").skip(1) {
+            let target = link.split([')', '#']).next().unwrap();
+            assert!(folder.join(target).exists(), "{}: {target}", file.display());
+            shown.extend(target.strip_suffix(".png").map(str::to_owned));
+        }
+    }
+    let scenes = include_str!("../examples/manual_pictures/scenes.rs")
+        .split("name: \"")
+        .skip(1);
+    let scenes: BTreeSet<String> = scenes.map(|s| s.split('"').next().unwrap().to_owned()).collect();
+    assert_eq!(shown, scenes, "pictures shown, scenes made");
 }
