@@ -2,6 +2,7 @@
 
 #![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
 
+mod animating;
 mod designs;
 mod program;
 mod solving;

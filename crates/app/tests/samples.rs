@@ -33,7 +33,12 @@ fn corpus() -> BTreeMap<String, Shell> {
         let path = entry.unwrap().path();
         let name = path.file_stem().unwrap().to_string_lossy().into_owned();
         let (shell, _) = grow(&read_design(&path).unwrap().shape);
-        if !shell.panels.is_empty() {
+        // Where rims were joined within a tolerance panels are a little bent; the ray cast knows only parallelograms.
+        let flat = |panel| {
+            let [a, b, c, d] = shell.corner_points(panel);
+            (c - b).distance(d - a) < 1e-6
+        };
+        if !shell.panels.is_empty() && (0..shell.panels.len() as u32).all(flat) {
             shells.insert(name, shell);
         }
     }

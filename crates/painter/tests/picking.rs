@@ -125,7 +125,7 @@ fn picking_agrees_with_painting() {
     );
     camera.distance *= 0.15;
     let look = zonewright_painter::Look::default();
-    let painted = common::rasterise(&scene.picture(&shell, &camera, &look, &Default::default(), &[]));
+    let painted = common::ray_cast::rasterise(&scene.picture(&shell, &camera, &look, &Default::default(), &[]));
     let mut wrong = 0;
     for (k, &panel) in painted.iter().enumerate() {
         let pos = [(k % 60) as f32 + 0.5, (k / 60) as f32 + 0.5];

@@ -1,17 +1,14 @@
 //! `animate`: the growth of a design, or one parameter that runs between two values, as moving pictures.
 
-use std::{
-    fs,
-    path::{Path, PathBuf},
-};
+use std::path::PathBuf;
 
 use clap::Args;
 use zonewright_geometry::parameter::parameter;
 
 use super::values;
 use crate::{
-    animation::{Film, Kind, Subject, kind_of, write},
-    document::{read_design, write_whole},
+    animation::{Film, Subject, kind_of, save, write},
+    document::read_design,
 };
 
 /// What `animate` is told.
@@ -71,24 +68,6 @@ impl Animate {
             .map_err(|what| format!("cannot animate {}: {what}", self.file.display()))?;
         let kind = kind_of(&self.output);
         let written = write(&film, kind, view, self.size, rate, &mut |_| true)?;
-        save(&self.output, kind, written)
+        save(&self.output, written)
     }
-}
-
-/// Writes one file, or a folder of frames.
-fn save(output: &Path, kind: Kind, written: Vec<(String, Vec<u8>)>) -> Result<(), String> {
-    let unwritten =
-        |path: &Path, cause: std::io::Error| format!("cannot write {}: {cause}; choose another place", path.display());
-    if kind == Kind::Frames {
-        fs::create_dir_all(output).map_err(|cause| unwritten(output, cause))?;
-    }
-    for (name, bytes) in written {
-        let path = if name.is_empty() {
-            output.to_path_buf()
-        } else {
-            output.join(name)
-        };
-        write_whole(&path, &bytes).map_err(|cause| unwritten(&path, cause))?;
-    }
-    Ok(())
 }

@@ -257,6 +257,9 @@ impl App {
         let state = &mut self.state;
         execute::follow_search(state);
         execute::follow_fit(state);
+        if let Some(seconds) = execute::follow_animation(state, now) {
+            ctx.request_repaint_after(std::time::Duration::from_secs_f64(seconds));
+        }
         let design = std::sync::Arc::clone(state.design());
         execute::keep_climbed(state);
         state.derived.climb(state.view.ladder.climbed);

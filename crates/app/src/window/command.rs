@@ -10,9 +10,9 @@ use zonewright_painter::{ColourBy, Faces, Projection, View};
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropAct, guide::GuideAct, ladder::LadderAct, panes::PaneAct, path_edit::PathEdit,
-    readings::ReadingAct, safe::SafeAct, selection::SelectAct, solving::SolveAct, strip::StripAct, view::Hand,
-    zones::ZoneAct,
+    animating::AnimateAct, backdrop::BackdropAct, guide::GuideAct, ladder::LadderAct, panes::PaneAct,
+    path_edit::PathEdit, readings::ReadingAct, safe::SafeAct, selection::SelectAct, solving::SolveAct, strip::StripAct,
+    view::Hand, zones::ZoneAct,
 };
 use crate::document::Design;
 
@@ -139,6 +139,8 @@ pub enum Command {
     Safe(SafeAct),
     /// Solves for wanted figures.
     Solving(SolveAct),
+    /// Plays or writes an animation.
+    Animate(AnimateAct),
     /// Light or dark.
     SwapTheme,
     /// Shows or hides what the colours mean.
@@ -223,6 +225,7 @@ impl Command {
             Self::Guide(GuideAct::Begin),
             Self::Find,
         ]);
+        all.extend(AnimateAct::listed().map(Self::Animate));
         all.extend(PaneAct::listed().map(Self::Pane));
         all.extend(super::safe::listed());
         all.extend(SelectAct::listed().map(Self::Select));
@@ -305,6 +308,7 @@ impl Command {
             Self::SelectPoint(_) => ("Pick a point", "Picks a point of the path."),
             Self::SelectPanel(_) => ("Pick a panel", "Picks a panel and shows its measures."),
             Self::Readings(act) => return act.words(),
+            Self::Animate(act) => return act.words(),
             Self::Safe(act) => return act.words(),
             Self::Solving(act) => return act.words(),
             Self::SwapTheme => ("Light or dark", "Changes between the light and the dark look."),

@@ -12,7 +12,7 @@ use std::{
 
 use crate::import::BACKDROPS;
 
-use super::{backdrop::BackdropAct, command::Command, execute::ENDING};
+use super::{animating::AnimateAct, backdrop::BackdropAct, command::Command, execute::ENDING};
 
 /// An answer of "nothing" that comes faster than this was not given by a user: there is no dialog service. Measured: 3 to
 /// 4 ms without one.
@@ -34,6 +34,8 @@ pub enum Asked {
     Save,
     /// A folder to export into.
     Export,
+    /// A file for an animation, or a folder for its frames.
+    Animation,
 }
 
 impl Asked {
@@ -46,6 +48,7 @@ impl Asked {
             Self::Backdrop => "Load a backdrop",
             Self::Save => "Save the design as",
             Self::Export => "Export into a folder",
+            Self::Animation => "Save the animation (.gif, .png, or a folder)",
         }
     }
 
@@ -58,6 +61,7 @@ impl Asked {
             Self::Backdrop => "Load",
             Self::Save => "Save",
             Self::Export => "Export",
+            Self::Animation => "Save",
         }
     }
 
@@ -69,6 +73,7 @@ impl Asked {
             Self::Import => &IMPORTS,
             Self::Backdrop => &BACKDROPS,
             Self::Export => &[],
+            Self::Animation => &["gif", "png"],
         }
     }
 
@@ -81,6 +86,7 @@ impl Asked {
             Self::Backdrop => Command::Backdrop(BackdropAct::LoadPath(path)),
             Self::Save => Command::SaveTo(path),
             Self::Export => Command::ExportTo(path),
+            Self::Animation => Command::Animate(AnimateAct::SaveTo(path)),
         }
     }
 }
@@ -129,6 +135,7 @@ impl Dialogs {
         let stem = name.strip_suffix(&format!(".{ENDING}")).unwrap_or(name);
         let name = match asked {
             Asked::Save => format!("{}.{ENDING}", stem.to_lowercase().replace(' ', "-")),
+            Asked::Animation => format!("{}.gif", stem.to_lowercase().replace(' ', "-")),
             Asked::Open | Asked::Import | Asked::Backdrop | Asked::Export => String::new(),
         };
         self.start = (folder, name);
@@ -205,6 +212,10 @@ impl Dialogs {
                     Asked::Backdrop => dialog.add_filter("Backdrops", &BACKDROPS).pick_file(),
                     Asked::Save => dialog.add_filter("Designs", &[ENDING]).set_file_name(name).save_file(),
                     Asked::Export => dialog.pick_folder(),
+                    Asked::Animation => dialog
+                        .add_filter("Animations", &["gif", "png"])
+                        .set_file_name(name)
+                        .save_file(),
                 };
                 // Nobody listens any more when the question was closed meanwhile.
                 let _ = send.send(path);

@@ -4,6 +4,7 @@
 //! (`execute`), an undo stack of snapshots (`history`), and everything that follows from the design kept by revision
 //! (`derived`).
 
+mod animating;
 mod app;
 mod backdrop;
 mod backdrop_view;
@@ -47,6 +48,7 @@ mod worker;
 mod zone_table;
 mod zones;
 
+pub use animating::{AnimateAct, Animating, Playing, Wish};
 pub use app::App;
 pub use backdrop::{BackdropAct, BackdropState};
 pub use backdrop_view::BackdropView;

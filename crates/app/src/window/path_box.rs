@@ -36,7 +36,7 @@ pub(super) fn path_box_ui(cx: Cx<'_>, ui: &Ui, widgets: &mut Widgets) {
         entries_ui(ui, &mut widgets.path, own.asked);
         let entered = field.lost_focus() && ui.input(|i| i.key_pressed(Key::Enter));
         ui.horizontal(|ui| {
-            let replaces = own.asked == Asked::Save && widgets.path.exists;
+            let replaces = matches!(own.asked, Asked::Save | Asked::Animation) && widgets.path.exists;
             let text = if replaces {
                 "Replace the file"
             } else {
@@ -131,7 +131,7 @@ fn entries_ui(ui: &mut Ui, path: &mut PathText, asked: Asked) {
         // A folder that was clicked keeps the name that was typed.
         let name = Path::new(&path.text)
             .file_name()
-            .filter(|_| asked == Asked::Save && chosen.is_dir());
+            .filter(|_| matches!(asked, Asked::Save | Asked::Animation) && chosen.is_dir());
         let full = name
             .filter(|n| Path::new(n).extension().is_some())
             .map_or_else(|| chosen.clone(), |n| chosen.join(n));

@@ -7,8 +7,9 @@ use zonewright_painter::Camera;
 use zonewright_shop::text::Units;
 
 use super::{
-    backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, guide::Guide, history::History,
-    panes::Panes, readings::Remembered, safe::Safe, solving::Solving, theme::Theme, view::ViewState, worker::Worker,
+    animating::Animating, backdrop::BackdropState, command::Command, derived::Derived, dialogs::Dialogs, guide::Guide,
+    history::History, panes::Panes, readings::Remembered, safe::Safe, solving::Solving, theme::Theme, view::ViewState,
+    worker::Worker,
 };
 use crate::document::Design;
 
@@ -56,6 +57,8 @@ pub struct State {
     pub safe: Safe,
     /// The state that the readouts are compared with.
     pub remembered: Option<Remembered>,
+    /// Animations.
+    pub animating: Animating,
     /// Solving for wanted figures.
     pub solving: Solving,
     /// The first shell.
@@ -86,6 +89,7 @@ impl State {
             closing: false,
             safe: Safe::default(),
             remembered: None,
+            animating: Animating::default(),
             solving: Solving::default(),
             guide: Guide::default(),
             theme: Theme::bundled(),

@@ -2,6 +2,7 @@
 
 #![expect(clippy::unwrap_used, reason = "a test may stop where it stands")]
 
+mod animation;
 mod backdrop;
 mod common;
 mod editing;

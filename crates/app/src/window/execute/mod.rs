@@ -1,5 +1,6 @@
 //! The executor: the only code that changes the state of the window.
 
+mod animating;
 mod backdrop;
 mod file;
 mod finish;
@@ -18,6 +19,7 @@ mod strip;
 mod view;
 mod zones;
 
+pub(crate) use animating::follow_animation;
 pub(crate) use backdrop::follow_fit;
 pub(crate) use file::{ENDING, sentence};
 pub(crate) use finish::keep_picked;
@@ -86,6 +88,7 @@ pub(super) fn run(state: &mut State, command: Command) {
         Command::Safe(act) if act.replaces_design() => file::run(state, Command::Safe(act)),
         Command::Safe(act) => safe::run(state, act),
         Command::Readings(act) => readings::run(state, act),
+        Command::Animate(act) => animating::run(state, act),
         Command::Solving(act) => solving::run(state, act),
         Command::TypePath => {
             if let Some(asked) = state.dialogs.waiting_for() {

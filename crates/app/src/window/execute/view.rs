@@ -59,6 +59,9 @@ pub(super) fn run(state: &mut State, command: Command) {
 /// Closes what is open: a span that is being chosen and the search first, then a question, then a message, then the first shell, then a
 /// measure that was begun, then what is picked.
 fn dismiss(state: &mut State) {
+    if state.animating.playing.take().is_some() {
+        return state.say("The design is shown as it is");
+    }
     if state.view.strip.span.take().is_some() {
         return;
     }

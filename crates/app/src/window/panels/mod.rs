@@ -1,5 +1,6 @@
 //! The panels beside the picture.
 
+mod animation_panel;
 mod backdrop_panel;
 mod curve_fields;
 mod directions;
@@ -102,6 +103,7 @@ pub(super) fn right_ui(cx: Cx<'_>, ui: &mut Ui, widgets: &mut Widgets) {
             });
             section(cx, ui, "Findings", true, |ui| findings_panel::findings_ui(cx, ui));
             section(cx, ui, "Solve for", false, |ui| solve_panel::solve_ui(cx, ui, widgets));
+            section(cx, ui, "Animation", false, |ui| animation_panel::animation_ui(cx, ui));
             section(cx, ui, "Spread", false, |ui| spread_panel::spread_ui(cx, ui, widgets));
         });
 }

@@ -51,6 +51,8 @@ pub(super) struct Key {
     over: Option<(Side, usize)>,
     detail: Detail,
     headroom: Vec<Headroom>,
+    /// The frame of the animation that plays.
+    played: Option<usize>,
 }
 
 /// Colours of the picture: those of the painter, with the window's own for what belongs to the window.
@@ -198,6 +200,7 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         over: widgets.over,
         detail: widgets.frames.detail(),
         headroom: headroom_marks::wanted(state),
+        played: state.animating.playing.as_ref().map(|p| p.at().0),
     };
     if widgets.cache[at].key.as_ref() == Some(&key) {
         return;
@@ -214,6 +217,17 @@ fn put_together(cx: Cx<'_>, at: usize, widgets: &mut Widgets) {
         cull: uncrossed,
         ..Look::default()
     };
+    if let Some(playing) = &state.animating.playing {
+        let cache = &mut widgets.cache[at];
+        let (shell, tints) = (&playing.shell, Tints::default());
+        playing
+            .scene
+            .picture_into(shell, &camera, &look, &tints, &[], &mut cache.picture);
+        cache.key = Some(key);
+        cache.mesh.0 = None;
+        widgets.pictures += 1;
+        return;
+    }
     let shares = derived.backdrop.shares(state.view.without_sign);
     let tints = Tints {
         family: Some(&derived.families),
