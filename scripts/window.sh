@@ -1,12 +1,16 @@
 # A real window on a display of its own, drawn by software; sourced by the scripts beside it, not run.
 
-room='' server='' window='' window_id=''
+room='' home=() server='' window='' window_id=''
 
 # begin_room: a folder that goes away at the end, with a home in which nobody has set anything.
 begin_room() {
     room=$(mktemp -d)
     mkdir "$room/home"
     touch "$room/number" "$room/log"
+    home=(
+        env HOME="$room/home" XDG_CONFIG_HOME="$room/home" XDG_DATA_HOME="$room/home" XDG_STATE_HOME="$room/home"
+        ZONEWRIGHT_STATE_DIR="$room/state" LIBGL_ALWAYS_SOFTWARE=1
+    )
     trap end_room EXIT
 }
 
@@ -46,19 +50,22 @@ begin_display() {
     unset WAYLAND_DISPLAY WAYLAND_SOCKET
 }
 
-# begin_window PROGRAM [ARGUMENT...]: starts it in the room's home and waits up to a minute for its window, which then has the keyboard.
+# at_home COMMAND...: runs a program with the room's home and drivers in software.
+at_home() { "${home[@]}" "$@"; }
+
+# begin_window PROGRAM [ARGUMENT...]: starts it at home and waits up to two minutes for its window, which then has the keyboard.
 begin_window() {
-    env HOME="$room/home" XDG_CONFIG_HOME="$room/home" XDG_DATA_HOME="$room/home" XDG_STATE_HOME="$room/home" \
-        ZONEWRIGHT_STATE_DIR="$room/state" LIBGL_ALWAYS_SOFTWARE=1 "$@" >"$room/log" 2>&1 &
+    # Not through a function: that would be a shell of its own, and its number not that of the program.
+    "${home[@]}" "$@" >"$room/log" 2>&1 &
     window=$! window_id=''
     local tenths
-    for ((tenths = 0; tenths < 600; tenths++)); do
+    for ((tenths = 0; tenths < 1200; tenths++)); do
         window_id=$(xdotool search --onlyvisible --name zonewright 2>/dev/null | head -n 1 || true)
         if [ -n "$window_id" ]; then break; fi
         alive "$window" || give_up 'the program ended before a window appeared'
         sleep 0.1
     done
-    [ -n "$window_id" ] || give_up 'no window appeared in 60 s'
+    [ -n "$window_id" ] || give_up 'no window appeared in two minutes'
     # With no window manager nobody gives the window the keyboard, so it is given here.
     xdotool windowfocus "$window_id"
     sleep 0.5
@@ -67,15 +74,15 @@ begin_window() {
 # press KEYS...: as xdotool names them.
 press() { xdotool key --clearmodifiers "$@"; }
 
-# close_window: presses the window's own key and waits up to 20 s; it must end well.
+# close_window: presses the window's own key and waits up to a minute; it must end well.
 close_window() {
     press ctrl+q
     local tenths status=0
-    for ((tenths = 0; tenths < 200; tenths++)); do
+    for ((tenths = 0; tenths < 600; tenths++)); do
         alive "$window" || break
         sleep 0.1
     done
-    if alive "$window"; then give_up 'the window did not close in 20 s'; fi
+    if alive "$window"; then give_up 'the window did not close in a minute'; fi
     wait "$window" || status=$?
     window=''
     [ "$status" -eq 0 ] || give_up "the program ended with status $status"
